@@ -73,14 +73,15 @@ final class ReadingCheck {
     private Sensor sensorOf(Point point, Quantity quantity, @Nullable String code) throws RowRefusedException {
         List<Sensor> here = sensors.getOrDefault(point.id(), List.of());
         if (code != null) {
-            Sensor named = here.stream().filter(s -> s.code().equals(code)).findFirst().orElse(null);
+            Sensor named =
+                    here.stream().filter(s -> s.code().equals(code)).findFirst().orElse(null);
             if (named == null) {
                 throw new RowRefusedException("sensor \"" + code + "\" is not registered at " + point.code()
                         + "; registered: " + codes(here));
             }
             if (named.quantity() != quantity) {
-                throw new RowRefusedException("sensor \"" + code + "\" measures "
-                        + named.quantity().code() + ", not " + quantity.code());
+                throw new RowRefusedException(
+                        "sensor \"" + code + "\" measures " + named.quantity().code() + ", not " + quantity.code());
             }
             return named;
         }

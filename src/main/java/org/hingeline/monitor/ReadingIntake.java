@@ -58,12 +58,7 @@ public final class ReadingIntake {
     private final Signals signals;
 
     public ReadingIntake(
-            Storage storage,
-            InstantSource clock,
-            Rules rules,
-            AgeLimits ageLimits,
-            AlertWatch watch,
-            Signals signals) {
+            Storage storage, InstantSource clock, Rules rules, AgeLimits ageLimits, AlertWatch watch, Signals signals) {
         this.storage = storage;
         this.clock = clock;
         this.rules = rules;
@@ -151,15 +146,14 @@ public final class ReadingIntake {
         });
     }
 
-    private void assess(
-            Books books, long siteId, Map<Long, Sensor> sensors, List<StoredReading> fresh, Instant now) {
+    private void assess(Books books, long siteId, Map<Long, Sensor> sensors, List<StoredReading> fresh, Instant now) {
         if (fresh.isEmpty()) {
             return;
         }
         Map<Long, List<StoredReading>> byPoint =
                 fresh.stream().collect(Collectors.groupingBy(reading -> pointOf(sensors, reading)));
-        Map<Long, Point> points = books.place().points(siteId).stream()
-                .collect(Collectors.toMap(Point::id, Function.identity()));
+        Map<Long, Point> points =
+                books.place().points(siteId).stream().collect(Collectors.toMap(Point::id, Function.identity()));
         List<AlertWatch.News> news = new ArrayList<>();
         byPoint.forEach((pointId, readings) -> {
             NavigableSet<Instant> times = new TreeSet<>();

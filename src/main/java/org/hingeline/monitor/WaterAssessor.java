@@ -66,21 +66,20 @@ final class WaterAssessor {
                 candidate.reading().flag());
     }
 
-    private static WaterState compute(
-            long pointId, Instant at, List<InputUsed> used, Map<Quantity, Candidate> found) {
+    private static WaterState compute(long pointId, Instant at, List<InputUsed> used, Map<Quantity, Candidate> found) {
         Candidate ph = need(found, Quantity.PH);
         Candidate temperature = need(found, Quantity.TEMPERATURE);
         Candidate salinity = need(found, Quantity.SALINITY);
         Candidate alkalinity = need(found, Quantity.TOTAL_ALKALINITY);
         PhScale scale = scaleOf(ph);
         CarbonateResult result = CarbonateSystem.solve(
-                Conditions.of(
-                        temperature.reading().value(), salinity.reading().value()),
+                Conditions.of(temperature.reading().value(), salinity.reading().value()),
                 new KnownPair.PhAndAlkalinity(
                         ph.reading().value(), scale, alkalinity.reading().value() * 1e-6));
         List<Note> cautions = new ArrayList<>();
         if (used.stream().anyMatch(input -> input.flag() == Flag.SUSPECT)) {
-            cautions.add(new Note("suspect-input", "an input is marked suspect, and so is everything computed from it"));
+            cautions.add(
+                    new Note("suspect-input", "an input is marked suspect, and so is everything computed from it"));
         }
         if (result instanceof Unsolvable refusal) {
             cautions.add(new Note(refusal.reason().code(), refusal.detail()));

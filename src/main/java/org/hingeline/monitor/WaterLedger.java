@@ -60,7 +60,10 @@ final class WaterLedger {
         if (span == null) {
             return false;
         }
-        List<Instant> times = books.water().timesFrom(span.pointId(), span.after().plusMillis(1), PER_STEP).stream()
+        List<Instant> times = books
+                .water()
+                .timesFrom(span.pointId(), span.after().plusMillis(1), PER_STEP)
+                .stream()
                 .filter(at -> !at.isAfter(span.to()))
                 .toList();
         if (times.isEmpty()) {
