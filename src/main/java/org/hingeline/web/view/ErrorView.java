@@ -26,8 +26,8 @@ public record ErrorView(int status, String title, String detail) {
                         ? new ErrorView(
                                 status,
                                 "Something failed on our side.",
-                                "Readings are still taken in and alerts are still sent unless the water page says otherwise. "
-                                        + "Try again; if it fails again, tell whoever runs this service what you did and when.")
+                                "Try again. If it fails again, do not wait for this page: look at the water itself, and tell whoever "
+                                        + "runs this service what you did and when.")
                         : new ErrorView(
                                 status, "That could not be done.", "Go back, check what was entered and try again.");
         };

@@ -45,7 +45,7 @@ public record StatusView(@Nullable TideStrip strip, List<PathPoint> path) {
             words.append(names(bad)).append(" are past your limits. ");
         }
         if (dark.size() == path.size()) {
-            return "Not known at any point: no fresh measurements.";
+            return "Not known at any point.";
         }
         if (!dark.isEmpty()) {
             words.append("Not known at ").append(names(dark)).append(". ");

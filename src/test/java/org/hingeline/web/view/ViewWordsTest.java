@@ -62,7 +62,7 @@ class ViewWordsTest {
         StatusView status = site("A:FIT", "B:UNKNOWN", "C:UNKNOWN");
         assertThat(status.standing()).isEqualTo(Standing.UNKNOWN);
         assertThat(status.headline()).isEqualTo("Not known at B and C. Water fit at 1 of 3 points.");
-        assertThat(site("A:UNKNOWN").headline()).isEqualTo("Not known at any point: no fresh measurements.");
+        assertThat(site("A:UNKNOWN").headline()).isEqualTo("Not known at any point.");
         assertThat(new StatusView(null, List.of()).standing()).isEqualTo(Standing.UNKNOWN);
     }
 
