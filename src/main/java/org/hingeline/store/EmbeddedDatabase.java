@@ -13,7 +13,9 @@ import java.util.List;
 import java.util.function.Function;
 import javax.sql.DataSource;
 import org.hingeline.monitor.Books;
+import org.jdbi.v3.core.ConnectionFactory;
 import org.jdbi.v3.core.Handle;
+import org.jdbi.v3.core.Handles;
 import org.jdbi.v3.core.Jdbi;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
@@ -41,9 +43,8 @@ public final class EmbeddedDatabase implements Database {
         this.lane = lane;
         this.readers = readers;
         this.readJdbi = Sql.configure(Jdbi.create(readers));
-        this.writeJdbi = Sql.configure(Jdbi.create(() -> {
-            throw new SQLException("the write lane hands out its connection itself");
-        }));
+        this.writeJdbi = Sql.configure(Jdbi.create(new OnLane(lane)));
+        this.writeJdbi.getConfig(Handles.class).setForceEndTransactions(false);
     }
 
     /**
@@ -109,8 +110,8 @@ public final class EmbeddedDatabase implements Database {
 
     @Override
     public <T> T write(Function<Books, T> work) {
-        return lane.transaction(connection -> {
-            try (Handle handle = writeJdbi.open(connection)) {
+        return lane.transaction(same -> {
+            try (Handle handle = writeJdbi.open()) {
                 return work.apply(new JdbiBooks(handle));
             }
         });
@@ -133,6 +134,19 @@ public final class EmbeddedDatabase implements Database {
             statement.execute("SELECT 1");
         } catch (SQLException e) {
             throw new StoreException("the embedded database does not answer: " + e.getMessage(), e);
+        }
+    }
+
+    /** The lane's connection, lent to Jdbi within a transaction of the lane; only the lane ends either. */
+    private record OnLane(WriteLane lane) implements ConnectionFactory {
+        @Override
+        public Connection openConnection() {
+            return lane.held();
+        }
+
+        @Override
+        public void closeConnection(Connection connection) {
+            // the lane keeps its connection open
         }
     }
 
