@@ -166,13 +166,9 @@ public final class EmbeddedDatabase implements Database {
         }
     }
 
-    /** Compares every table with its indexes; for tests and for the command that checks on demand. */
+    /** Compares every table with its indexes, while writers wait; in words, none when all is sound. */
     public List<String> integrityFaults() {
-        try (Connection connection = readers.getConnection()) {
-            return IntegrityCheck.faults(connection);
-        } catch (SQLException e) {
-            throw new StoreException("the check of the tables could not be made: " + e.getMessage(), e);
-        }
+        return lane.transaction(IntegrityCheck::faults);
     }
 
     @Override
