@@ -11,14 +11,16 @@ public final class AlertMachine {
 
     /**
      * @param freshFor how long a value speaks for the present; an older one never raises
-     * @param now the present, for delays that run out between values
+     * @param now the present. A value lets a delay run out only up to its own time, because the value after it may be
+     *     waiting in the same batch; a tick lets it run out up to now. So whoever has fed in all values that have come
+     *     sends a tick after them.
      */
     public static Transition next(Limit limit, Duration freshFor, AlertState state, Event event, Instant now) {
         if (event instanceof Event.Observed observed) {
             return observe(limit, freshFor, state, observed.observation(), now);
         }
         if (event instanceof Event.Tick) {
-            return settle(limit, freshFor, state, now);
+            return tick(limit, freshFor, state, now);
         }
         if (event instanceof Event.Acknowledged) {
             return acknowledge(state);
@@ -31,22 +33,36 @@ public final class AlertMachine {
         if (latest != null && !seen.at().isAfter(latest.at())) {
             return nothing(state);
         }
-        boolean out = limit.side().out(seen.value(), limit.threshold());
-        boolean back = limit.side().back(seen.value(), limit.threshold(), limit.deadband());
-        Instant outSince = out ? orElse(state.outSince(), seen.at()) : null;
-        Instant backSince = back && stands(state.phase()) ? orElse(state.backSince(), seen.at()) : null;
-        return settle(limit, freshFor, new AlertState(state.phase(), outSince, backSince, seen), now);
+        return settle(limit, judged(limit, state, seen), fresh(seen, freshFor, now), seen.at());
     }
 
-    /** Lets the delays run out that have run out by now. */
-    private static Transition settle(Limit limit, Duration freshFor, AlertState state, Instant now) {
+    private static Transition tick(Limit limit, Duration freshFor, AlertState state, Instant now) {
         Observation latest = state.latest();
         if (latest == null) {
             return nothing(state);
         }
-        boolean fresh = !latest.at().plus(freshFor).isBefore(now);
+        boolean fresh = fresh(latest, freshFor, now);
         // while values keep coming the last one holds until now; after that it only vouches for its own time
         Instant known = fresh && now.isAfter(latest.at()) ? now : latest.at();
+        // judged again, because the limit may have been changed since the value came
+        return settle(limit, judged(limit, state, latest), fresh, known);
+    }
+
+    /** The state with this as its latest observation, and the runs out and back that it continues, begins or ends. */
+    private static AlertState judged(Limit limit, AlertState state, Observation seen) {
+        boolean out = limit.side().out(seen.value(), limit.threshold());
+        boolean back = limit.side().back(seen.value(), limit.threshold(), limit.deadband());
+        Instant outSince = out ? orElse(state.outSince(), seen.at()) : null;
+        Instant backSince = back && stands(state.phase()) ? orElse(state.backSince(), seen.at()) : null;
+        return new AlertState(state.phase(), outSince, backSince, seen);
+    }
+
+    private static boolean fresh(Observation latest, Duration freshFor, Instant now) {
+        return !latest.at().plus(freshFor).isBefore(now);
+    }
+
+    /** Lets the delays run out that have run out by the time up to which the water is known. */
+    private static Transition settle(Limit limit, AlertState state, boolean fresh, Instant known) {
         if (stands(state.phase())) {
             if (!ranOut(state.backSince(), limit.offDelay(), known)) {
                 return nothing(state);

@@ -22,6 +22,9 @@ public interface PeopleBook {
     /** What a person may do at one site. */
     record Membership(Site site, Role role) {}
 
+    /** A person and what they may do at the site asked for. */
+    record PersonAtSite(Person person, Role role) {}
+
     /** A signed-in browser. */
     record Session(long personId, String csrf, Instant expiresAt) {}
 
@@ -53,7 +56,7 @@ public interface PeopleBook {
 
     Optional<Person> person(long personId);
 
-    List<Person> peopleOf(long siteId);
+    List<PersonAtSite> peopleOf(long siteId);
 
     /** Adds a person or gives an existing one of that name the new display name and password. */
     long savePerson(String name, String displayName, String passwordHash, Instant now);
@@ -71,6 +74,8 @@ public interface PeopleBook {
     void removeSession(String tokenHash);
 
     void removeSessionsExpiredBy(Instant time);
+
+    void removeSessionsOf(long personId);
 
     long addGatewayKey(long siteId, String gateway, String keyHash, Instant now);
 

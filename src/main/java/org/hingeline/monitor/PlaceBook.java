@@ -1,6 +1,7 @@
 package org.hingeline.monitor;
 
 import java.time.Instant;
+import java.util.Collection;
 import java.util.List;
 import java.util.Optional;
 import org.hingeline.hatchery.Batch;
@@ -28,6 +29,9 @@ public interface PlaceBook {
 
     /** Saves by code within the site; answers the record with its id. */
     Point savePoint(Point point);
+
+    /** Keeps other nodes from working on these points until the transaction ends. */
+    void lockPoints(Collection<Long> pointIds);
 
     /** Every sensor in use at the site. */
     List<Sensor> sensors(long siteId);

@@ -1,0 +1,166 @@
+package org.hingeline.config;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Locale;
+import java.util.Set;
+import java.util.stream.Collectors;
+import org.jspecify.annotations.Nullable;
+import tools.jackson.databind.JsonNode;
+
+/** One level of the settings, read key by key; what is wrong is noted and the default stands in, so that all is seen. */
+final class Section {
+    private final String path;
+    private final @Nullable JsonNode node;
+    private final List<String> problems;
+    private final Set<String> known = new LinkedHashSet<>();
+
+    private Section(String path, @Nullable JsonNode node, List<String> problems) {
+        this.path = path;
+        this.node = node;
+        this.problems = problems;
+    }
+
+    static Section root(JsonNode document, List<String> problems) {
+        return new Section("", mapping("the file", document, problems), problems);
+    }
+
+    Section section(String key) {
+        JsonNode child = value(key);
+        return new Section(at(key) + ".", child == null ? null : mapping(at(key), child, problems), problems);
+    }
+
+    int whole(String key, int standard, int least, int most) {
+        JsonNode value = value(key);
+        return value == null ? standard : whole(at(key), value, standard, least, most);
+    }
+
+    List<Integer> wholes(String key, List<Integer> standard, int least, int most) {
+        JsonNode value = value(key);
+        if (value == null) {
+            return standard;
+        }
+        if (!value.isArray() || value.isEmpty()) {
+            bad(key, value, "a list of one or more whole numbers");
+            return standard;
+        }
+        List<Integer> numbers = new ArrayList<>();
+        for (int i = 0; i < value.size(); i++) {
+            numbers.add(whole(at(key) + "[" + i + "]", value.get(i), least, least, most));
+        }
+        return numbers;
+    }
+
+    double number(String key, double standard, double least, double most) {
+        JsonNode value = value(key);
+        if (value == null) {
+            return standard;
+        }
+        // a number as NaN or infinity is no number here
+        if (value.isNumber() && value.asDouble() >= least && value.asDouble() <= most) {
+            return value.asDouble();
+        }
+        bad(key, value, "a number from " + plain(least) + " to " + plain(most));
+        return standard;
+    }
+
+    String text(String key, String standard) {
+        String given = text(key);
+        return given == null ? standard : given;
+    }
+
+    /** @return nothing when the key is absent, or is there without a value */
+    @Nullable
+    String text(String key) {
+        JsonNode value = value(key);
+        if (value == null) {
+            return null;
+        }
+        if (!value.isString()
+                || value.asString().isBlank()
+                || value.asString().length() > 500
+                || value.asString().chars().anyMatch(Character::isISOControl)) {
+            bad(key, value, "a text of 1 to 500 characters on one line");
+            return null;
+        }
+        return value.asString().strip();
+    }
+
+    <E extends Enum<E>> E choice(String key, E standard) {
+        JsonNode value = value(key);
+        if (value == null) {
+            return standard;
+        }
+        E[] all = standard.getDeclaringClass().getEnumConstants();
+        if (value.isString()) {
+            for (E one : all) {
+                if (word(one).equals(value.asString())) {
+                    return one;
+                }
+            }
+        }
+        bad(key, value, Arrays.stream(all).map(Section::word).collect(Collectors.joining(" or ")));
+        return standard;
+    }
+
+    /** Notes a problem that needs more than one setting to see. */
+    void problem(String key, String what) {
+        problems.add(at(key) + ": " + what);
+    }
+
+    void bad(String key, JsonNode value, String accepted) {
+        problems.add(complaint(at(key), value, accepted));
+    }
+
+    /** To be called when every key has been asked for. What a stray key holds is not repeated: it may be a secret. */
+    void refuseOthers() {
+        if (node == null) {
+            return;
+        }
+        node.propertyNames().stream()
+                .filter(key -> !known.contains(key))
+                .forEach(key -> problem(key, "no such setting; known here: " + String.join(", ", known)));
+    }
+
+    private @Nullable JsonNode value(String key) {
+        known.add(key);
+        JsonNode value = node == null ? null : node.get(key);
+        return value == null || value.isNull() ? null : value;
+    }
+
+    private String at(String key) {
+        return path + key;
+    }
+
+    private int whole(String where, JsonNode value, int standard, int least, int most) {
+        if (value.isIntegralNumber() && value.canConvertToInt() && value.asInt() >= least && value.asInt() <= most) {
+            return value.asInt();
+        }
+        problems.add(complaint(where, value, "a whole number from " + least + " to " + most));
+        return standard;
+    }
+
+    private static @Nullable JsonNode mapping(String where, JsonNode node, List<String> problems) {
+        if (node.isObject()) {
+            return node;
+        }
+        problems.add(complaint(where, node, "settings, one \"key: value\" a line"));
+        return null;
+    }
+
+    private static String complaint(String where, JsonNode value, String accepted) {
+        String shown = value.toString();
+        return where + ": " + (shown.length() > 80 ? shown.substring(0, 80) + "\u2026" : shown)
+                + " is not accepted; give " + accepted;
+    }
+
+    private static String word(Enum<?> choice) {
+        return choice.name().toLowerCase(Locale.ROOT);
+    }
+
+    private static String plain(double number) {
+        return number == Math.rint(number) ? Long.toString((long) number) : Double.toString(number);
+    }
+}

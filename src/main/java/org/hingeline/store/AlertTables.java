@@ -1,0 +1,344 @@
+package org.hingeline.store;
+
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.time.Duration;
+import java.time.Instant;
+import java.util.Collection;
+import java.util.List;
+import java.util.Optional;
+import org.hingeline.alert.AlertState;
+import org.hingeline.alert.Limit;
+import org.hingeline.alert.Observation;
+import org.hingeline.alert.Phase;
+import org.hingeline.alert.Priority;
+import org.hingeline.alert.Side;
+import org.hingeline.measure.Quantity;
+import org.hingeline.monitor.AlertBook;
+import org.jdbi.v3.core.Handle;
+import org.jdbi.v3.core.statement.Update;
+import org.jspecify.annotations.Nullable;
+
+final class AlertTables implements AlertBook {
+    private final Handle handle;
+
+    AlertTables(Handle handle) {
+        this.handle = handle;
+    }
+
+    @Override
+    public List<Limit> limits(long pointId) {
+        return handle.createQuery(
+                        "SELECT * FROM limit_rule WHERE point_id = :point AND retired_at IS NULL ORDER BY name")
+                .bind("point", pointId)
+                .map((row, context) -> limit(row))
+                .list();
+    }
+
+    @Override
+    public Optional<Limit> limit(long pointId, String name) {
+        return handle.createQuery(
+                        "SELECT * FROM limit_rule WHERE point_id = :point AND name = :name AND retired_at IS NULL")
+                .bind("point", pointId)
+                .bind("name", name)
+                .map((row, context) -> limit(row))
+                .findOne();
+    }
+
+    @Override
+    public Optional<Limit> retiredLimit(long pointId, String name) {
+        return handle.createQuery(
+                        "SELECT * FROM limit_rule WHERE point_id = :point AND name = :name AND retired_at IS NOT NULL")
+                .bind("point", pointId)
+                .bind("name", name)
+                .map((row, context) -> limit(row))
+                .findOne();
+    }
+
+    @Override
+    public Limit saveLimit(Limit limit, Instant now) {
+        int updated = bound(limit, """
+                        UPDATE limit_rule
+                        SET quantity = :quantity, side = :side, threshold = :threshold, deadband = :deadband,
+                            on_delay_s = :onDelayS, off_delay_s = :offDelayS, priority = :priority, action = :action,
+                            retired_at = NULL
+                        WHERE point_id = :point AND name = :name
+                        """).execute();
+        if (updated == 0) {
+            long id = Sql.insertedId(bound(limit, """
+                            INSERT INTO limit_rule
+                                (point_id, name, quantity, side, threshold, deadband, on_delay_s, off_delay_s,
+                                 priority, action, created_at)
+                            VALUES (:point, :name, :quantity, :side, :threshold, :deadband, :onDelayS, :offDelayS,
+                                    :priority, :action, :now)
+                            """).bind("now", now));
+            handle.createUpdate("INSERT INTO alert_state (limit_id, phase) VALUES (:limit, :phase)")
+                    .bind("limit", id)
+                    .bind("phase", Phase.NORMAL.code())
+                    .execute();
+        }
+        return limit(limit.pointId(), limit.name()).orElseThrow();
+    }
+
+    private Update bound(Limit limit, String sql) {
+        return handle.createUpdate(sql)
+                .bind("point", limit.pointId())
+                .bind("name", limit.name())
+                .bind("quantity", limit.quantity().code())
+                .bind("side", limit.side().code())
+                .bind("threshold", limit.threshold())
+                .bind("deadband", limit.deadband())
+                .bind("onDelayS", limit.onDelay().toSeconds())
+                .bind("offDelayS", limit.offDelay().toSeconds())
+                .bind("priority", limit.priority().code())
+                .bind("action", limit.action());
+    }
+
+    @Override
+    public void retireLimit(long limitId, Instant now) {
+        Sql.one(
+                handle.createUpdate("UPDATE limit_rule SET retired_at = :now WHERE id = :id AND retired_at IS NULL")
+                        .bind("now", now)
+                        .bind("id", limitId)
+                        .execute(),
+                "taking limit " + limitId + " away");
+    }
+
+    @Override
+    public List<Watched> watchedForUpdate(Collection<Long> pointIds) {
+        if (pointIds.isEmpty()) {
+            return List.of();
+        }
+        return handle.createQuery("""
+                        SELECT l.*, s.phase, s.out_since, s.back_since, s.latest_at, s.latest_value,
+                               s.latest_uncertainty, s.alert_id
+                        FROM alert_state s JOIN limit_rule l ON l.id = s.limit_id
+                        WHERE l.point_id IN (<points>) AND l.retired_at IS NULL
+                        ORDER BY l.id
+                        FOR UPDATE
+                        """)
+                .define("points", Sql.ids(pointIds))
+                .map((row, context) -> watched(row))
+                .list();
+    }
+
+    @Override
+    public Optional<Watched> watchedByAlertForUpdate(long alertId) {
+        return handle.createQuery("""
+                        SELECT l.*, s.phase, s.out_since, s.back_since, s.latest_at, s.latest_value,
+                               s.latest_uncertainty, s.alert_id
+                        FROM alert_state s JOIN limit_rule l ON l.id = s.limit_id
+                        WHERE s.alert_id = :alert
+                        FOR UPDATE
+                        """)
+                .bind("alert", alertId)
+                .map((row, context) -> watched(row))
+                .findOne();
+    }
+
+    @Override
+    public void saveState(long limitId, AlertState state, @Nullable Long alertId) {
+        Observation latest = state.latest();
+        Sql.one(
+                handle.createUpdate("""
+                                UPDATE alert_state
+                                SET phase = :phase, out_since = :outSince, back_since = :backSince,
+                                    latest_at = :latestAt, latest_value = :latestValue,
+                                    latest_uncertainty = :latestUncertainty, alert_id = :alert
+                                WHERE limit_id = :limit
+                                """)
+                        .bind("phase", state.phase().code())
+                        .bindByType("outSince", state.outSince(), Instant.class)
+                        .bindByType("backSince", state.backSince(), Instant.class)
+                        .bindByType("latestAt", latest == null ? null : latest.at(), Instant.class)
+                        .bind("latestValue", latest == null ? null : latest.value())
+                        .bind("latestUncertainty", latest == null ? null : latest.standardUncertainty())
+                        .bind("alert", alertId)
+                        .bind("limit", limitId)
+                        .execute(),
+                "saving the state of limit " + limitId);
+    }
+
+    @Override
+    public List<Long> pointsWithLimits() {
+        return handle.createQuery("SELECT DISTINCT point_id FROM limit_rule WHERE retired_at IS NULL ORDER BY point_id")
+                .mapTo(Long.class)
+                .list();
+    }
+
+    @Override
+    public long open(Alert alert) {
+        return Sql.insertedId(handle.createUpdate("""
+                                INSERT INTO alert
+                                    (site_id, point_id, limit_id, limit_name, quantity, side, threshold, priority,
+                                     action, phase, since_at, raised_at, alert_value, uncertainty)
+                                VALUES (:site, :point, :limit, :name, :quantity, :side, :threshold, :priority,
+                                        :action, :phase, :since, :raised, :alertValue, :uncertainty)
+                                """)
+                .bind("site", alert.siteId())
+                .bind("point", alert.pointId())
+                .bind("limit", alert.limitId())
+                .bind("name", alert.limitName())
+                .bind("quantity", alert.quantity().code())
+                .bind("side", alert.side().code())
+                .bind("threshold", alert.threshold())
+                .bind("priority", alert.priority().code())
+                .bind("action", alert.action())
+                .bind("phase", Phase.UNACKNOWLEDGED.code())
+                .bind("since", alert.since())
+                .bind("raised", alert.raisedAt())
+                .bind("alertValue", alert.value())
+                .bind("uncertainty", alert.uncertainty()));
+    }
+
+    @Override
+    public void reopen(long alertId, Instant since, Instant raisedAt, double value, double uncertainty) {
+        Sql.one(
+                handle.createUpdate("""
+                                UPDATE alert
+                                SET phase = 'unacknowledged', since_at = :since, raised_at = :raised,
+                                    alert_value = :alertValue, uncertainty = :uncertainty, returned_at = NULL
+                                WHERE id = :id AND closed_at IS NULL
+                                """)
+                        .bind("since", since)
+                        .bind("raised", raisedAt)
+                        .bind("alertValue", value)
+                        .bind("uncertainty", uncertainty)
+                        .bind("id", alertId)
+                        .execute(),
+                "raising alert " + alertId + " again");
+    }
+
+    @Override
+    public void acknowledge(long alertId, Instant at, String by, @Nullable String note) {
+        Sql.one(
+                handle.createUpdate("""
+                                UPDATE alert
+                                SET phase = 'acknowledged', acknowledged_at = :at, acknowledged_by = :by,
+                                    acknowledgement_note = :note
+                                WHERE id = :id AND closed_at IS NULL
+                                """)
+                        .bind("at", at)
+                        .bind("by", Sql.fit(by, 80))
+                        .bind("note", note)
+                        .bind("id", alertId)
+                        .execute(),
+                "acknowledging alert " + alertId);
+    }
+
+    @Override
+    public void returned(long alertId, Instant at) {
+        Sql.one(
+                handle.createUpdate("""
+                                UPDATE alert SET phase = 'returned-unacknowledged', returned_at = :at
+                                WHERE id = :id AND closed_at IS NULL
+                                """).bind("at", at).bind("id", alertId).execute(),
+                "noting the return of alert " + alertId);
+    }
+
+    @Override
+    public void close(long alertId, Instant at) {
+        Sql.one(handle.createUpdate("""
+                                UPDATE alert
+                                SET phase = 'normal', returned_at = COALESCE(returned_at, :at), closed_at = :at
+                                WHERE id = :id AND closed_at IS NULL
+                                """).bind("at", at).bind("id", alertId).execute(), "closing alert " + alertId);
+    }
+
+    @Override
+    public Optional<Alert> alert(long siteId, long alertId) {
+        return handle.createQuery("SELECT * FROM alert WHERE site_id = :site AND id = :id")
+                .bind("site", siteId)
+                .bind("id", alertId)
+                .map((row, context) -> alert(row))
+                .findOne();
+    }
+
+    @Override
+    public List<Alert> openAlerts(long siteId) {
+        return handle.createQuery(
+                        "SELECT * FROM alert WHERE site_id = :site AND closed_at IS NULL ORDER BY raised_at DESC, id DESC")
+                .bind("site", siteId)
+                .map((row, context) -> alert(row))
+                .list();
+    }
+
+    @Override
+    public List<Alert> closedAlerts(long siteId, int most) {
+        return handle.createQuery("""
+                        SELECT * FROM alert WHERE site_id = :site AND closed_at IS NOT NULL
+                        ORDER BY closed_at DESC, id DESC LIMIT :most
+                        """)
+                .bind("site", siteId)
+                .bind("most", most)
+                .map((row, context) -> alert(row))
+                .list();
+    }
+
+    private static Limit limit(ResultSet row) throws SQLException {
+        return new Limit(
+                row.getLong("id"),
+                row.getLong("point_id"),
+                row.getString("name"),
+                quantity(row),
+                side(row),
+                row.getDouble("threshold"),
+                row.getDouble("deadband"),
+                Duration.ofSeconds(row.getLong("on_delay_s")),
+                Duration.ofSeconds(row.getLong("off_delay_s")),
+                priority(row),
+                row.getString("action"));
+    }
+
+    private static Watched watched(ResultSet row) throws SQLException {
+        Instant latestAt = Sql.instantOrNull(row, "latest_at");
+        Observation latest = latestAt == null
+                ? null
+                : new Observation(latestAt, row.getDouble("latest_value"), row.getDouble("latest_uncertainty"));
+        return new Watched(
+                limit(row),
+                new AlertState(
+                        Phase.ofCode(row.getString("phase")),
+                        Sql.instantOrNull(row, "out_since"),
+                        Sql.instantOrNull(row, "back_since"),
+                        latest),
+                Sql.longOrNull(row, "alert_id"),
+                Sql.instant(row, "created_at"));
+    }
+
+    private static Alert alert(ResultSet row) throws SQLException {
+        return new Alert(
+                row.getLong("id"),
+                row.getLong("site_id"),
+                row.getLong("point_id"),
+                row.getLong("limit_id"),
+                row.getString("limit_name"),
+                quantity(row),
+                side(row),
+                row.getDouble("threshold"),
+                priority(row),
+                row.getString("action"),
+                Phase.ofCode(row.getString("phase")),
+                Sql.instant(row, "since_at"),
+                Sql.instant(row, "raised_at"),
+                row.getDouble("alert_value"),
+                row.getDouble("uncertainty"),
+                Sql.instantOrNull(row, "acknowledged_at"),
+                row.getString("acknowledged_by"),
+                row.getString("acknowledgement_note"),
+                Sql.instantOrNull(row, "returned_at"),
+                Sql.instantOrNull(row, "closed_at"));
+    }
+
+    private static Quantity quantity(ResultSet row) throws SQLException {
+        return Quantity.ofCode(row.getString("quantity")).orElseThrow();
+    }
+
+    private static Side side(ResultSet row) throws SQLException {
+        return row.getString("side").equals("below") ? Side.BELOW : Side.ABOVE;
+    }
+
+    private static Priority priority(ResultSet row) throws SQLException {
+        return Priority.ofCode(row.getString("priority")).orElseThrow();
+    }
+}

@@ -1,0 +1,133 @@
+package org.hingeline.store;
+
+import java.sql.PreparedStatement;
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.time.Instant;
+import java.util.List;
+import java.util.Optional;
+import org.hingeline.monitor.ReadingBook;
+import org.hingeline.quality.Flag;
+import org.jdbi.v3.core.Handle;
+import org.jdbi.v3.core.statement.PreparedBatch;
+
+final class ReadingTables implements ReadingBook {
+    private final Handle handle;
+
+    ReadingTables(Handle handle) {
+        this.handle = handle;
+    }
+
+    @Override
+    public List<StoredReading> between(long sensorId, Instant from, Instant to) {
+        return handle.createQuery("""
+                        SELECT sensor_id, at, reading_value, flag FROM reading
+                        WHERE sensor_id = :sensor AND at >= :from AND at <= :to ORDER BY at
+                        """)
+                .bind("sensor", sensorId)
+                .bind("from", from)
+                .bind("to", to)
+                .map((row, context) -> reading(row))
+                .list();
+    }
+
+    @Override
+    public Optional<StoredReading> newestBefore(long sensorId, Instant from, Instant before) {
+        return handle.createQuery("""
+                        SELECT sensor_id, at, reading_value, flag FROM reading
+                        WHERE sensor_id = :sensor AND at >= :from AND at < :before AND flag NOT IN (4, 9)
+                        ORDER BY at DESC LIMIT 1
+                        """)
+                .bind("sensor", sensorId)
+                .bind("from", from)
+                .bind("before", before)
+                .map((row, context) -> reading(row))
+                .findOne();
+    }
+
+    @Override
+    public Optional<Instant> newestAt(long pointId) {
+        return handle
+                .createQuery("""
+                        SELECT (SELECT max(r.at) FROM reading r WHERE r.sensor_id = s.id) AS newest
+                        FROM sensor s WHERE s.point_id = :point
+                        """)
+                .bind("point", pointId)
+                .map((row, context) -> Optional.ofNullable(Sql.instantOrNull(row, "newest")))
+                .stream()
+                .flatMap(Optional::stream)
+                .max(Instant::compareTo);
+    }
+
+    /** Plain JDBC: this is the hot path of the whole service. */
+    @Override
+    public void insert(List<StoredReading> readings, long gatewayKeyId, Instant receivedAt) {
+        if (readings.isEmpty()) {
+            return;
+        }
+        String sql = """
+                INSERT INTO reading (sensor_id, at, reading_value, flag, gateway_key_id, received_at)
+                VALUES (?, ?, ?, ?, ?, ?)
+                """;
+        try (PreparedStatement insert = handle.getConnection().prepareStatement(sql)) {
+            for (StoredReading reading : readings) {
+                insert.setLong(1, reading.sensorId());
+                Sql.setInstant(insert, 2, reading.at());
+                insert.setDouble(3, reading.value());
+                insert.setInt(4, reading.flag().code());
+                insert.setLong(5, gatewayKeyId);
+                Sql.setInstant(insert, 6, receivedAt);
+                insert.addBatch();
+            }
+            insert.executeBatch();
+        } catch (SQLException e) {
+            throw new StoreException("readings could not be stored: " + e.getMessage(), e);
+        }
+    }
+
+    @Override
+    public void insertRefused(List<RefusedRow> rows) {
+        if (rows.isEmpty()) {
+            return;
+        }
+        PreparedBatch batch = handle.prepareBatch("""
+                INSERT INTO refused_row (site_id, gateway, received_at, row_index, row_text, detail)
+                VALUES (:site, :gateway, :received, :index, :row, :detail)
+                """);
+        for (RefusedRow row : rows) {
+            batch.bind("site", row.siteId())
+                    .bind("gateway", row.gateway())
+                    .bind("received", row.receivedAt())
+                    .bind("index", row.index())
+                    .bind("row", Sql.fit(row.row(), 2000))
+                    .bind("detail", Sql.fit(row.detail(), 1000))
+                    .add();
+        }
+        batch.execute();
+    }
+
+    @Override
+    public List<RefusedRow> refused(long siteId, int most) {
+        return handle.createQuery("""
+                        SELECT * FROM refused_row WHERE site_id = :site ORDER BY received_at DESC, id DESC LIMIT :most
+                        """)
+                .bind("site", siteId)
+                .bind("most", most)
+                .map((row, context) -> new RefusedRow(
+                        row.getLong("site_id"),
+                        row.getString("gateway"),
+                        Sql.instant(row, "received_at"),
+                        row.getInt("row_index"),
+                        row.getString("row_text"),
+                        row.getString("detail")))
+                .list();
+    }
+
+    private static StoredReading reading(ResultSet row) throws SQLException {
+        return new StoredReading(
+                row.getLong("sensor_id"),
+                Sql.instant(row, "at"),
+                row.getDouble("reading_value"),
+                Flag.ofCode(row.getInt("flag")));
+    }
+}
