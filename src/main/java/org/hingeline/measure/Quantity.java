@@ -100,8 +100,13 @@ public enum Quantity {
                         .toList());
     }
 
-    /** All codes, as one comma-separated list for error texts. */
-    public static String codes() {
-        return String.join(", ", Arrays.stream(values()).map(Quantity::code).toList());
+    /** The codes an operator may set a limit on, as one comma-separated list for error texts. */
+    public static String limitCodes() {
+        return String.join(
+                ", ",
+                Arrays.stream(values())
+                        .filter(q -> q != SILENCE)
+                        .map(Quantity::code)
+                        .toList());
     }
 }

@@ -177,7 +177,7 @@ final class PlaceTables implements PlaceBook {
                 .bind("code", sensor.code())
                 .bind("quantity", sensor.quantity().code())
                 .bind("unit", sensor.unit())
-                .bind("phScale", scale == null ? null : scale.name())
+                .bind("phScale", scale == null ? null : scale.wireName())
                 .bind("uncertainty", sensor.standardUncertainty())
                 .bind("serial", sensor.serial());
     }
@@ -249,7 +249,7 @@ final class PlaceTables implements PlaceBook {
                 row.getString("code"),
                 Quantity.ofCode(row.getString("quantity")).orElseThrow(),
                 row.getString("unit"),
-                scale == null ? null : PhScale.valueOf(scale),
+                scale == null ? null : PhScale.fromWireName(scale).orElseThrow(),
                 row.getDouble("standard_uncertainty"),
                 row.getString("serial"));
     }

@@ -1,0 +1,34 @@
+package org.hingeline.monitor;
+
+import java.time.Duration;
+import java.util.List;
+import java.util.Map;
+import java.util.Objects;
+import org.hingeline.measure.Quantity;
+
+/** How old an input may be to still stand for the water, for each quantity a water state needs. */
+public record AgeLimits(Map<Quantity, Duration> longest) {
+
+    /** What a water state is computed from, in the order it is shown. */
+    public static final List<Quantity> NEEDED =
+            List.of(Quantity.PH, Quantity.TEMPERATURE, Quantity.SALINITY, Quantity.TOTAL_ALKALINITY);
+
+    public AgeLimits {
+        longest = Map.copyOf(longest);
+        for (Quantity quantity : NEEDED) {
+            Duration age = longest.get(quantity);
+            if (age == null || age.isNegative() || age.isZero()) {
+                throw new IllegalArgumentException("the age limit of " + quantity.code() + " must be above 0");
+            }
+        }
+    }
+
+    public Duration of(Quantity quantity) {
+        return Objects.requireNonNull(longest.get(quantity), () -> quantity.code() + " has no age limit");
+    }
+
+    /** The longest of all: a reading older than this changes no state of the present. */
+    public Duration longestOfAll() {
+        return NEEDED.stream().map(this::of).max(Duration::compareTo).orElseThrow();
+    }
+}

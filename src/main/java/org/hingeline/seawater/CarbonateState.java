@@ -1,0 +1,44 @@
+package org.hingeline.seawater;
+
+import java.util.List;
+import java.util.Objects;
+
+/**
+ * The whole carbonate system of one water. Amounts are mol/kg-seawater.
+ *
+ * @param conditions temperature, salinity, nutrients and fits
+ * @param known the two quantities it was solved from
+ * @param phTotal pH, total scale
+ * @param totalAlkalinity total alkalinity (Dickson 1981)
+ * @param dic dissolved inorganic carbon
+ * @param co2 dissolved CO2 with carbonic acid
+ * @param bicarbonate HCO3⁻
+ * @param carbonate CO3²⁻
+ * @param fco2Atm fugacity of CO2, atm
+ * @param pco2Atm partial pressure of CO2 in air at 1 atm, atm
+ * @param omegaAragonite saturation state of aragonite
+ * @param omegaCalcite saturation state of calcite
+ * @param densityKgM3 density at 1 atm, kg/m³
+ * @param cautions fits used outside their published range, and what else to know
+ */
+public record CarbonateState(
+        Conditions conditions,
+        KnownPair known,
+        double phTotal,
+        double totalAlkalinity,
+        double dic,
+        double co2,
+        double bicarbonate,
+        double carbonate,
+        double fco2Atm,
+        double pco2Atm,
+        double omegaAragonite,
+        double omegaCalcite,
+        double densityKgM3,
+        List<Caution> cautions) {
+    public CarbonateState {
+        Objects.requireNonNull(conditions, "conditions");
+        Objects.requireNonNull(known, "known");
+        cautions = List.copyOf(cautions);
+    }
+}

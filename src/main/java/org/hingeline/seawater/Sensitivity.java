@@ -1,0 +1,141 @@
+package org.hingeline.seawater;
+
+/**
+ * How each quantity of a water moves with ln [H], with inorganic carbon, and at fixed [H] and carbon with each constant,
+ * temperature and salinity.
+ *
+ * <p>Slopes with [H], carbon and the constants are closed forms. Those with temperature and salinity pass through every
+ * fit at once and are central differences of smooth functions over a step that leaves about ten correct digits; next to
+ * salinity 0, where the fits go with its square root, the step is one-sided.
+ */
+final class Sensitivity {
+    // quantities, the rows
+    static final int PH = 0;
+    static final int TA = 1;
+    static final int DIC = 2;
+    static final int CO2 = 3;
+    static final int BICARBONATE = 4;
+    static final int CARBONATE = 5;
+    static final int FCO2 = 6;
+    static final int PCO2 = 7;
+    static final int OMEGA_ARAGONITE = 8;
+    static final int OMEGA_CALCITE = 9;
+    static final int QUANTITIES = 10;
+
+    // what they move with: logarithms of the constants first, then temperature and salinity
+    private static final int K0 = 0;
+    private static final int K1 = 1;
+    private static final int K2 = 2;
+    private static final int KB = 3;
+    private static final int KW = 4;
+    private static final int KSP_ARAGONITE = 5;
+    private static final int KSP_CALCITE = 6;
+    private static final int BORON = 7;
+    static final int CONSTANTS = 8;
+    static final int TEMPERATURE = 8;
+    static final int SALINITY = 9;
+    static final int PARAMETERS = 10;
+
+    private static final double STEP_C = 0.01;
+    private static final double STEP_S = 0.01;
+
+    /** d quantity / d ln [H]. */
+    final double[] withLnH = new double[QUANTITIES];
+    /** d quantity / d DIC. */
+    final double[] withDic = new double[QUANTITIES];
+    /** d quantity / d parameter at fixed [H] and DIC. */
+    final double[][] with = new double[PARAMETERS][QUANTITIES];
+
+    private final SeawaterConstants k;
+    private final Conditions conditions;
+    private final Speciation s;
+
+    /**
+     * @param scale the scale on which pH is looked at: between the scales lies a step that moves with the water
+     */
+    Sensitivity(SeawaterConstants constants, Conditions conditions, double h, double dic, PhScale scale) {
+        this.k = constants;
+        this.conditions = conditions;
+        this.s = Speciation.of(k, conditions, h, dic);
+        double d = h * h + k.k1 * h + k.k1 * k.k2;
+        double[] share = {h * h / d, k.k1 * h / d, k.k1 * k.k2 / d};
+        withHydrogenIon(share);
+        withCarbon(share);
+        withConstants(share);
+        double below = k.salinity >= STEP_S ? STEP_S : 0;
+        difference(
+                with[TEMPERATURE],
+                k.near(k.temperatureC - STEP_C, k.salinity),
+                k.near(k.temperatureC + STEP_C, k.salinity),
+                2 * STEP_C,
+                scale);
+        difference(
+                with[SALINITY],
+                k.near(k.temperatureC, k.salinity - below),
+                k.near(k.temperatureC, k.salinity + STEP_S),
+                below + STEP_S,
+                scale);
+    }
+
+    private void withHydrogenIon(double[] share) {
+        Alkalinity alkalinity = new Alkalinity(k, conditions);
+        double bound = 2 * share[0] + share[1];
+        withLnH[PH] = -1 / SeawaterConstants.LN_10;
+        withLnH[TA] = alkalinity.slopeOfCarbon(s.h(), s.dic()) + alkalinity.slopeWithoutCarbonate(s.h());
+        carbonSpecies(withLnH, 2 - bound, 1 - bound, -bound);
+    }
+
+    /** Relative moves of CO2, bicarbonate and carbonate carried to all that is proportional to them. */
+    private void carbonSpecies(double[] row, double ofCo2, double ofBicarbonate, double ofCarbonate) {
+        row[CO2] = s.co2() * ofCo2;
+        row[FCO2] = s.fco2Atm() * ofCo2;
+        row[PCO2] = s.pco2Atm() * ofCo2;
+        row[BICARBONATE] = s.bicarbonate() * ofBicarbonate;
+        row[CARBONATE] = s.carbonate() * ofCarbonate;
+        row[OMEGA_ARAGONITE] = s.omegaAragonite() * ofCarbonate;
+        row[OMEGA_CALCITE] = s.omegaCalcite() * ofCarbonate;
+    }
+
+    private void withCarbon(double[] share) {
+        withDic[TA] = share[1] + 2 * share[2];
+        withDic[DIC] = 1;
+        withDic[CO2] = share[0];
+        withDic[BICARBONATE] = share[1];
+        withDic[CARBONATE] = share[2];
+        withDic[FCO2] = share[0] / k.k0;
+        withDic[PCO2] = share[0] / (k.k0 * k.fugacityFactor);
+        double calcium = k.calcium(conditions);
+        withDic[OMEGA_ARAGONITE] = share[2] * calcium / k.kspAragonite;
+        withDic[OMEGA_CALCITE] = share[2] * calcium / k.kspCalcite;
+    }
+
+    private void withConstants(double[] share) {
+        with[K0][FCO2] = -s.fco2Atm();
+        with[K0][PCO2] = -s.pco2Atm();
+        carbonSpecies(with[K1], share[0] - 1, share[0], share[0]);
+        with[K1][TA] = with[K1][BICARBONATE] + 2 * with[K1][CARBONATE];
+        carbonSpecies(with[K2], -share[2], -share[2], 1 - share[2]);
+        with[K2][TA] = with[K2][BICARBONATE] + 2 * with[K2][CARBONATE];
+        double borate = k.boron * k.kb / (k.kb + s.h());
+        with[KB][TA] = borate * s.h() / (k.kb + s.h());
+        with[KW][TA] = k.kw / s.h();
+        with[KSP_ARAGONITE][OMEGA_ARAGONITE] = -s.omegaAragonite();
+        with[KSP_CALCITE][OMEGA_CALCITE] = -s.omegaCalcite();
+        with[BORON][TA] = borate;
+    }
+
+    private void difference(
+            double[] row, SeawaterConstants lower, SeawaterConstants upper, double step, PhScale scale) {
+        Speciation a = Speciation.of(lower, conditions, s.h(), s.dic());
+        Speciation b = Speciation.of(upper, conditions, s.h(), s.dic());
+        row[PH] = (lower.scales.offsetToTotal(scale) - upper.scales.offsetToTotal(scale)) / step;
+        row[TA] = (b.totalAlkalinity() - a.totalAlkalinity()) / step;
+        row[CO2] = (b.co2() - a.co2()) / step;
+        row[BICARBONATE] = (b.bicarbonate() - a.bicarbonate()) / step;
+        row[CARBONATE] = (b.carbonate() - a.carbonate()) / step;
+        row[FCO2] = (b.fco2Atm() - a.fco2Atm()) / step;
+        row[PCO2] = (b.pco2Atm() - a.pco2Atm()) / step;
+        row[OMEGA_ARAGONITE] = (b.omegaAragonite() - a.omegaAragonite()) / step;
+        row[OMEGA_CALCITE] = (b.omegaCalcite() - a.omegaCalcite()) / step;
+    }
+}

@@ -1,0 +1,27 @@
+package org.hingeline.seawater;
+
+/**
+ * The standard uncertainty of each quantity of a {@link CarbonateState}, in that quantity's unit.
+ *
+ * @param phTotal pH, total scale
+ * @param totalAlkalinity mol/kg-seawater
+ * @param dic mol/kg-seawater
+ * @param co2 mol/kg-seawater
+ * @param bicarbonate mol/kg-seawater
+ * @param carbonate mol/kg-seawater
+ * @param fco2Atm atm
+ * @param pco2Atm atm
+ * @param omegaAragonite 1
+ * @param omegaCalcite 1
+ */
+public record StateUncertainty(
+        StandardUncertainty phTotal,
+        StandardUncertainty totalAlkalinity,
+        StandardUncertainty dic,
+        StandardUncertainty co2,
+        StandardUncertainty bicarbonate,
+        StandardUncertainty carbonate,
+        StandardUncertainty fco2Atm,
+        StandardUncertainty pco2Atm,
+        StandardUncertainty omegaAragonite,
+        StandardUncertainty omegaCalcite) {}

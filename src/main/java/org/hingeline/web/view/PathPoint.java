@@ -1,0 +1,42 @@
+package org.hingeline.web.view;
+
+import java.util.List;
+
+/**
+ * One point on the water's way, in words.
+ *
+ * @param code as in links
+ * @param name as people call it
+ * @param place where on the way it lies
+ * @param standing picks mark and hatch
+ * @param verdict the standing in words, completing "Larval 3 is …": "fit", "short of carbonate", "too warm", "not known"
+ * @param omega Ω aragonite to two decimals, "1.62"; empty when not known
+ * @param plusMinus its standard uncertainty, "0.11"; empty when not known
+ * @param against how that compares with the limit: "under your 1.80 for 12 min", "your limit is 1.80"; may be empty
+ * @param measured when the newest input of this state was read
+ * @param notes what was missing or needs caution, one sentence each: "alkalinity 80 h old, older than the 72 h allowed"
+ * @param action what to do now: "Close the intake valve; draw from storage."; empty when nothing
+ * @param batch who lives there: "C. gigas, 31 h after spawn: first shell"; empty when nobody
+ * @param alerts open alerts of this point, most urgent first
+ * @param dosable whether a dose can be planned here
+ */
+public record PathPoint(
+        String code,
+        String name,
+        Place place,
+        Standing standing,
+        String verdict,
+        String omega,
+        String plusMinus,
+        String against,
+        Moment measured,
+        List<String> notes,
+        String action,
+        String batch,
+        List<OpenAlert> alerts,
+        boolean dosable) {
+    public PathPoint {
+        notes = List.copyOf(notes);
+        alerts = List.copyOf(alerts);
+    }
+}

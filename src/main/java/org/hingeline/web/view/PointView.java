@@ -1,0 +1,48 @@
+package org.hingeline.web.view;
+
+import java.util.List;
+import org.jspecify.annotations.Nullable;
+
+/**
+ * The page of one point.
+ *
+ * @param point the point as on the status page
+ * @param state the whole water state, one line per quantity
+ * @param inputs what it was worked out from
+ * @param cautions sentences about the state as a whole
+ * @param lowest for those without the chart: "Lowest Ω in the last 48 h: 1.58 at 03:02."; empty when there is no state
+ * @param limits limits of this point
+ * @param added the form for another limit
+ * @param undo the change just made, if it can be put back
+ */
+public record PointView(
+        PathPoint point,
+        List<StateLine> state,
+        List<InputLine> inputs,
+        List<String> cautions,
+        String lowest,
+        List<LimitRow> limits,
+        Form added,
+        @Nullable Undo undo) {
+
+    /** A quantity of the state: name, value, standard uncertainty (may be empty) and unit (may be empty). */
+    public record StateLine(String name, String value, String plusMinus, String unit) {}
+
+    /**
+     * An input of the state.
+     *
+     * @param quantity "pH", "alkalinity"
+     * @param value with its unit: "7.71", "2 180 µmol/kg"
+     * @param origin where it came from: "sensor ph-3", "bottle sample 12 May", "site setting"
+     * @param measured when it was read
+     * @param flag what quality control thinks of it: "passed", "suspect: flat line"; may be empty
+     */
+    public record InputLine(String quantity, String value, String origin, Moment measured, String flag) {}
+
+    public PointView {
+        state = List.copyOf(state);
+        inputs = List.copyOf(inputs);
+        cautions = List.copyOf(cautions);
+        limits = List.copyOf(limits);
+    }
+}
