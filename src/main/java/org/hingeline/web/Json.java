@@ -50,9 +50,7 @@ final class Json {
     }
 
     static void answer(Context ctx, Problem problem) {
-        ctx.status(problem.status())
-                .contentType("application/problem+json")
-                .result(MAPPER.writeValueAsBytes(problem));
+        ctx.status(problem.status()).contentType("application/problem+json").result(MAPPER.writeValueAsBytes(problem));
     }
 
     /** What is wrong with a body, without words of the program's inside. */
@@ -96,5 +94,4 @@ final class Json {
                 .replaceAll("\\(for value[^)]*\\)", "")
                 .strip();
     }
-
 }

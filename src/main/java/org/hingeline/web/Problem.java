@@ -8,7 +8,12 @@ import org.jspecify.annotations.Nullable;
  *
  * @param errors fields at fault, with what would be accepted
  */
-record Problem(String type, String title, int status, String detail, @Nullable List<FieldError> errors) {
+record Problem(
+        String type,
+        String title,
+        int status,
+        String detail,
+        @Nullable List<FieldError> errors) {
 
     /** A field at fault: where it stands (JSON pointer, RFC 6901) and what is wrong with it. */
     record FieldError(String pointer, String detail) {}

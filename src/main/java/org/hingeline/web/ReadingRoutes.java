@@ -27,7 +27,9 @@ final class ReadingRoutes {
         String type = ctx.contentType();
         if (type != null && !type.startsWith("application/json")) {
             throw new ProblemException(
-                    415, "Unknown format", "content type \"" + type + "\" is not taken here; accepted: application/json");
+                    415,
+                    "Unknown format",
+                    "content type \"" + type + "\" is not taken here; accepted: application/json");
         }
         List<IncomingReading> rows = ReadingsJson.parse(ctx.bodyAsBytes(), mostRows);
         if (rows.isEmpty()) {

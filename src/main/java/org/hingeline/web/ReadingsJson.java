@@ -63,7 +63,9 @@ final class ReadingsJson {
     private void row(JsonParser parser) {
         if (rows.size() == mostRows) {
             throw new ProblemException(
-                    413, "Too many readings", "one request may carry " + mostRows + " readings; send the rest in another");
+                    413,
+                    "Too many readings",
+                    "one request may carry " + mostRows + " readings; send the rest in another");
         }
         int index = rows.size();
         long from = parser.currentTokenLocation().getByteOffset();
@@ -97,7 +99,10 @@ final class ReadingsJson {
                 }
                 default -> wrong = "field \"" + name + "\" is not known; accepted: " + FIELDS;
             }
-            if (wrong == null && !name.equals("value") && token != JsonToken.VALUE_STRING && token != JsonToken.VALUE_NULL) {
+            if (wrong == null
+                    && !name.equals("value")
+                    && token != JsonToken.VALUE_STRING
+                    && token != JsonToken.VALUE_NULL) {
                 wrong = name + " " + shown(parser, token) + " is not a string";
             }
             if (token.isStructStart()) {

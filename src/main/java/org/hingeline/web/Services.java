@@ -7,7 +7,6 @@ import org.hingeline.monitor.AlertDesk;
 import org.hingeline.monitor.Check;
 import org.hingeline.monitor.DoseDesk;
 import org.hingeline.monitor.LimitDesk;
-import org.hingeline.monitor.PlaceDesk;
 import org.hingeline.monitor.ReadingIntake;
 import org.hingeline.monitor.StatusBoard;
 
@@ -20,7 +19,7 @@ public record Services(
         LimitDesk limits,
         AlertDesk alerts,
         DoseDesk doses,
-        PlaceDesk place,
+
         List<Check> checks) {
     public Services {
         checks = List.copyOf(checks);
