@@ -1,11 +1,13 @@
 package org.hingeline.delivery;
 
 import java.time.Duration;
+import java.util.Objects;
 import java.util.concurrent.CompletionException;
 import javax.net.ssl.SSLSocketFactory;
 import org.hingeline.monitor.OutboxBook.Message;
 import org.jspecify.annotations.Nullable;
 import org.simplejavamail.MailException;
+import org.simplejavamail.api.email.ContentTransferEncoding;
 import org.simplejavamail.api.email.Email;
 import org.simplejavamail.api.mailer.Mailer;
 import org.simplejavamail.api.mailer.config.TransportStrategy;
@@ -55,7 +57,7 @@ public final class EmailChannel implements Channel {
         Mailer mailer = mailer(password);
         Email letter;
         try {
-            letter = sender.letter(message);
+            letter = sender.letter(message, ContentTransferEncoding.QUOTED_PRINTABLE);
             mailer.validate(letter);
         } catch (MailException | IllegalArgumentException unfit) {
             return new Outcome.Refused("\"" + message.recipient() + "\" or the text is not fit for e-mail ("
@@ -71,7 +73,7 @@ public final class EmailChannel implements Channel {
 
     private Mailer mailer(@Nullable String password) {
         SignedIn known = last;
-        if (known != null && java.util.Objects.equals(known.password(), password)) {
+        if (known != null && Objects.equals(known.password(), password)) {
             return known.mailer();
         }
         Mailer mailer = build(password);

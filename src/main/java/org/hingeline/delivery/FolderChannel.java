@@ -13,6 +13,7 @@ import java.util.Locale;
 import java.util.UUID;
 import org.hingeline.monitor.OutboxBook.Message;
 import org.simplejavamail.MailException;
+import org.simplejavamail.api.email.ContentTransferEncoding;
 import org.simplejavamail.converter.EmailConverter;
 
 /**
@@ -48,7 +49,8 @@ public final class FolderChannel implements Channel {
     public Outcome deliver(Message message) {
         String letter;
         try {
-            letter = EmailConverter.emailToEML(sender.letter(message));
+            // eight bits, so that the text can also be read as it is
+            letter = EmailConverter.emailToEML(sender.letter(message, ContentTransferEncoding.BIT8));
         } catch (MailException | IllegalArgumentException unfit) {
             return new Outcome.Refused("\"" + message.recipient() + "\" or the text is not fit for e-mail ("
                     + unfit.getClass().getSimpleName() + ")");

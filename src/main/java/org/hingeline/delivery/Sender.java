@@ -1,5 +1,6 @@
 package org.hingeline.delivery;
 
+import java.util.Date;
 import org.hingeline.monitor.OutboxBook.Message;
 import org.simplejavamail.api.email.ContentTransferEncoding;
 import org.simplejavamail.api.email.Email;
@@ -22,16 +23,18 @@ public record Sender(String address, String name) {
      * The message as an e-mail. Every time the same, date and Message-ID too, so that a repeat is known as one.
      *
      * <p>{@code Auto-Submitted} (RFC 3834) keeps out-of-office programs from answering.
+     *
+     * @param encoding how the text is written down (RFC 2045)
      */
-    Email letter(Message message) {
+    Email letter(Message message, ContentTransferEncoding encoding) {
         return EmailBuilder.startingBlank()
                 .fixingMessageId(messageId(message.key()))
-                .fixingSentDate(java.util.Date.from(message.createdAt()))
+                .fixingSentDate(Date.from(message.createdAt()))
                 .from(name, address)
                 .to(message.recipientName(), message.recipient())
                 .withSubject(message.subject())
                 .withPlainText(message.body())
-                .withContentTransferEncoding(ContentTransferEncoding.QUOTED_PRINTABLE)
+                .withContentTransferEncoding(encoding)
                 .withHeader("Auto-Submitted", "auto-generated")
                 .buildEmail();
     }

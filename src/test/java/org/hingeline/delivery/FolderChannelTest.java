@@ -31,6 +31,9 @@ class FolderChannelTest {
                 .isEqualTo(new Outcome.Accepted());
 
         assertThat(files(mail)).containsExactly("20260514T102400Z-alert-5-raised-1.eml");
+        assertThat(Files.readString(mail.resolve("20260514T102400Z-alert-5-raised-1.eml")))
+                .as("readable without a mail program too")
+                .contains("Larval 3 (20 m3): Ω 1.62 ±0.11, under your 1.80 for 12 min.");
         try (InputStream in = Files.newInputStream(mail.resolve("20260514T102400Z-alert-5-raised-1.eml"))) {
             MimeMessage letter = new MimeMessage(Session.getInstance(new Properties()), in);
             assertThat(letter.getMessageID()).isEqualTo("<hingeline.alert-5-raised-1@example.org>");
