@@ -95,8 +95,7 @@ public final class AlertWatch {
 
     private void silence(Books books, long siteId, Point point, Watched watched, Instant oldest, Instant now) {
         double minutes = Math.max(0, Duration.between(oldest, now).toMillis() / 60_000.0);
-        boolean worthARow =
-                watched.state().phase().open()
+        boolean worthARow = watched.state().phase().open()
                 || watched.state().outSince() != null
                 || minutes > watched.limit().threshold();
         if (worthARow) {

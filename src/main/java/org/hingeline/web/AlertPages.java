@@ -48,7 +48,13 @@ final class AlertPages {
         List<Entry> ended = board.closedAlerts(site, ENDED).stream()
                 .map(alert -> entry(alert, AlertRoutes.pointOf(points, alert), now, site.zone()))
                 .toList();
-        pages.show(ctx, 200, "alerts", "alerts", new AlertsView(open, ended), Flash.take(ctx).notice());
+        pages.show(
+                ctx,
+                200,
+                "alerts",
+                "alerts",
+                new AlertsView(open, ended),
+                Flash.take(ctx).notice());
     }
 
     private Entry entry(Alert alert, Point point, Instant now, ZoneId zone) {
@@ -57,7 +63,8 @@ final class AlertPages {
                 String.valueOf(alert.id()),
                 point.code(),
                 point.name(),
-                Words.alert(alert, now, zone) + (alert.returnedAt() != null && closed == null ? "; back within the limit" : ""),
+                Words.alert(alert, now, zone)
+                        + (alert.returnedAt() != null && closed == null ? "; back within the limit" : ""),
                 alert.priority().code(),
                 Moment.of(alert.raisedAt(), now, zone),
                 PathPoints.acknowledged(alert, now, zone),
@@ -79,8 +86,8 @@ final class AlertPages {
     private void acknowledge(Context ctx) {
         Visit visit = Visit.of(ctx);
         long id = AlertRoutes.id(ctx);
-        AlertDesk.Acknowledged result = alerts.acknowledge(
-                visit.site().id(), id, visit.caller().name(), Forms.text(ctx, "note"));
+        AlertDesk.Acknowledged result =
+                alerts.acknowledge(visit.site().id(), id, visit.caller().name(), Forms.text(ctx, "note"));
         if (result == AlertDesk.Acknowledged.NO_SUCH_ALERT) {
             throw AlertRoutes.noSuchAlert(ctx.pathParam("id"));
         }

@@ -122,7 +122,8 @@ final class DosePages {
         DoseDesk.Defaults defaults = doses.defaults();
         return Form.of(Map.of(
                 "targetOmega",
-                Words.plain(Math.round(limit.map(l -> l.threshold() + ABOVE_LIMIT).orElse(TARGET_WITHOUT_LIMIT) * 100)
+                Words.plain(Math.round(
+                                limit.map(l -> l.threshold() + ABOVE_LIMIT).orElse(TARGET_WITHOUT_LIMIT) * 100)
                         / 100.0),
                 "volumeL",
                 volumeL == null ? "" : Words.plain(volumeL),
@@ -147,7 +148,8 @@ final class DosePages {
                         + Words.withUnit(Quantity.TOTAL_ALKALINITY, n.totalAlkalinityUmolKg()) + ", "
                         + (point.newest() == null
                                 ? ""
-                                : Moment.of(point.newest().at(), point.now(), zone).age()) + ".")
+                                : Moment.of(point.newest().at(), point.now(), zone)
+                                        .age()) + ".")
                 .orElse("the water is not known well enough.");
     }
 
@@ -178,7 +180,9 @@ final class DosePages {
                 mass == null || after == null
                         ? ""
                         : grams(mass.value()) + " of " + hydration + " sodium carbonate in "
-                                + (plan.steps().size() == 1 ? "one step" : plan.steps().size() + " steps")
+                                + (plan.steps().size() == 1
+                                        ? "one step"
+                                        : plan.steps().size() + " steps")
                                 + " would bring \u03a9 to " + Words.number(after.omegaAragonite(), 2) + ".";
         };
     }

@@ -29,9 +29,7 @@ record Flash(String notice, @Nullable Undone undone) {
     }
 
     void leave(Context ctx) {
-        String text = Base64.getUrlEncoder()
-                .withoutPadding()
-                .encodeToString(Json.MAPPER.writeValueAsBytes(this));
+        String text = Base64.getUrlEncoder().withoutPadding().encodeToString(Json.MAPPER.writeValueAsBytes(this));
         ctx.cookie(cookie(text, SECONDS));
     }
 

@@ -74,7 +74,8 @@ final class MessagePages {
         }
         String tries = message.attempts() == 1 ? " after 1 try" : " after " + message.attempts() + " tries";
         String next = message.state() == OutboxBook.State.WAITING
-                ? "; next try at " + Moment.of(message.nextAttemptAt(), now, zone).clock()
+                ? "; next try at "
+                        + Moment.of(message.nextAttemptAt(), now, zone).clock()
                 : "";
         return " (" + error + tries + next + ")";
     }

@@ -125,7 +125,8 @@ final class PathPoints {
         state.missing().forEach(missing -> notes.add(Words.missing(missing, status.now())));
         if (status.numbers().isEmpty() && state.missing().isEmpty() && state.numbers() != null) {
             notes.add("Last known water is " + Moment.span(Duration.between(state.at(), status.now()))
-                    + " old; this point counts as silent after " + Moment.span(status.point().maxGap()));
+                    + " old; this point counts as silent after "
+                    + Moment.span(status.point().maxGap()));
         }
         state.cautions().forEach(caution -> notes.add(caution.detail()));
         return notes;
@@ -156,6 +157,7 @@ final class PathPoints {
             return "";
         }
         String note = alert.acknowledgementNote();
-        return "Taken on by " + alert.acknowledgedBy() + " at " + Moment.of(at, now, zone).clock() + (note == null ? "" : ": " + note);
+        return "Taken on by " + alert.acknowledgedBy() + " at "
+                + Moment.of(at, now, zone).clock() + (note == null ? "" : ": " + note);
     }
 }

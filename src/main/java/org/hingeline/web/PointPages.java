@@ -97,8 +97,8 @@ final class PointPages {
             page(ctx, 422, point, Flash.NONE, Forms.refused(ctx, e), shownIn);
             return;
         }
-        Flash.Undone undone = before.map(limit ->
-                        new Flash.Undone("Limit \u201c" + name + "\u201d was changed.", name, values(limit)))
+        Flash.Undone undone = before.map(
+                        limit -> new Flash.Undone("Limit \u201c" + name + "\u201d was changed.", name, values(limit)))
                 .orElse(null);
         new Flash("Limit \u201c" + name + "\u201d saved.", undone).leave(ctx);
         ctx.redirect(pages.link(ctx, "/points/" + point.point().code() + "#limits"));
@@ -206,14 +206,14 @@ final class PointPages {
     }
 
     private String lowest(PointStatus point, ZoneId zone) {
-        return board
-                .history(point.point(), point.now().minus(COURSE), point.now(), Duration.ofMinutes(2))
-                .stream()
+        return board.history(point.point(), point.now().minus(COURSE), point.now(), Duration.ofMinutes(2)).stream()
                 .filter(state -> state.numbers() != null)
                 .min(Comparator.comparingDouble(
                         state -> Objects.requireNonNull(state.numbers()).omegaAragonite()))
                 .map(state -> "Lowest \u03a9 in the last 48 h: "
-                        + Words.number(Quantity.OMEGA_ARAGONITE, Objects.requireNonNull(state.numbers()).omegaAragonite())
+                        + Words.number(
+                                Quantity.OMEGA_ARAGONITE,
+                                Objects.requireNonNull(state.numbers()).omegaAragonite())
                         + " at " + Moment.of(state.at(), point.now(), zone).clock() + ".")
                 .orElse("");
     }

@@ -7,6 +7,7 @@ import org.hingeline.monitor.AlertDesk;
 import org.hingeline.monitor.Check;
 import org.hingeline.monitor.DoseDesk;
 import org.hingeline.monitor.LimitDesk;
+import org.hingeline.monitor.PlaceDesk;
 import org.hingeline.monitor.ReadingIntake;
 import org.hingeline.monitor.StatusBoard;
 
@@ -19,6 +20,7 @@ public record Services(
         LimitDesk limits,
         AlertDesk alerts,
         DoseDesk doses,
+        PlaceDesk place,
 
         List<Check> checks) {
     public Services {

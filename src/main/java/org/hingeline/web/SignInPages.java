@@ -32,7 +32,8 @@ final class SignInPages {
     }
 
     void addTo(RoutesConfig routes) {
-        routes.get("/sign-in", ctx -> form(ctx, 200, new SignInView("", "", "", next(ctx.queryParam("next")))), Gate.OPEN);
+        routes.get(
+                "/sign-in", ctx -> form(ctx, 200, new SignInView("", "", "", next(ctx.queryParam("next")))), Gate.OPEN);
         routes.post("/sign-in", this::signIn, Gate.OPEN);
         routes.post("/sign-out", this::signOut, Gate.VIEWER);
     }
@@ -59,8 +60,10 @@ final class SignInPages {
             ctx.cookie(cookie(FORM_COOKIE, "", Duration.ZERO, SameSite.STRICT));
             ctx.redirect(next);
         } else if (result instanceof SignIn.Locked locked) {
-            String until = Moment.of(locked.until(), pages.now(), ZoneId.of("UTC")).clock();
-            long minutes = Math.max(1, Duration.between(pages.now(), locked.until()).toMinutes() + 1);
+            String until =
+                    Moment.of(locked.until(), pages.now(), ZoneId.of("UTC")).clock();
+            long minutes =
+                    Math.max(1, Duration.between(pages.now(), locked.until()).toMinutes() + 1);
             form(
                     ctx,
                     429,

@@ -38,9 +38,12 @@ final class StatusPages {
     }
 
     void addTo(RoutesConfig routes) {
-        routes.get("/", ctx -> pages.show(ctx, 200, "status", "water", view(ctx), Flash.take(ctx).notice()), Gate.VIEWER);
         routes.get(
-                "/fragments/status", ctx -> pages.show(ctx, "fragments/status", "water", view(ctx)), Gate.VIEWER);
+                "/",
+                ctx -> pages.show(
+                        ctx, 200, "status", "water", view(ctx), Flash.take(ctx).notice()),
+                Gate.VIEWER);
+        routes.get("/fragments/status", ctx -> pages.show(ctx, "fragments/status", "water", view(ctx)), Gate.VIEWER);
     }
 
     private StatusView view(Context ctx) {
@@ -52,7 +55,9 @@ final class StatusPages {
                         .findFirst()
                         .map(intake -> strip(intake, site.zone()))
                         .orElse(null),
-                points.stream().map(status -> PathPoints.of(status, site.zone())).toList());
+                points.stream()
+                        .map(status -> PathPoints.of(status, site.zone()))
+                        .toList());
     }
 
     private TideStrip strip(PointStatus intake, ZoneId zone) {

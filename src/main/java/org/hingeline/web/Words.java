@@ -44,7 +44,9 @@ final class Words {
 
     /** A plain number for a form field or the chart: no padding, no thousands. */
     static String plain(double value) {
-        return value == Math.rint(value) && Math.abs(value) < 1e9 ? String.valueOf((long) value) : String.valueOf(value);
+        return value == Math.rint(value) && Math.abs(value) < 1e9
+                ? String.valueOf((long) value)
+                : String.valueOf(value);
     }
 
     /** "Ω below 1.80 for 10 min; ends at 1.85 or above for 10 min". */
@@ -74,8 +76,7 @@ final class Words {
         if (alert.quantity() == Quantity.SILENCE) {
             return "no usable value since " + since;
         }
-        String uncertainty =
-                alert.uncertainty() > 0 ? " \u00b1" + number(alert.quantity(), alert.uncertainty()) : "";
+        String uncertainty = alert.uncertainty() > 0 ? " \u00b1" + number(alert.quantity(), alert.uncertainty()) : "";
         return alert.quantity().words() + " " + number(alert.quantity(), alert.value()) + uncertainty + ", "
                 + alert.side().word() + " your " + withUnit(alert.quantity(), alert.threshold()) + " since " + since;
     }
@@ -93,9 +94,8 @@ final class Words {
     /** "Crassostrea gigas, 31 h after spawn: building the first shell". */
     static String batch(Batch batch, Instant now) {
         Duration age = batch.age(now);
-        String since = age.toHours() < 72
-                ? age.toHours() + NO_BREAK_SPACE + "h"
-                : age.toDays() + NO_BREAK_SPACE + "days";
+        String since =
+                age.toHours() < 72 ? age.toHours() + NO_BREAK_SPACE + "h" : age.toDays() + NO_BREAK_SPACE + "days";
         return batch.species() + ", " + since + " after spawn"
                 + (batch.buildsFirstShell(now) ? ": building the first shell" : "");
     }
