@@ -99,6 +99,14 @@ final class FakeStorage implements Storage, Books, OutboxBook, JournalBook {
     }
 
     @Override
+    public boolean anyDue(Instant now) {
+        return rows.values().stream()
+                .anyMatch(row -> row.message().state() == State.WAITING
+                        && !row.message().nextAttemptAt().isAfter(now)
+                        && !row.claimedUntil().isAfter(now));
+    }
+
+    @Override
     public List<Message> claimDue(Instant now, Duration claim, String node, int most) {
         List<Message> due = rows.values().stream()
                 .filter(row -> row.message().state() == State.WAITING
