@@ -115,7 +115,7 @@ final class FakeService implements AutoCloseable {
                     .orElse(null);
         }
         if (newest == null) {
-            answer(exchange, 404, "{\"title\":\"no water yet\"}");
+            answer(exchange, 200, "{\"point\":\"intake\",\"at\":null}");
         } else {
             answer(exchange, 200, "{\"at\":\"" + newest + "\"}");
         }
