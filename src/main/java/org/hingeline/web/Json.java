@@ -92,6 +92,7 @@ final class Json {
         String line = message.lines().findFirst().orElse("the JSON cannot be read");
         return line.replaceAll("`?(?:java|org\\.hingeline|tools)\\.[\\w.$`\\[\\]]+", "value")
                 .replaceAll("\\(for value[^)]*\\)", "")
+                .replaceAll(": enable `[^`]*` to allow", " is not JSON")
                 .strip();
     }
 }

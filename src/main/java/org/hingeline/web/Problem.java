@@ -1,5 +1,6 @@
 package org.hingeline.web;
 
+import com.fasterxml.jackson.annotation.JsonInclude;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
 
@@ -8,6 +9,7 @@ import org.jspecify.annotations.Nullable;
  *
  * @param errors fields at fault, with what would be accepted
  */
+@JsonInclude(JsonInclude.Include.NON_NULL)
 record Problem(
         String type,
         String title,
