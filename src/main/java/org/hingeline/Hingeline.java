@@ -20,7 +20,8 @@ import picocli.CommandLine.Command;
             AddSiteCommand.class,
             AddPersonCommand.class,
             AddKeyCommand.class,
-            LoadPlaceCommand.class
+            LoadPlaceCommand.class,
+            DemoCommand.class
         })
 public final class Hingeline {
     /** The one clock; everything else is handed it. */
