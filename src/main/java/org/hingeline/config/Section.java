@@ -5,7 +5,10 @@ import java.util.Arrays;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import java.util.Set;
+import java.util.function.DoublePredicate;
+import java.util.function.Function;
 import java.util.stream.Collectors;
 import org.jspecify.annotations.Nullable;
 import tools.jackson.databind.JsonNode;
@@ -30,6 +33,24 @@ final class Section {
     Section section(String key) {
         JsonNode child = value(key);
         return new Section(at(key) + ".", child == null ? null : mapping(at(key), child, problems), problems);
+    }
+
+    /** The entries of a list, each a section of its own; none when the key is absent. */
+    List<Section> entries(String key) {
+        JsonNode value = value(key);
+        if (value == null) {
+            return List.of();
+        }
+        if (!value.isArray()) {
+            bad(key, value, "a list, one \"- \" an entry");
+            return List.of();
+        }
+        List<Section> entries = new ArrayList<>();
+        for (int i = 0; i < value.size(); i++) {
+            String where = at(key) + "[" + i + "]";
+            entries.add(new Section(where + ".", mapping(where, value.get(i), problems), problems));
+        }
+        return entries;
     }
 
     int whole(String key, int standard, int least, int most) {
@@ -64,6 +85,91 @@ final class Section {
         }
         bad(key, value, "a number from " + plain(least) + " to " + plain(most));
         return standard;
+    }
+
+    /** @return nothing when the key is absent, or what it holds is no number above least and up to most */
+    @Nullable
+    Double numberAbove(String key, double least, double most) {
+        return number(
+                key,
+                number -> number > least && number <= most,
+                "a number above " + plain(least) + ", at most " + plain(most));
+    }
+
+    /** @return nothing when the key is absent, or what it holds is no number from least to most */
+    @Nullable
+    Double numberWithin(String key, double least, double most) {
+        return number(
+                key,
+                number -> number >= least && number <= most,
+                "a number from " + plain(least) + " to " + plain(most));
+    }
+
+    /** @return nothing when the key is absent, or what it holds is no finite number */
+    @Nullable
+    Double number(String key) {
+        return number(key, Double::isFinite, "a number");
+    }
+
+    private @Nullable Double number(String key, DoublePredicate accepts, String accepted) {
+        JsonNode value = value(key);
+        if (value == null) {
+            return null;
+        }
+        if (value.isNumber() && accepts.test(value.asDouble())) {
+            return value.asDouble();
+        }
+        bad(key, value, accepted);
+        return null;
+    }
+
+    /**
+     * A text that something else can be made of.
+     *
+     * @param make empty when it cannot
+     * @return nothing when the key is absent, or what it holds will not do
+     */
+    <T> @Nullable T made(String key, Function<String, Optional<T>> make, String accepted) {
+        String text = text(key);
+        if (text == null) {
+            return null;
+        }
+        Optional<T> made = make.apply(text);
+        if (made.isEmpty()) {
+            problem(key, "\"" + text + "\" is not accepted; give " + accepted);
+        }
+        return made.orElse(null);
+    }
+
+    /** As {@link #made}, and a problem when the key is absent. */
+    <T> @Nullable T needed(String key, Function<String, Optional<T>> make, String accepted) {
+        if (value(key) == null) {
+            missing(key, accepted);
+            return null;
+        }
+        return made(key, make, accepted);
+    }
+
+    /** Notes that a key is needed; not when nothing here can be read, which was noted already. */
+    void missing(String key, String accepted) {
+        if (node != null) {
+            problem(key, "is missing; give " + accepted);
+        }
+    }
+
+    /** Whether something was found wrong with the key already. */
+    boolean complainedOf(String key) {
+        return problems.stream().anyMatch(problem -> problem.startsWith(at(key) + ": "));
+    }
+
+    /** Whether the key holds just this text. */
+    boolean holds(String key, String text) {
+        JsonNode value = value(key);
+        return value != null && value.isString() && value.asString().strip().equals(text);
+    }
+
+    boolean has(String key) {
+        return value(key) != null;
     }
 
     String text(String key, String standard) {

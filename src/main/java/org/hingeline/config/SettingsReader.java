@@ -1,9 +1,7 @@
 package org.hingeline.config;
 
-import java.io.IOException;
 import java.net.URI;
 import java.net.URISyntaxException;
-import java.nio.file.Files;
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.time.Duration;
@@ -16,19 +14,9 @@ import org.hingeline.config.Settings.MailMode;
 import org.hingeline.config.Settings.SecureCookies;
 import org.hingeline.config.Settings.StartTls;
 import org.jspecify.annotations.Nullable;
-import tools.jackson.core.JacksonException;
-import tools.jackson.core.StreamReadFeature;
-import tools.jackson.databind.DeserializationFeature;
-import tools.jackson.databind.JsonNode;
-import tools.jackson.dataformat.yaml.YAMLMapper;
 
 /** Reads settings strictly: an unknown key, a wrong type or a value out of range is an error, and all are told at once. */
 public final class SettingsReader {
-    private static final YAMLMapper YAML = YAMLMapper.builder()
-            .enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION)
-            .enable(DeserializationFeature.FAIL_ON_TRAILING_TOKENS)
-            .build();
-
     private static final Pattern ADDRESS = Pattern.compile("[^\\s@<>,;\"()]+@[^\\s@<>,;\"()]+");
     private static final Pattern SECRET_IN_URL =
             Pattern.compile("(?i).*([?&](password|sslpassword)=|//[^/@]*:[^/@]*@).*");
@@ -37,21 +25,12 @@ public final class SettingsReader {
 
     /** @throws BadSettings naming every problem, also when there is no such file or it is no YAML */
     public static Settings read(Path file) {
-        String text;
-        try {
-            text = Files.readString(file);
-        } catch (IOException unreadable) {
-            throw new BadSettings(
-                    file.toString(),
-                    List.of("the file cannot be read (" + unreadable.getClass().getSimpleName()
-                            + "); it must exist and be UTF-8 text"));
-        }
-        return readText(file.toString(), text);
+        return readText(file.toString(), YamlFile.text(file));
     }
 
     static Settings readText(String source, String yaml) {
         List<String> problems = new ArrayList<>();
-        Section root = Section.root(parse(source, yaml), problems);
+        Section root = Section.root(YamlFile.parse(source, yaml), problems);
         Settings settings = new Settings(
                 path(root, "dataFolder", "data"),
                 server(root.section("server")),
@@ -68,26 +47,6 @@ public final class SettingsReader {
             throw new BadSettings(source, problems);
         }
         return settings;
-    }
-
-    private static JsonNode parse(String source, String yaml) {
-        try {
-            JsonNode document = YAML.readTree(yaml);
-            return document == null || document.isNull() || document.isMissingNode()
-                    ? YAML.createObjectNode()
-                    : document;
-        } catch (JacksonException broken) {
-            throw new BadSettings(source, List.of("this is not YAML: " + firstLineOf(broken)));
-        }
-    }
-
-    /** The message without the piece of the source some parsers add to it, which may hold anything. */
-    private static String firstLineOf(JacksonException broken) {
-        String message =
-                String.valueOf(broken.getOriginalMessage()).lines().findFirst().orElse("");
-        return broken.getLocation() == null
-                ? message
-                : message + " (line " + broken.getLocation().getLineNr() + ")";
     }
 
     private static Settings.Server server(Section in) {

@@ -86,6 +86,12 @@ public interface AlertBook {
 
     List<Alert> openAlerts(long siteId);
 
+    /** Open alerts of all sites. */
+    int countOpen();
+
+    /** Points of all sites with an open alert because nothing usable is heard. */
+    int countSilent();
+
     /** Closed alerts, newest first. */
     List<Alert> closedAlerts(long siteId, int most);
 }

@@ -19,6 +19,7 @@ import org.jspecify.annotations.Nullable;
 public record AlertText(String subject, String body) {
     private static final int SUBJECT_MOST = 100;
     private static final int BODY_MOST = 8000;
+    private static final Duration SAME_TIME = Duration.ofMinutes(1);
 
     public AlertText {
         subject = Wording.cut(Wording.oneLine(subject), SUBJECT_MOST);
@@ -75,8 +76,13 @@ public record AlertText(String subject, String body) {
         Instant since = lastHeard(news);
         String sinceWords = Wording.time(since, news.now(), news.site().zone());
         WaterState water = news.water();
-        String lost = water != null && water.numbers() == null ? "no Ω" : "nothing heard";
-        String why = water == null || water.numbers() != null ? "" : whyNoNumbers(water, news);
+        String lost = "nothing heard";
+        String why = "";
+        // a state without Ω that is younger than the silence: something is heard, only not enough
+        if (water != null && water.numbers() == null && water.at().isAfter(since.plus(SAME_TIME))) {
+            lost = "no Ω";
+            why = whyNoNumbers(water, news);
+        }
 
         AlertBody body = new AlertBody(news);
         body.line(name(news) + ": " + lost + " since " + sinceWords + ", for "

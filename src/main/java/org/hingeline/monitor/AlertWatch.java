@@ -95,8 +95,9 @@ public final class AlertWatch {
 
     private void silence(Books books, long siteId, Point point, Watched watched, Instant oldest, Instant now) {
         double minutes = Math.max(0, Duration.between(oldest, now).toMillis() / 60_000.0);
-        boolean worthARow =
-                watched.state().phase().open() || minutes > watched.limit().threshold();
+        boolean worthARow = watched.state().phase().open()
+                || watched.state().outSince() != null
+                || minutes > watched.limit().threshold();
         if (worthARow) {
             step(books, siteId, point, watched, List.of(new Observation(now, minutes, 0)), now, Duration.ofDays(1));
         }

@@ -138,6 +138,11 @@ public final class LimitDesk {
     }
 
     static Limit limitOf(Point point, String name, Wish wish) {
+        return limitOf(point.id(), name, wish);
+    }
+
+    /** @throws FieldFaultsException when the wish cannot be a limit */
+    static Limit limitOf(long pointId, String name, Wish wish) {
         FieldFaults faults = new FieldFaults();
         if (!Codes.isCode(name)) {
             faults.add("name", "name \"" + name + "\" is not " + Codes.SHAPE);
@@ -169,7 +174,7 @@ public final class LimitDesk {
         faults.throwIfAny();
         return new Limit(
                 0,
-                point.id(),
+                pointId,
                 name,
                 Objects.requireNonNull(quantity),
                 below != null ? Side.BELOW : Side.ABOVE,

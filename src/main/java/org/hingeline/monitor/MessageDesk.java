@@ -68,7 +68,7 @@ public final class MessageDesk {
 
     private OutboxBook.Message message(
             long siteId, Alert alert, Kind kind, AlertText text, Subscriber subscriber, Instant now) {
-        String key = "alert-" + alert.id() + "-" + kind.code + "-" + now.toEpochMilli() + "-" + subscriber.code() + "-"
+        String key = "alert-" + alert.id() + "-" + kind.code + "-" + now.toEpochMilli() + "-" + subscriber.id() + "-"
                 + installation;
         return new OutboxBook.Message(
                 0,

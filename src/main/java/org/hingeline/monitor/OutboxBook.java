@@ -47,6 +47,9 @@ public interface OutboxBook {
     /** Queues a message; ids and state in the record are ignored. */
     void add(Message message);
 
+    /** Whether a message waits that nobody has taken. */
+    boolean anyDue(Instant now);
+
     /**
      * Takes due messages for this node: nobody else gets them until the claim ends.
      *

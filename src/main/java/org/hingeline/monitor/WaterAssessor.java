@@ -4,15 +4,16 @@ import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
 import java.util.EnumMap;
+import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import org.hingeline.hatchery.Sensor;
 import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.PointInputs.Candidate;
 import org.hingeline.monitor.WaterState.InputUsed;
 import org.hingeline.monitor.WaterState.MissingInput;
 import org.hingeline.monitor.WaterState.Note;
-import org.hingeline.quality.Flag;
 import org.hingeline.seawater.CarbonateResult;
 import org.hingeline.seawater.CarbonateResult.Solved;
 import org.hingeline.seawater.CarbonateResult.Unsolvable;
@@ -24,7 +25,6 @@ import org.hingeline.seawater.KnownPair;
 import org.hingeline.seawater.PhScale;
 import org.hingeline.seawater.StateUncertainty;
 import org.hingeline.seawater.Uncertainty;
-import org.jspecify.annotations.Nullable;
 
 /** From the freshest inputs at a moment to the water state, with the account of what was used and what was missing. */
 final class WaterAssessor {
@@ -67,55 +67,81 @@ final class WaterAssessor {
     }
 
     private static WaterState compute(long pointId, Instant at, List<InputUsed> used, Map<Quantity, Candidate> found) {
-        Candidate ph = need(found, Quantity.PH);
-        Candidate temperature = need(found, Quantity.TEMPERATURE);
-        Candidate salinity = need(found, Quantity.SALINITY);
-        Candidate alkalinity = need(found, Quantity.TOTAL_ALKALINITY);
-        PhScale scale = scaleOf(ph);
-        CarbonateResult result = CarbonateSystem.solve(
-                Conditions.of(temperature.reading().value(), salinity.reading().value()),
-                new KnownPair.PhAndAlkalinity(
-                        ph.reading().value(), scale, alkalinity.reading().value() * 1e-6));
+        Map<String, Sensor> sensors = new HashMap<>();
+        found.values().forEach(c -> sensors.put(c.sensor().code(), c.sensor()));
+        WaterState bare = new WaterState(pointId, at, used, List.of(), null, List.of());
+        Inputs inputs = Inputs.of(bare, sensors);
         List<Note> cautions = new ArrayList<>();
-        if (used.stream().anyMatch(input -> input.flag() == Flag.SUSPECT)) {
+        if (bare.suspect()) {
             cautions.add(
                     new Note("suspect-input", "an input is marked suspect, and so is everything computed from it"));
         }
+        CarbonateResult result = inputs.solve();
         if (result instanceof Unsolvable refusal) {
             cautions.add(new Note(refusal.reason().code(), refusal.detail()));
             return new WaterState(pointId, at, used, List.of(), null, cautions);
         }
         CarbonateState state = ((Solved) result).state();
         state.cautions().forEach(caution -> cautions.add(new Note(caution.code(), caution.detail())));
-        StateUncertainty uncertainty = Uncertainty.of(
-                state,
-                InputUncertainty.ofPhAndAlkalinity(
-                        phUncertainty(ph, scale),
-                        alkalinity.sensor().standardUncertainty() * 1e-6,
-                        temperature.sensor().standardUncertainty(),
-                        salinity.sensor().standardUncertainty()));
+        StateUncertainty uncertainty = Uncertainty.of(state, inputs.uncertainty());
         return new WaterState(pointId, at, used, List.of(), numbers(state, uncertainty), cautions);
     }
 
-    private static double phUncertainty(Candidate ph, PhScale scale) {
-        double registered = ph.sensor().standardUncertainty();
-        return scale == PhScale.NBS ? Math.max(registered, InputUncertainty.PH_ON_NBS_BUFFERS) : registered;
-    }
+    /** The inputs of a complete state with what is known of their sensors. */
+    record Inputs(
+            double ph,
+            PhScale scale,
+            double temperatureC,
+            double salinity,
+            double totalAlkalinityUmolKg,
+            InputUncertainty uncertainty) {
 
-    private static PhScale scaleOf(Candidate ph) {
-        @Nullable PhScale scale = ph.sensor().phScale();
-        if (scale == null) {
-            throw new IllegalStateException("pH sensor " + ph.sensor().code() + " has no scale");
+        /** @throws IllegalStateException when the state lacks an input */
+        static Inputs of(WaterState state, Map<String, Sensor> sensors) {
+            InputUsed ph = input(state, Quantity.PH);
+            InputUsed temperature = input(state, Quantity.TEMPERATURE);
+            InputUsed salinity = input(state, Quantity.SALINITY);
+            InputUsed alkalinity = input(state, Quantity.TOTAL_ALKALINITY);
+            PhScale scale = sensor(ph, sensors).phScale();
+            if (scale == null) {
+                throw new IllegalStateException("pH sensor " + ph.sensor() + " has no scale");
+            }
+            double registered = sensor(ph, sensors).standardUncertainty();
+            return new Inputs(
+                    ph.value(),
+                    scale,
+                    temperature.value(),
+                    salinity.value(),
+                    alkalinity.value(),
+                    InputUncertainty.ofPhAndAlkalinity(
+                            scale == PhScale.NBS
+                                    ? Math.max(registered, InputUncertainty.PH_ON_NBS_BUFFERS)
+                                    : registered,
+                            sensor(alkalinity, sensors).standardUncertainty() * 1e-6,
+                            sensor(temperature, sensors).standardUncertainty(),
+                            sensor(salinity, sensors).standardUncertainty()));
         }
-        return scale;
-    }
 
-    private static Candidate need(Map<Quantity, Candidate> found, Quantity quantity) {
-        Candidate candidate = found.get(quantity);
-        if (candidate == null) {
-            throw new IllegalStateException(quantity.code() + " was expected among the inputs");
+        CarbonateResult solve() {
+            return CarbonateSystem.solve(
+                    Conditions.of(temperatureC, salinity),
+                    new KnownPair.PhAndAlkalinity(ph, scale, totalAlkalinityUmolKg * 1e-6));
         }
-        return candidate;
+
+        private static InputUsed input(WaterState state, Quantity quantity) {
+            return state.inputs().stream()
+                    .filter(input -> input.quantity() == quantity)
+                    .findFirst()
+                    .orElseThrow(() -> new IllegalStateException(quantity.code() + " is not among the inputs"));
+        }
+
+        private static Sensor sensor(InputUsed input, Map<String, Sensor> sensors) {
+            Sensor sensor = sensors.get(input.sensor());
+            if (sensor == null) {
+                throw new IllegalStateException("sensor " + input.sensor() + " is not registered any more");
+            }
+            return sensor;
+        }
     }
 
     private static WaterNumbers numbers(CarbonateState state, StateUncertainty uncertainty) {

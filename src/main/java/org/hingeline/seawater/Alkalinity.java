@@ -52,7 +52,7 @@ final class Alkalinity {
         return total * k * h / (sum * sum);
     }
 
-    /** Minus the variance of the proton count: charge falls as protons bind (Munhoven 2013, eq. 10). */
+    /** Minus the variance of the proton count: charge falls as protons bind (Munhoven 2013). */
     private double phosphoricSlope(double h) {
         if (phosphate == 0) {
             return 0;

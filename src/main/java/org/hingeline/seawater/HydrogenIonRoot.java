@@ -7,8 +7,8 @@ import java.util.OptionalDouble;
  * proof, with bisection where a Newton step would leave it: the approach of Munhoven, G. (2013), Mathematics of the
  * total alkalinity–pH equation, Geoscientific Model Development 6, 1367–1388.
  *
- * <p>Alkalinity falls strictly with [H]. Everything in it but hydroxide and free H⁺ is bounded (section 2.2 of the
- * paper), so the root lies between those of a/h − h/s = c for the two bounds, which are closed forms.
+ * <p>Alkalinity falls strictly with [H]. Everything in it but hydroxide and free H⁺ is bounded, so the root lies between
+ * those of a/h − h/s = c for the two bounds, which are closed forms.
  */
 final class HydrogenIonRoot {
     /** Relative in [H]. */

@@ -2,8 +2,8 @@ package org.hingeline.seawater;
 
 /**
  * Solubility products of aragonite and calcite: Mucci, A. (1983), The solubility of calcite and aragonite in seawater
- * at various salinities, temperatures, and one atmosphere total pressure, American Journal of Science 283, 780–799,
- * table 7. (mol/kg-seawater)².
+ * at various salinities, temperatures, and one atmosphere total pressure, American Journal of Science 283, 780–799.
+ * (mol/kg-seawater)².
  */
 final class Mucci1983 {
     static final FitRange RANGE = new FitRange("Ksp of aragonite and calcite of Mucci 1983", 5, 44, 5, 40);

@@ -264,6 +264,21 @@ final class AlertTables implements AlertBook {
     }
 
     @Override
+    public int countOpen() {
+        return handle.createQuery("SELECT count(*) FROM alert WHERE closed_at IS NULL")
+                .mapTo(Integer.class)
+                .one();
+    }
+
+    @Override
+    public int countSilent() {
+        return handle.createQuery("""
+                        SELECT count(*) FROM alert
+                        WHERE closed_at IS NULL AND quantity = 'silence' AND phase <> 'returned-unacknowledged'
+                        """).mapTo(Integer.class).one();
+    }
+
+    @Override
     public List<Alert> closedAlerts(long siteId, int most) {
         return handle.createQuery("""
                         SELECT * FROM alert WHERE site_id = :site AND closed_at IS NOT NULL

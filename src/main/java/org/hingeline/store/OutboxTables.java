@@ -40,6 +40,20 @@ final class OutboxTables implements OutboxBook {
     }
 
     @Override
+    public boolean anyDue(Instant now) {
+        return handle.createQuery("""
+                        SELECT id FROM outbox
+                        WHERE state = 'WAITING' AND next_attempt_at <= :now
+                          AND (claimed_until IS NULL OR claimed_until <= :now)
+                        LIMIT 1
+                        """)
+                .bind("now", now)
+                .mapTo(Long.class)
+                .findOne()
+                .isPresent();
+    }
+
+    @Override
     public List<Message> claimDue(Instant now, Duration claim, String node, int most) {
         List<Long> due = handle.createQuery("""
                         SELECT id FROM outbox

@@ -1,4 +1,4 @@
-/** The web: one routes class per resource, and the pages. */
+/** Over HTTP: one routes class per resource, for programs under {@code /api/v1} and for people as pages. */
 @NullMarked
 package org.hingeline.web;
 

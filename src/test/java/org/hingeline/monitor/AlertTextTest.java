@@ -173,6 +173,22 @@ class AlertTextTest {
     }
 
     @Test
+    void silence_of_a_point_that_never_had_an_omega_does_not_speak_of_it() {
+        Instant last = NOW.minus(Duration.ofMinutes(134));
+        WaterState temperatureOnly = new WaterState(
+                3,
+                last,
+                List.of(new InputUsed(Quantity.TEMPERATURE, 22.04, last, "sensor", "t-3", Flag.PASS)),
+                List.of(new MissingInput(Quantity.PH, null, Duration.ofMinutes(15))),
+                null,
+                List.of());
+
+        assertThat(AlertText.silence(news(silence(134), temperatureOnly, null)).body())
+                .startsWith("Larval 3 (20 m3): nothing heard since 01:10, for 2 h 14 min.\n")
+                .contains("  temperature 22.0 °C, sensor t-3 at 01:10, 2 h 14 min ago\n");
+    }
+
+    @Test
     void a_silent_point_that_is_heard_again_says_so() {
         AlertText text = AlertText.backToNormal(news(silence(134), water(), null));
 

@@ -1,0 +1,10 @@
+package org.hingeline.dosing;
+
+/**
+ * A number with the range that one standard uncertainty gives it.
+ *
+ * @param value the number
+ * @param low its lower end
+ * @param high its upper end
+ */
+public record Amount(double value, double low, double high) {}

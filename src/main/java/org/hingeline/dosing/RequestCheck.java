@@ -1,0 +1,175 @@
+package org.hingeline.dosing;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.hingeline.seawater.CarbonateResult;
+import org.hingeline.seawater.CarbonateResult.Solved;
+import org.hingeline.seawater.CarbonateResult.Unsolvable;
+import org.hingeline.seawater.CarbonateState;
+import org.hingeline.seawater.Caution;
+import org.hingeline.seawater.Coverage;
+
+/** Everything that refuses a request before any dose is looked for; all reasons are given at once. */
+final class RequestCheck {
+    private static final double VOLUME_MAX_L = 1e7;
+    private static final double AERATION_MIN_ATM = 100e-6;
+    private static final double AERATION_MAX_ATM = 5000e-6;
+    private static final double ALKALINITY_MAX = 0.01;
+    /** A stock is to stay clear of saturation by a fifth, or it falls out when it cools. */
+    private static final double SOLUBILITY_SHARE = 0.8;
+
+    private final DoseRequest request;
+    private final List<Reason> reasons = new ArrayList<>();
+
+    private RequestCheck(DoseRequest request) {
+        this.request = request;
+    }
+
+    static List<Reason> reasons(DoseRequest request) {
+        RequestCheck check = new RequestCheck(request);
+        check.inputs();
+        check.water();
+        check.receiver();
+        check.product();
+        check.stock();
+        check.target();
+        check.aeration();
+        return check.reasons;
+    }
+
+    private void inputs() {
+        for (InputNote note : request.inputNotes()) {
+            refuse(
+                    "input-" + note.problem().word(),
+                    note.quantity() + " is " + note.problem().word() + ": " + note.detail(),
+                    note.problem().lift());
+        }
+    }
+
+    private void water() {
+        CarbonateResult water = request.water();
+        if (water == null) {
+            if (request.inputNotes().isEmpty()) {
+                refuse(
+                        "water-unknown",
+                        "The state of the water is not known.",
+                        "Measure pH, alkalinity, temperature and" + " salinity.");
+            }
+        } else if (water instanceof Unsolvable u) {
+            refuse("water-unsolvable", u.reason().code() + ": " + u.detail(), "Check the value and measure again.");
+        } else if (water instanceof Solved solved) {
+            double alkalinity = solved.state().totalAlkalinity();
+            if (!(alkalinity >= 0 && alkalinity <= ALKALINITY_MAX)) {
+                refuse(
+                        "water-implausible",
+                        "A total alkalinity of " + Words.number(alkalinity * 1e6, 0)
+                                + " µmol/kg is no water of a hatchery.",
+                        "Titrate again: 0 to " + Words.number(ALKALINITY_MAX * 1e6, 0) + " µmol/kg is accepted.");
+            }
+            for (Caution caution : Coverage.ofDecisiveFits(solved.state().conditions())) {
+                refuse(
+                        "outside-fits",
+                        caution.detail(),
+                        "Use constants whose range holds the water (millero2006 for estuaries), or dose where it does.");
+            }
+        }
+    }
+
+    private void receiver() {
+        if (request.receiver() instanceof Receiver.Tank tank
+                && !(tank.volumeL() > 0 && tank.volumeL() <= VOLUME_MAX_L)) {
+            refuse(
+                    "volume-implausible",
+                    "A tank of " + tank.volumeL() + " L cannot be planned for.",
+                    "Give the volume in litres, above 0 and at most 10,000,000 (10,000 m³).");
+        }
+    }
+
+    private void product() {
+        if (!(request.assayPercent() >= 1 && request.assayPercent() <= 100)) {
+            refuse(
+                    "assay-implausible",
+                    "An assay of " + request.assayPercent() + " % cannot be.",
+                    "Read the assay from the label or the certificate: 1 to 100 %.");
+        }
+    }
+
+    private void stock() {
+        Double strength = request.stockGramsPerLitre();
+        if (strength == null) {
+            return;
+        }
+        if (!(strength > 0 && Double.isFinite(strength))) {
+            refuse(
+                    "stock-implausible",
+                    "A stock of " + strength + " g/L cannot be.",
+                    "Give the strength of the stock in g per litre, above 0.");
+            return;
+        }
+        if (request.water() instanceof Solved solved) {
+            double most = strongestStock(solved.state());
+            if (strength > most) {
+                refuse(
+                        "stock-too-strong",
+                        "A stock of " + Words.number(strength, 1) + " g/L does not stay dissolved at "
+                                + Words.number(solved.state().conditions().temperatureC(), 1)
+                                + " °C, the temperature of the water.",
+                        "Make the stock no stronger than " + Words.number(Math.floor(most), 0) + " g/L.");
+            }
+        }
+    }
+
+    /** g of what is weighed per L of stock, at the water's temperature; a litre of stock holds less than 1 kg of water. */
+    private double strongestStock(CarbonateState water) {
+        double anhydrousPerLitre = 10
+                * request.agent()
+                        .solubility()
+                        .gramsPer100GWater(water.conditions().temperatureC());
+        return SOLUBILITY_SHARE * anhydrousPerLitre / request.agent().anhydrousShare(request.form());
+    }
+
+    private void target() {
+        Target target = request.target();
+        Bounds bounds = request.bounds();
+        double most = switch (kind(target)) {
+            case OMEGA -> bounds.omegaAragoniteMax();
+            case PH -> bounds.phTotalMax();
+            case ALKALINITY -> ALKALINITY_MAX;
+        };
+        if (!(target.value() > 0 && Double.isFinite(target.value()))) {
+            refuse("target-implausible", target.words() + " cannot be a target.", "Give a target above 0.");
+        } else if (target.value() > most) {
+            refuse(
+                    "target-above-bounds",
+                    target.words() + " is above the bound of " + most + ".",
+                    "Ask for no more than " + most + "; the bounds are the site's to edit.");
+        }
+    }
+
+    private enum Kind {
+        OMEGA,
+        PH,
+        ALKALINITY
+    }
+
+    private static Kind kind(Target target) {
+        if (target instanceof Target.OmegaAragonite) {
+            return Kind.OMEGA;
+        }
+        return target instanceof Target.PhTotal ? Kind.PH : Kind.ALKALINITY;
+    }
+
+    private void aeration() {
+        double pco2 = request.aerationPco2Atm();
+        if (!(pco2 >= AERATION_MIN_ATM && pco2 <= AERATION_MAX_ATM)) {
+            refuse(
+                    "aeration-implausible",
+                    "Aeration to " + Words.number(pco2 * 1e6, 0) + " µatm cannot be.",
+                    "Give the pCO2 that aeration reaches: 100 to 5000 µatm, 420 in open air.");
+        }
+    }
+
+    private void refuse(String code, String detail, String lift) {
+        reasons.add(new Reason(code, detail, lift));
+    }
+}

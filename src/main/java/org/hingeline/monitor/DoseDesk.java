@@ -1,0 +1,249 @@
+package org.hingeline.monitor;
+
+import java.util.List;
+import java.util.Optional;
+import org.hingeline.dosing.Agent;
+import org.hingeline.dosing.Bounds;
+import org.hingeline.dosing.DosePlan;
+import org.hingeline.dosing.DosePlanner;
+import org.hingeline.dosing.DoseRequest;
+import org.hingeline.dosing.Receiver;
+import org.hingeline.dosing.Target;
+import org.hingeline.hatchery.Point;
+import org.hingeline.hatchery.Site;
+import org.hingeline.seawater.CarbonateSystem;
+import org.hingeline.seawater.Conditions;
+import org.hingeline.seawater.InputUncertainty;
+import org.hingeline.seawater.KnownPair;
+import org.hingeline.seawater.PhScale;
+import org.jspecify.annotations.Nullable;
+
+/** Suggests doses. Stores nothing and does nothing: a person confirms, a person doses. */
+public final class DoseDesk {
+
+    /**
+     * What holds where a request says nothing.
+     *
+     * @param aerateToUatm partial pressure of CO2 that aeration brings the water to, µatm
+     */
+    public record Defaults(
+            double phTotalMax,
+            double omegaAragoniteMax,
+            double phPerHourMax,
+            double aerateToUatm,
+            double stockGramsPerLitre) {}
+
+    private final StatusBoard board;
+    private final DoseWaters waters;
+    private final Defaults defaults;
+
+    public DoseDesk(StatusBoard board, DoseWaters waters, Defaults defaults) {
+        this.board = board;
+        this.waters = waters;
+        this.defaults = defaults;
+    }
+
+    public Defaults defaults() {
+        return defaults;
+    }
+
+    /**
+     * A suggestion, or why there is none.
+     *
+     * @throws FieldFaultsException when the request itself cannot be taken
+     */
+    public DosePlan plan(Site site, DoseWish wish) {
+        FieldFaults faults = new FieldFaults();
+        if ((wish.point() == null) == (wish.water() == null)) {
+            faults.add(
+                    "point",
+                    "exactly one of point and water is needed, got " + (wish.point() == null ? "neither" : "both"));
+        }
+        Optional<PointStatus> status = Optional.ofNullable(wish.point()).flatMap(code -> board.point(site, code));
+        if (wish.point() != null && status.isEmpty()) {
+            faults.add("point", "point \"" + wish.point() + "\" is not known at this site");
+        }
+        Double volumeL = wish.volumeL() != null
+                ? wish.volumeL()
+                : status.map(PointStatus::point).map(Point::volumeL).orElse(null);
+        if (volumeL == null || !Double.isFinite(volumeL)) {
+            faults.add(
+                    "volumeL",
+                    "volumeL is missing: the point has no volume set, so the request must say it, in litres");
+        }
+        Target target = target(wish.target(), faults);
+        Agent agent = agent(wish.agent(), faults);
+        Agent.Form form = form(wish.agent(), agent, faults);
+        double assay = number(
+                "agent/assayPercent", wish.agent() == null ? null : wish.agent().assayPercent(), 100, faults);
+        Bounds bounds = bounds(wish.bounds(), faults);
+        double stock = number("stockGramsPerLitre", wish.stockGramsPerLitre(), defaults.stockGramsPerLitre(), faults);
+        double air = number("aerateToUatm", wish.aerateToUatm(), defaults.aerateToUatm(), faults);
+        if (!(air >= 100 && air <= 5000)) {
+            faults.add("aerateToUatm", "aerateToUatm " + air + " must be 100 to 5000 \u00b5atm");
+        }
+        DoseWaters.Water water = status.isPresent()
+                ? waters.of(status.get())
+                : wish.water() != null ? given(wish.water(), faults) : null;
+        faults.throwIfAny();
+        if (water == null || target == null || agent == null || form == null || bounds == null || volumeL == null) {
+            throw new IllegalStateException("a fault was not told");
+        }
+        return DosePlanner.plan(new DoseRequest(
+                water.result(),
+                water.uncertainty(),
+                water.notes(),
+                new Receiver.Tank(volumeL),
+                target,
+                agent,
+                form,
+                assay,
+                bounds,
+                stock,
+                air * 1e-6));
+    }
+
+    private static @Nullable Target target(DoseWish.@Nullable Target wish, FieldFaults faults) {
+        if (wish == null) {
+            faults.add("target", "target is missing; give one of omegaAragonite, phTotal, totalAlkalinityUmolKg");
+            return null;
+        }
+        Double omega = wish.omegaAragonite();
+        Double ph = wish.phTotal();
+        Double alkalinity = wish.totalAlkalinityUmolKg();
+        int given = (omega == null ? 0 : 1) + (ph == null ? 0 : 1) + (alkalinity == null ? 0 : 1);
+        if (given != 1) {
+            faults.add(
+                    "target",
+                    "target needs exactly one of omegaAragonite, phTotal, totalAlkalinityUmolKg; it has " + given);
+            return null;
+        }
+        if (omega != null) {
+            return within("target/omegaAragonite", omega, 0, 10, faults) ? new Target.OmegaAragonite(omega) : null;
+        }
+        if (ph != null) {
+            return within("target/phTotal", ph, 6, 9.5, faults) ? new Target.PhTotal(ph) : null;
+        }
+        return alkalinity != null && within("target/totalAlkalinityUmolKg", alkalinity, 0, 6000, faults)
+                ? new Target.TotalAlkalinity(alkalinity * 1e-6)
+                : null;
+    }
+
+    private static boolean within(String field, double value, double above, double most, FieldFaults faults) {
+        boolean good = value > above && value <= most;
+        if (!good) {
+            faults.add(field, field + " " + value + " must be above " + above + " and at most " + most);
+        }
+        return good;
+    }
+
+    private static @Nullable Agent agent(DoseWish.@Nullable Agent wish, FieldFaults faults) {
+        String code = wish == null || wish.code() == null ? Agent.SODIUM_CARBONATE.code() : wish.code();
+        Optional<Agent> agent = Agent.ofCode(code);
+        if (agent.isEmpty()) {
+            faults.add(
+                    "agent/code",
+                    "agent \"" + code + "\" cannot be planned; accepted: "
+                            + String.join(
+                                    ", ", Agent.all().stream().map(Agent::code).toList()));
+        }
+        return agent.orElse(null);
+    }
+
+    private static Agent.@Nullable Form form(DoseWish.@Nullable Agent wish, @Nullable Agent agent, FieldFaults faults) {
+        if (agent == null) {
+            return null;
+        }
+        String accepted =
+                String.join(", ", agent.forms().stream().map(Agent.Form::code).toList());
+        String hydration = wish == null ? null : wish.hydration();
+        if (hydration == null) {
+            faults.add(
+                    "agent/hydration",
+                    "hydration is missing: decahydrate taken for anhydrous gives 2.7 times too little. Read the label;"
+                            + " accepted: " + accepted);
+            return null;
+        }
+        Optional<Agent.Form> form = agent.form(hydration);
+        if (form.isEmpty()) {
+            faults.add("agent/hydration", "hydration \"" + hydration + "\" is not known; accepted: " + accepted);
+        }
+        return form.orElse(null);
+    }
+
+    private static double number(String field, @Nullable Double value, double otherwise, FieldFaults faults) {
+        if (value != null && !Double.isFinite(value)) {
+            faults.add(field, field + " " + value + " must be a finite number");
+        }
+        return value == null ? otherwise : value;
+    }
+
+    private @Nullable Bounds bounds(DoseWish.@Nullable Bounds wish, FieldFaults faults) {
+        try {
+            return new Bounds(
+                    wish == null || wish.phTotalMax() == null ? defaults.phTotalMax() : wish.phTotalMax(),
+                    wish == null || wish.omegaAragoniteMax() == null
+                            ? defaults.omegaAragoniteMax()
+                            : wish.omegaAragoniteMax(),
+                    wish == null || wish.phPerHourMax() == null ? defaults.phPerHourMax() : wish.phPerHourMax());
+        } catch (IllegalArgumentException e) {
+            String detail = String.valueOf(e.getMessage());
+            faults.add("bounds/" + detail.split(" ", 2)[0], detail);
+            return null;
+        }
+    }
+
+    private static DoseWaters.@Nullable Water given(DoseWish.Water wish, FieldFaults faults) {
+        Double temperatureC = required("water/temperatureC", wish.temperatureC(), faults);
+        Double salinity = required("water/salinity", wish.salinity(), faults);
+        Double ph = required("water/ph", wish.ph(), faults);
+        Double alkalinity = required("water/totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg(), faults);
+        String scaleName = wish.phScale() == null ? PhScale.TOTAL.wireName() : wish.phScale();
+        Optional<PhScale> scale = PhScale.fromWireName(scaleName);
+        if (scale.isEmpty()) {
+            faults.add("water/phScale", "phScale \"" + scaleName + "\" is not one of total, seawater, free, nbs");
+        }
+        DoseWish.Uncertainty u = wish.uncertainty();
+        InputUncertainty standard = InputUncertainty.DEFAULTS;
+        double phDefault =
+                scale.orElse(PhScale.TOTAL) == PhScale.NBS ? InputUncertainty.PH_ON_NBS_BUFFERS : standard.ph();
+        double uPh = notNegative("water/uncertainty/ph", u == null ? null : u.ph(), phDefault, faults);
+        double uAlkalinity = notNegative(
+                "water/uncertainty/totalAlkalinityUmolKg",
+                u == null ? null : u.totalAlkalinityUmolKg(),
+                standard.totalAlkalinity() * 1e6,
+                faults);
+        double uTemperature = notNegative(
+                "water/uncertainty/temperatureC", u == null ? null : u.temperatureC(), standard.temperatureC(), faults);
+        double uSalinity =
+                notNegative("water/uncertainty/salinity", u == null ? null : u.salinity(), standard.salinity(), faults);
+        if (temperatureC == null || salinity == null || ph == null || alkalinity == null || scale.isEmpty()) {
+            return null;
+        }
+        return new DoseWaters.Water(
+                CarbonateSystem.solve(
+                        Conditions.of(temperatureC, salinity),
+                        new KnownPair.PhAndAlkalinity(ph, scale.get(), alkalinity * 1e-6)),
+                InputUncertainty.ofPhAndAlkalinity(uPh, uAlkalinity * 1e-6, uTemperature, uSalinity),
+                List.of());
+    }
+
+    private static @Nullable Double required(String field, @Nullable Double value, FieldFaults faults) {
+        if (value == null || !Double.isFinite(value)) {
+            faults.add(field, field + (value == null ? " is missing" : " " + value + " must be a finite number"));
+            return null;
+        }
+        return value;
+    }
+
+    private static double notNegative(String field, @Nullable Double value, double otherwise, FieldFaults faults) {
+        if (value == null) {
+            return otherwise;
+        }
+        if (!(value >= 0 && Double.isFinite(value))) {
+            faults.add(field, field + " " + value + " must be a number of at least 0");
+            return otherwise;
+        }
+        return value;
+    }
+}

@@ -1,0 +1,36 @@
+package org.hingeline.monitor;
+
+import java.time.InstantSource;
+
+/** The timed work that nobody asks for: time passing over the limits, late states computed again, old sessions gone. */
+public final class Housekeeping {
+    private final Storage storage;
+    private final InstantSource clock;
+    private final AlertWatch watch;
+    private final WaterLedger ledger;
+
+    public Housekeeping(Storage storage, InstantSource clock, AlertWatch watch, AgeLimits ageLimits) {
+        this.storage = storage;
+        this.clock = clock;
+        this.watch = watch;
+        this.ledger = new WaterLedger(ageLimits);
+    }
+
+    /** Lets time pass over every limit. */
+    public void watchLimits() {
+        storage.writeOnly(books -> watch.tick(books, clock.instant()));
+    }
+
+    /**
+     * Computes a few of the states again that late readings have made out of date.
+     *
+     * @return whether there is more to do
+     */
+    public boolean workOffLateReadings() {
+        return storage.read(books -> books.water().nextSpan()).isPresent() && storage.write(ledger::workOff);
+    }
+
+    public void removeOldSessions() {
+        storage.writeOnly(books -> books.people().removeSessionsExpiredBy(clock.instant()));
+    }
+}

@@ -1,0 +1,141 @@
+package org.hingeline.monitor;
+
+import java.time.Duration;
+import java.time.Instant;
+import java.time.InstantSource;
+import java.util.ArrayList;
+import java.util.Collections;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+import org.hingeline.alert.Limit;
+import org.hingeline.hatchery.Batch;
+import org.hingeline.hatchery.Point;
+import org.hingeline.hatchery.Sensor;
+import org.hingeline.hatchery.Site;
+import org.hingeline.measure.Quantity;
+import org.hingeline.monitor.AlertBook.Alert;
+import org.hingeline.monitor.ReadingBook.StoredReading;
+
+/** What the pages and the API show of the water: how each point stands now, and its history. */
+public final class StatusBoard {
+    /** States answered to one question for history; a longer span is thinned by its step. */
+    private static final int MOST_STATES = 50_000;
+
+    private final Storage storage;
+    private final InstantSource clock;
+
+    public StatusBoard(Storage storage, InstantSource clock) {
+        this.storage = storage;
+        this.clock = clock;
+    }
+
+    /** Every point of the site in the order of the water's path. */
+    public List<PointStatus> points(Site site) {
+        Instant now = clock.instant();
+        return storage.read(books -> {
+            List<Alert> alerts = books.alerts().openAlerts(site.id());
+            List<Batch> batches = books.place().batchesNow(site.id(), now);
+            return books.place().points(site.id()).stream()
+                    .map(point -> status(books, point, alerts, batches, now))
+                    .toList();
+        });
+    }
+
+    public Optional<PointStatus> point(Site site, String code) {
+        Instant now = clock.instant();
+        return storage.read(books -> books.place()
+                .point(site.id(), code)
+                .map(point -> status(
+                        books,
+                        point,
+                        books.alerts().openAlerts(site.id()),
+                        books.place().batchesNow(site.id(), now),
+                        now)));
+    }
+
+    private static PointStatus status(Books books, Point point, List<Alert> alerts, List<Batch> batches, Instant now) {
+        List<Limit> limits = books.alerts().limits(point.id());
+        return new PointStatus(
+                point,
+                books.water().newest(point.id()).orElse(null),
+                limits,
+                alerts.stream()
+                        .filter(alert -> alert.pointId() == point.id())
+                        .sorted(Comparator.comparing(Alert::priority).reversed())
+                        .toList(),
+                batches.stream().filter(b -> b.pointId() == point.id()).reduce((earlier, later) -> later),
+                newestReadings(books, point, limits, now),
+                now);
+    }
+
+    private static List<PointStatus.Known> newestReadings(Books books, Point point, List<Limit> limits, Instant now) {
+        List<PointStatus.Known> known = new ArrayList<>();
+        for (Sensor sensor : books.place().sensorsOf(point.id())) {
+            if (limits.stream().anyMatch(limit -> limit.quantity() == sensor.quantity())) {
+                newest(books, sensor, point.maxGap(), now)
+                        .ifPresent(reading -> known.add(new PointStatus.Known(sensor.quantity(), reading)));
+            }
+        }
+        known.sort(
+                Comparator.comparing((PointStatus.Known k) -> k.reading().at()).reversed());
+        return known;
+    }
+
+    private static Optional<StoredReading> newest(Books books, Sensor sensor, Duration gap, Instant now) {
+        return books.readings().newestBefore(sensor.id(), now.minus(gap), now.plus(gap));
+    }
+
+    /**
+     * Water states of a time span, oldest first; of each step only the newest.
+     *
+     * @param step zero for every state
+     */
+    public List<WaterState> history(Point point, Instant from, Instant to, Duration step) {
+        List<WaterState> all = storage.read(books -> books.water().between(point.id(), from, to, MOST_STATES));
+        if (step.isZero()) {
+            return all;
+        }
+        List<WaterState> thinned = new ArrayList<>();
+        long last = Long.MIN_VALUE;
+        for (int i = all.size() - 1; i >= 0; i--) {
+            long slot = Math.floorDiv(all.get(i).at().toEpochMilli(), step.toMillis());
+            if (slot != last) {
+                thinned.add(all.get(i));
+                last = slot;
+            }
+        }
+        Collections.reverse(thinned);
+        return thinned;
+    }
+
+    /** Readings of one quantity at a point, by sensor, oldest first. */
+    public List<SensorReadings> readings(Point point, Quantity quantity, Instant from, Instant to) {
+        return storage.read(books -> books.place().sensorsOf(point.id()).stream()
+                .filter(sensor -> sensor.quantity() == quantity)
+                .map(sensor -> new SensorReadings(sensor, books.readings().between(sensor.id(), from, to)))
+                .toList());
+    }
+
+    /** Readings of one sensor. */
+    public record SensorReadings(Sensor sensor, List<StoredReading> readings) {}
+
+    /** Closed alerts, newest first. */
+    public List<Alert> closedAlerts(Site site, int most) {
+        return storage.read(books -> books.alerts().closedAlerts(site.id(), most));
+    }
+
+    public Optional<Alert> alert(Site site, long id) {
+        return storage.read(books -> books.alerts().alert(site.id(), id));
+    }
+
+    /** Who was told of an alert. */
+    public List<OutboxBook.Message> messagesOf(Alert alert) {
+        return storage.read(books -> books.outbox().messagesOf(alert.id()));
+    }
+
+    /** What was sent, newest first. */
+    public List<OutboxBook.Message> messages(Site site, int most) {
+        return storage.read(books -> books.outbox().messages(site.id(), most));
+    }
+}

@@ -1,0 +1,248 @@
+package org.hingeline.web;
+
+import io.javalin.config.RoutesConfig;
+import io.javalin.http.Context;
+import java.time.Duration;
+import java.time.ZoneId;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.hingeline.alert.Limit;
+import org.hingeline.dosing.Amount;
+import org.hingeline.dosing.DosePlan;
+import org.hingeline.dosing.DoseStep;
+import org.hingeline.measure.Quantity;
+import org.hingeline.monitor.DoseDesk;
+import org.hingeline.monitor.DoseWish;
+import org.hingeline.monitor.FieldFaults;
+import org.hingeline.monitor.FieldFaultsException;
+import org.hingeline.monitor.PointStatus;
+import org.hingeline.monitor.StatusBoard;
+import org.hingeline.seawater.CarbonateState;
+import org.hingeline.web.view.DoseView;
+import org.hingeline.web.view.DoseView.Outcome;
+import org.hingeline.web.view.DoseView.Result;
+import org.hingeline.web.view.DoseView.Step;
+import org.hingeline.web.view.DoseView.WaterLine;
+import org.hingeline.web.view.Form;
+import org.hingeline.web.view.Moment;
+import org.jspecify.annotations.Nullable;
+
+/** Working out a dose for a tank. Stores nothing: a person confirms, a person doses. */
+final class DosePages {
+    /** A target a little above the limit, so that the tank does not ring again at once. */
+    private static final double ABOVE_LIMIT = 0.2;
+
+    private static final double TARGET_WITHOUT_LIMIT = 2.0;
+
+    private final StatusBoard board;
+    private final DoseDesk doses;
+    private final PageMaker pages;
+
+    DosePages(StatusBoard board, DoseDesk doses, PageMaker pages) {
+        this.board = board;
+        this.doses = doses;
+        this.pages = pages;
+    }
+
+    void addTo(RoutesConfig routes) {
+        routes.get("/points/{code}/dose", this::ask, Gate.VIEWER);
+        routes.post("/points/{code}/dose", this::plan, Gate.VIEWER);
+    }
+
+    private void ask(Context ctx) {
+        PointStatus point = PointRoutes.found(board, ctx);
+        show(ctx, 200, point, blank(point), null);
+    }
+
+    private void plan(Context ctx) {
+        PointStatus point = PointRoutes.found(board, ctx);
+        try {
+            DosePlan plan = doses.plan(Visit.of(ctx).site(), wish(ctx, point));
+            Map<String, String> values = new LinkedHashMap<>();
+            ctx.formParamMap().forEach((field, sent) -> values.put(field, sent.isEmpty() ? "" : sent.get(0)));
+            values.remove(Gatekeeper.CSRF_FIELD);
+            show(ctx, 200, point, Form.of(values), result(plan, values.getOrDefault("hydration", "")));
+        } catch (FieldFaultsException e) {
+            show(ctx, 422, point, Forms.refused(ctx, withFormNames(e)), null);
+        }
+    }
+
+    /** The use case names the fields of its own request; the form has them under shorter names. */
+    private static FieldFaultsException withFormNames(FieldFaultsException e) {
+        return new FieldFaultsException(e.faults().stream()
+                .map(fault -> new FieldFaults.Fault(
+                        fault.field().startsWith("target")
+                                ? "targetOmega"
+                                : fault.field().substring(fault.field().lastIndexOf('/') + 1),
+                        fault.detail()))
+                .toList());
+    }
+
+    private void show(Context ctx, int status, PointStatus point, Form form, @Nullable Result result) {
+        ZoneId zone = PageMaker.zone(ctx);
+        pages.show(
+                ctx,
+                status,
+                "dose",
+                "water",
+                new DoseView(point.point().code(), point.point().name(), waterNow(point, zone), form, result),
+                "");
+    }
+
+    private static DoseWish wish(Context ctx, PointStatus point) {
+        FieldFaults faults = new FieldFaults();
+        DoseWish wish = new DoseWish(
+                point.point().code(),
+                null,
+                Forms.number(ctx, "volumeL", faults),
+                new DoseWish.Target(Forms.number(ctx, "targetOmega", faults), null, null),
+                new DoseWish.Agent(
+                        null,
+                        Forms.text(ctx, "hydration").isEmpty() ? null : Forms.text(ctx, "hydration"),
+                        Forms.number(ctx, "assayPercent", faults)),
+                new DoseWish.Bounds(
+                        Forms.number(ctx, "phTotalMax", faults),
+                        Forms.number(ctx, "omegaAragoniteMax", faults),
+                        Forms.number(ctx, "phPerHourMax", faults)),
+                Forms.number(ctx, "stockGramsPerLitre", faults),
+                null);
+        faults.throwIfAny();
+        return wish;
+    }
+
+    /** The form with the point's volume and the site's defaults; what is in the bag is for the person to say. */
+    private Form blank(PointStatus point) {
+        Optional<Limit> limit = point.watching().stream()
+                .filter(l -> l.quantity() == Quantity.OMEGA_ARAGONITE)
+                .findFirst();
+        Double volumeL = point.point().volumeL();
+        DoseDesk.Defaults defaults = doses.defaults();
+        return Form.of(Map.of(
+                "targetOmega",
+                Words.plain(Math.round(
+                                limit.map(l -> l.threshold() + ABOVE_LIMIT).orElse(TARGET_WITHOUT_LIMIT) * 100)
+                        / 100.0),
+                "volumeL",
+                volumeL == null ? "" : Words.plain(volumeL),
+                "assayPercent",
+                "99",
+                "stockGramsPerLitre",
+                Words.plain(defaults.stockGramsPerLitre()),
+                "phTotalMax",
+                Words.plain(defaults.phTotalMax()),
+                "omegaAragoniteMax",
+                Words.plain(defaults.omegaAragoniteMax()),
+                "phPerHourMax",
+                Words.plain(defaults.phPerHourMax())));
+    }
+
+    private static String waterNow(PointStatus point, ZoneId zone) {
+        return point.numbers()
+                .map(n -> "\u03a9 " + Words.number(n.omegaAragonite(), 2) + " \u00b1"
+                        + Words.number(n.omegaAragoniteUncertainty(), 2) + ", pH " + Words.number(n.phTotal(), 2)
+                        + ", " + Words.withUnit(Quantity.TEMPERATURE, n.temperatureC()) + ", salinity "
+                        + Words.number(n.salinity(), 1) + ", alkalinity "
+                        + Words.withUnit(Quantity.TOTAL_ALKALINITY, n.totalAlkalinityUmolKg()) + ", "
+                        + (point.newest() == null
+                                ? ""
+                                : Moment.of(point.newest().at(), point.now(), zone)
+                                        .age()) + ".")
+                .orElse("the water is not known well enough.");
+    }
+
+    private static Result result(DosePlan plan, String hydration) {
+        Amount mass = plan.massG();
+        return new Result(
+                Outcome.valueOf(plan.outcome().name()),
+                sentence(plan, hydration),
+                mass == null ? "" : grams(mass.value()),
+                mass == null ? "" : grams(mass.low()),
+                mass == null ? "" : grams(mass.high()),
+                plan.steps().stream().map(DosePages::step).toList(),
+                waters(plan),
+                plan.remedies().stream().map(remedy -> remedy.detail()).toList(),
+                plan.cautions().stream().map(caution -> caution.detail()).toList(),
+                plan.reasons().stream()
+                        .map(reason -> new DoseView.Reason(reason.detail(), reason.lift()))
+                        .toList());
+    }
+
+    private static String sentence(DosePlan plan, String hydration) {
+        Amount mass = plan.massG();
+        CarbonateState after = plan.after();
+        return switch (plan.outcome()) {
+            case NOT_NEEDED -> "No dose is needed.";
+            case REFUSED -> "No dose can be suggested.";
+            case PLAN ->
+                mass == null || after == null
+                        ? ""
+                        : grams(mass.value()) + " of " + hydration + " sodium carbonate in "
+                                + (plan.steps().size() == 1
+                                        ? "one step"
+                                        : plan.steps().size() + " steps")
+                                + " would bring \u03a9 to " + Words.number(after.omegaAragonite(), 2) + ".";
+        };
+    }
+
+    private static Step step(DoseStep step) {
+        Double stock = step.stockMl();
+        return new Step(
+                step.atMinutes() == 0 ? "At once" : "After " + Moment.span(Duration.ofMinutes(step.atMinutes())),
+                grams(step.massG()),
+                stock == null ? "" : Words.number(stock, 0) + "\u00a0mL",
+                Words.number(step.phTotal(), 2),
+                Words.number(step.omegaAragonite(), 2));
+    }
+
+    private static List<WaterLine> waters(DosePlan plan) {
+        CarbonateState before = plan.before();
+        CarbonateState after = plan.after();
+        CarbonateState aerated = plan.afterAeration();
+        if (before == null) {
+            return List.of();
+        }
+        List<WaterLine> lines = new ArrayList<>();
+        lines.add(line("\u03a9 aragonite", 2, before.omegaAragonite(), omega(after), omega(aerated)));
+        lines.add(line(
+                "pH, total scale",
+                2,
+                before.phTotal(),
+                after == null ? null : after.phTotal(),
+                aerated == null ? null : aerated.phTotal()));
+        lines.add(line(
+                "pCO\u2082, \u00b5atm",
+                0,
+                before.pco2Atm() * 1e6,
+                after == null ? null : after.pco2Atm() * 1e6,
+                aerated == null ? null : aerated.pco2Atm() * 1e6));
+        lines.add(line(
+                "total alkalinity, \u00b5mol/kg",
+                0,
+                before.totalAlkalinity() * 1e6,
+                after == null ? null : after.totalAlkalinity() * 1e6,
+                aerated == null ? null : aerated.totalAlkalinity() * 1e6));
+        return lines;
+    }
+
+    private static @Nullable Double omega(@Nullable CarbonateState state) {
+        return state == null ? null : state.omegaAragonite();
+    }
+
+    private static WaterLine line(
+            String name, int digits, double before, @Nullable Double after, @Nullable Double aerated) {
+        return new WaterLine(
+                name,
+                Words.number(before, digits),
+                after == null ? "" : Words.number(after, digits),
+                aerated == null ? "" : Words.number(aerated, digits));
+    }
+
+    private static String grams(double grams) {
+        return grams >= 10_000
+                ? Words.number(grams / 1000, 2) + "\u00a0kg"
+                : Words.number(grams, grams < 10 ? 2 : grams < 100 ? 1 : 0) + "\u00a0g";
+    }
+}

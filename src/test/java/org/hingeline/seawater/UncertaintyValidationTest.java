@@ -1,0 +1,225 @@
+package org.hingeline.seawater;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
+
+import java.util.Random;
+import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
+import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
+import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvFileSource;
+import org.junit.jupiter.params.provider.EnumSource;
+import org.junit.jupiter.params.provider.ValueSource;
+
+/** First-order propagation against published shares, against stepping and against chance. */
+class UncertaintyValidationTest {
+    private static final Conditions WATER = Conditions.of(22, 30);
+    private static final PhAndAlkalinity PAIR = new PhAndAlkalinity(7.9, 2078e-6);
+
+    @ParameterizedTest
+    @CsvFileSource(resources = "/reference/uncertainty.csv", useHeadersInDisplayName = true)
+    void agrees_with_the_shares_computed_elsewhere(
+            double ph,
+            double totalAlkalinity,
+            double temperatureC,
+            double salinity,
+            String share,
+            double percent,
+            double stepTolerance,
+            double firstOrderTolerance) {
+        InputUncertainty inputs =
+                InputUncertainty.ofPhAndAlkalinity(ph, totalAlkalinity * 1e-6, temperatureC, salinity);
+        CarbonateState state = CarbonateSystem.solve(WATER, PAIR).orElseThrow();
+        StandardUncertainty firstOrder = Uncertainty.of(state, inputs).omegaAragonite();
+        StandardUncertainty stepped = stepped(state, inputs);
+        assertThat(percent(stepped, share, state)).as("stepped").isCloseTo(percent, within(stepTolerance));
+        assertThat(percent(firstOrder, share, state)).as("first order").isCloseTo(percent, within(firstOrderTolerance));
+    }
+
+    private static double percent(StandardUncertainty u, String share, CarbonateState state) {
+        double part = switch (share) {
+            case "constants" -> u.fromConstants();
+            case "inputs" -> u.fromInputs();
+            case "total" -> u.total();
+            default -> throw new IllegalArgumentException("no such share: " + share);
+        };
+        return 100 * part / state.omegaAragonite();
+    }
+
+    private static StandardUncertainty stepped(CarbonateState state, InputUncertainty u) {
+        double omega = state.omegaAragonite();
+        double constants = 0;
+        for (int i = 0; i < Perturbed.CONSTANTS; i++) {
+            double[] off = new double[Perturbed.CONSTANTS];
+            // down in pK is up in K; Ksp goes down so that each step raises Ω, as the others do
+            off[i] = i == Perturbed.KSP ? -1 : 1;
+            constants = Math.hypot(constants, Perturbed.omegaAragonite(WATER, PAIR.ph(), 2078e-6, off) - omega);
+        }
+        double inputs = 0;
+        inputs = Math.hypot(inputs, omega(22, 30, 7.9 + u.ph(), 2078e-6) - omega);
+        inputs = Math.hypot(inputs, omega(22, 30, 7.9, 2078e-6 + u.totalAlkalinity()) - omega);
+        inputs = Math.hypot(inputs, omega(22 + u.temperatureC(), 30, 7.9, 2078e-6) - omega);
+        inputs = Math.hypot(inputs, omega(22, 30 + u.salinity(), 7.9, 2078e-6) - omega);
+        return StandardUncertainty.ofShares(constants, inputs);
+    }
+
+    private static double omega(double t, double s, double ph, double ta) {
+        return CarbonateSystem.solve(Conditions.of(t, s), new PhAndAlkalinity(ph, ta))
+                .orElseThrow()
+                .omegaAragonite();
+    }
+
+    @ParameterizedTest
+    @ValueSource(strings = {"phTotal", "dic", "co2", "bicarbonate", "carbonate", "pco2", "omegaAragonite"})
+    void a_seeded_play_of_chance_gives_the_same_spread_from_ph_and_alkalinity(String quantity) {
+        InputUncertainty u = InputUncertainty.ofPhAndAlkalinity(0.01, 8e-6, 0.1, 0.2);
+        CarbonateState state = CarbonateSystem.solve(WATER, PAIR).orElseThrow();
+        double expected = fromInputs(Uncertainty.of(state, u), quantity);
+        Spread spread = new Spread();
+        Random random = new Random(1981);
+        for (int i = 0; i < 20_000; i++) {
+            Conditions c = Conditions.of(
+                    22 + u.temperatureC() * random.nextGaussian(), 30 + u.salinity() * random.nextGaussian());
+            spread.add(quantity(
+                    c,
+                    new PhAndAlkalinity(7.9 + u.ph() * random.nextGaussian(), 2078e-6 + 8e-6 * random.nextGaussian()),
+                    quantity));
+        }
+        // 20,000 draws know a standard deviation to 0.5 %; three times that, and a little curvature
+        assertThat(spread.standardDeviation() / expected).isCloseTo(1, within(0.02));
+    }
+
+    @ParameterizedTest
+    @ValueSource(strings = {"phTotal", "co2", "bicarbonate", "carbonate", "pco2", "omegaAragonite"})
+    void a_seeded_play_of_chance_gives_the_same_spread_from_alkalinity_and_carbon(String quantity) {
+        InputUncertainty u = InputUncertainty.ofAlkalinityAndDic(4e-6, 3e-6, 0.1, 0.2);
+        AlkalinityAndDic pair = new AlkalinityAndDic(2200e-6, 2000e-6);
+        CarbonateState state = CarbonateSystem.solve(WATER, pair).orElseThrow();
+        double expected = fromInputs(Uncertainty.of(state, u), quantity);
+        Spread spread = new Spread();
+        Random random = new Random(2018);
+        for (int i = 0; i < 20_000; i++) {
+            Conditions c = Conditions.of(
+                    22 + u.temperatureC() * random.nextGaussian(), 30 + u.salinity() * random.nextGaussian());
+            spread.add(quantity(
+                    c,
+                    new AlkalinityAndDic(
+                            2200e-6 + 4e-6 * random.nextGaussian(), 2000e-6 + 3e-6 * random.nextGaussian()),
+                    quantity));
+        }
+        assertThat(spread.standardDeviation() / expected).isCloseTo(1, within(0.02));
+    }
+
+    @Test
+    void a_seeded_play_of_chance_with_the_constants_gives_their_share() {
+        CarbonateState state = CarbonateSystem.solve(WATER, PAIR).orElseThrow();
+        InputUncertainty none = InputUncertainty.ofPhAndAlkalinity(0, 0, 0, 0);
+        double expected = Uncertainty.of(state, none).omegaAragonite().fromConstants();
+        Spread spread = new Spread();
+        Random random = new Random(1990);
+        for (int i = 0; i < 20_000; i++) {
+            double[] off = new double[Perturbed.CONSTANTS];
+            for (int j = 0; j < off.length; j++) {
+                off[j] = random.nextGaussian();
+            }
+            spread.add(Perturbed.omegaAragonite(WATER, 7.9, 2078e-6, off));
+        }
+        assertThat(spread.standardDeviation() / expected).isCloseTo(1, within(0.025));
+    }
+
+    @ParameterizedTest
+    @EnumSource(PhScale.class)
+    void every_scale_moves_as_the_solver_does(PhScale scale) {
+        double ph = scale.fromTotal(7.9, 22, 30);
+        slopesAreThoseOfTheSolver(WATER, (a, b) -> new PhAndAlkalinity(ph + a, scale, 2078e-6 + b * 1e-4));
+    }
+
+    @Test
+    void the_other_pairs_move_as_the_solver_does() {
+        slopesAreThoseOfTheSolver(WATER, (a, b) -> new AlkalinityAndPco2(2078e-6 + a * 1e-4, 600e-6 + b * 1e-4));
+        slopesAreThoseOfTheSolver(
+                WATER.withNutrients(2e-6, 50e-6),
+                (a, b) -> new AlkalinityAndDic(2078e-6 + a * 1e-4, 1900e-6 + b * 1e-4));
+    }
+
+    interface PairOff {
+        KnownPair by(double first, double second);
+    }
+
+    /** One input at a time: the propagated share over a small uncertainty is the solver's own slope. */
+    private static void slopesAreThoseOfTheSolver(Conditions c, PairOff pair) {
+        CarbonateState state = CarbonateSystem.solve(c, pair.by(0, 0)).orElseThrow();
+        double e = 1e-4;
+        boolean ph = pair.by(0, 0) instanceof PhAndAlkalinity;
+        double first = ph ? 1 : 1e-4;
+        InputUncertainty ofFirst = ph ? only(1, 0, 0, 0, 0, 0) : only(0, first, 0, 0, 0, 0);
+        InputUncertainty ofSecond = ph
+                ? only(0, 1e-4, 0, 0, 0, 0)
+                : pair.by(0, 0) instanceof AlkalinityAndDic ? only(0, 0, 1e-4, 0, 0, 0) : only(0, 0, 0, 1e-4, 0, 0);
+        for (String q : new String[] {"phTotal", "dic", "co2", "bicarbonate", "carbonate", "pco2", "omegaAragonite"}) {
+            same(q, state, ofFirst, slope(c, pair.by(e, 0), c, pair.by(-e, 0), q) / (2 * e));
+            same(q, state, ofSecond, slope(c, pair.by(0, e), c, pair.by(0, -e), q) / (2 * e));
+            Conditions warm = c.withTemperatureC(22 + e);
+            Conditions cold = c.withTemperatureC(22 - e);
+            same(q, state, only(0, 0, 0, 0, 1, 0), slope(warm, pair.by(0, 0), cold, pair.by(0, 0), q) / (2 * e));
+            Conditions salt = salinity(c, 30 + e);
+            Conditions fresh = salinity(c, 30 - e);
+            same(q, state, only(0, 0, 0, 0, 0, 1), slope(salt, pair.by(0, 0), fresh, pair.by(0, 0), q) / (2 * e));
+        }
+    }
+
+    private static Conditions salinity(Conditions c, double s) {
+        return new Conditions(c.temperatureC(), s, c.phosphate(), c.silicate(), c.calcium(), c.fit(), c.boron());
+    }
+
+    private static void same(String q, CarbonateState state, InputUncertainty u, double slope) {
+        double expected = Math.abs(slope);
+        assertThat(fromInputs(Uncertainty.of(state, u), q))
+                .as("%s of %s with %s", q, state.known(), u)
+                .isCloseTo(expected, within(1e-5 * expected + 1e-7));
+    }
+
+    private static double slope(Conditions up, KnownPair pairUp, Conditions down, KnownPair pairDown, String q) {
+        return quantity(up, pairUp, q) - quantity(down, pairDown, q);
+    }
+
+    private static InputUncertainty only(double ph, double ta, double dic, double pco2, double t, double s) {
+        return new InputUncertainty(ph, ta, dic, pco2, t, s);
+    }
+
+    private static double quantity(Conditions c, KnownPair pair, String name) {
+        return Quantities.of(CarbonateSystem.solve(c, pair).orElseThrow(), name);
+    }
+
+    private static double fromInputs(StateUncertainty u, String name) {
+        return switch (name) {
+            case "phTotal" -> u.phTotal().fromInputs();
+            case "dic" -> u.dic().fromInputs() * 1e6;
+            case "co2" -> u.co2().fromInputs() * 1e6;
+            case "bicarbonate" -> u.bicarbonate().fromInputs() * 1e6;
+            case "carbonate" -> u.carbonate().fromInputs() * 1e6;
+            case "pco2" -> u.pco2Atm().fromInputs() * 1e6;
+            case "omegaAragonite" -> u.omegaAragonite().fromInputs();
+            default -> throw new IllegalArgumentException("no such quantity: " + name);
+        };
+    }
+
+    private static final class Spread {
+        private int n;
+        private double mean;
+        private double squares;
+
+        void add(double value) {
+            n++;
+            double off = value - mean;
+            mean += off / n;
+            squares += off * (value - mean);
+        }
+
+        double standardDeviation() {
+            return Math.sqrt(squares / (n - 1));
+        }
+    }
+}
