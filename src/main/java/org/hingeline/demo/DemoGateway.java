@@ -150,7 +150,7 @@ public final class DemoGateway implements AutoCloseable {
                 memory.oldestGapFilled();
             }
         }
-        if (!stopping()) {
+        if (sent > 0 && !stopping()) {
             LOG.info("history: complete, {} moments sent", sent);
         }
     }

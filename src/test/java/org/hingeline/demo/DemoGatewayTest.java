@@ -139,6 +139,22 @@ class DemoGatewayTest {
     }
 
     @Test
+    void without_a_good_token_it_goes_by_its_own_note() {
+        try (DemoGateway gateway = gateway(InstantSource.system())) {
+            gateway.start();
+            awaitHistory();
+        }
+        int before = service.rowsOf("intake", "ph");
+        try (DemoGateway gateway =
+                new DemoGateway(service.base(), FakeService.KEY, "wrong", 7, InstantSource.system(), memory(), QUICK)) {
+            gateway.start();
+            await().until(() -> service.rowsOf("intake", "ph") > before + 5);
+        }
+        // the moment it was stopped in may come twice
+        assertThat(service.duplicates.get()).isLessThanOrEqualTo(25);
+    }
+
+    @Test
     void a_service_that_has_forgotten_everything_is_told_everything() throws Exception {
         try (DemoGateway gateway = gateway(InstantSource.system())) {
             gateway.start();
