@@ -1,6 +1,7 @@
 package org.hingeline.monitor;
 
 import java.time.Instant;
+import java.util.Arrays;
 import org.hingeline.alert.Limit;
 import org.hingeline.hatchery.Batch;
 import org.hingeline.hatchery.Point;
@@ -13,14 +14,16 @@ public final class MessageDesk {
 
     /** What a message tells of. */
     enum Kind {
-        RAISED("raised"),
-        RAISED_AGAIN("again"),
-        BACK_TO_NORMAL("back");
+        RAISED("raised", "raised"),
+        RAISED_AGAIN("again", "raised again"),
+        BACK_TO_NORMAL("back", "back to normal");
 
         private final String code;
+        private final String words;
 
-        Kind(String code) {
+        Kind(String code, String words) {
             this.code = code;
+            this.words = words;
         }
     }
 
@@ -34,6 +37,15 @@ public final class MessageDesk {
     public MessageDesk(String publicUrl, String installation) {
         this.publicUrl = publicUrl;
         this.installation = installation;
+    }
+
+    /** What a message told of, in a word or three: "raised", "back to normal". */
+    public static String news(OutboxBook.Message message) {
+        return Arrays.stream(Kind.values())
+                .filter(kind -> message.key().contains("-" + kind.code + "-"))
+                .findFirst()
+                .map(kind -> kind.words)
+                .orElse(message.subject());
     }
 
     void alert(Books books, long siteId, long alertId, Limit limit, Kind kind, Instant now) {
