@@ -125,12 +125,15 @@ public final class AlertDesk {
      * A person says that they have seen it.
      *
      * @param note at most 500 characters
-     * @throws IllegalArgumentException when the note is too long
+     * @throws FieldFaultsException when the note cannot be kept
      */
     public Acknowledged acknowledge(long siteId, long alertId, String who, @Nullable String note) {
         if (note != null && note.length() > NOTE_MOST) {
-            throw new IllegalArgumentException(
-                    "note has " + note.length() + " characters; at most " + NOTE_MOST + " are kept");
+            throw new FieldFaultsException(
+                    "note", "note has " + note.length() + " characters; at most " + NOTE_MOST + " are kept");
+        }
+        if (note != null && Texts.hasControls(note)) {
+            throw new FieldFaultsException("note", "note has a control character; accepted: text and line breaks");
         }
         String kept = note == null || note.isBlank() ? null : note.strip();
         Instant now = clock.instant();
