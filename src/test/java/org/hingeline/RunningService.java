@@ -58,6 +58,11 @@ public final class RunningService implements AutoCloseable {
         return gatewayKey;
     }
 
+    /** A key for another gateway. */
+    public String makeGatewayKey(String gateway) {
+        return service.accounts().makeGatewayKey(site, gateway, "test");
+    }
+
     public URI address() {
         return URI.create("http://127.0.0.1:" + service.port());
     }
