@@ -142,6 +142,11 @@ public final class RunningService implements AutoCloseable {
         return service.place().apply(PlaceFileReader.readText("test", yaml), "test");
     }
 
+    /** A key for another gateway. */
+    public String makeGatewayKey(String gateway) {
+        return service.accounts().makeGatewayKey(site, gateway, "test");
+    }
+
     public URI address() {
         return URI.create("http://127.0.0.1:" + service.port());
     }
