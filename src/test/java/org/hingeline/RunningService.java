@@ -127,6 +127,26 @@ public final class RunningService implements AutoCloseable {
         return gatewayKey;
     }
 
+    /** Adds somebody who signs in with {@link #PASSWORD}. */
+    public void addPerson(Site at, String name, String displayName, Role role) {
+        service.accounts().savePerson(at, name, displayName, PASSWORD, role, "test");
+    }
+
+    /** Gives somebody who signs in already a role at another site. */
+    public void addToSite(Site at, String name, Role role) {
+        service.accounts().addToSite(at, name, role, "test");
+    }
+
+    /** Sets up another site from a place file's text. */
+    public Site addPlace(String yaml) {
+        return service.place().apply(PlaceFileReader.readText("test", yaml), "test");
+    }
+
+    /** A key for another gateway. */
+    public String makeGatewayKey(String gateway) {
+        return service.accounts().makeGatewayKey(site, gateway, "test");
+    }
+
     public URI address() {
         return URI.create("http://127.0.0.1:" + service.port());
     }

@@ -53,7 +53,13 @@ public final class PlaceFileReader {
         return readText(file.toString(), YamlFile.text(file));
     }
 
-    static PlacePlan readText(String source, String yaml) {
+    /**
+     * The place told by a text.
+     *
+     * @param source what problems call the text
+     * @throws BadSettings with every problem
+     */
+    public static PlacePlan readText(String source, String yaml) {
         return new PlaceFileReader().plan(source, yaml);
     }
 

@@ -45,30 +45,32 @@ public final class AlertDesk {
             @Nullable Long alertId,
             Instant now) {
         AlertState state = transition.state();
+        Observation latest = state.latest();
+        Instant valueAt = latest == null ? now : latest.at();
         return switch (transition.effect()) {
             case NOTHING, ACKNOWLEDGE -> alertId;
             case RAISE -> {
                 long id = books.alerts().open(newAlert(siteId, point, limit, state, now));
-                messages.alert(books, siteId, id, limit, MessageDesk.Kind.RAISED, now);
+                messages.alert(books, siteId, id, limit, MessageDesk.Kind.RAISED, valueAt, now);
                 yield id;
             }
             case RAISE_AGAIN -> {
                 long id = Objects.requireNonNull(alertId);
-                Observation latest = latest(state);
-                books.alerts().reopen(id, since(limit, state), now, latest.value(), latest.standardUncertainty());
-                messages.alert(books, siteId, id, limit, MessageDesk.Kind.RAISED_AGAIN, now);
+                Observation out = latest(state);
+                books.alerts().reopen(id, since(limit, state), now, out.value(), out.standardUncertainty());
+                messages.alert(books, siteId, id, limit, MessageDesk.Kind.RAISED_AGAIN, valueAt, now);
                 yield id;
             }
             case RETURN -> {
                 long id = Objects.requireNonNull(alertId);
                 books.alerts().returned(id, now);
-                messages.alert(books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, now);
+                messages.alert(books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, valueAt, now);
                 yield id;
             }
             case CLOSE -> {
                 long id = Objects.requireNonNull(alertId);
                 books.alerts().close(id, now);
-                messages.alert(books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, now);
+                messages.alert(books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, valueAt, now);
                 yield null;
             }
         };

@@ -5,102 +5,133 @@ import com.zaxxer.hikari.HikariDataSource;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
 import java.sql.Connection;
-import java.sql.DriverManager;
 import java.sql.SQLException;
 import java.sql.Statement;
 import java.util.List;
+import java.util.concurrent.atomic.AtomicBoolean;
 import java.util.function.Function;
 import javax.sql.DataSource;
 import org.hingeline.monitor.Books;
+import org.jdbi.v3.core.ConnectionFactory;
 import org.jdbi.v3.core.Handle;
+import org.jdbi.v3.core.Handles;
 import org.jdbi.v3.core.Jdbi;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
 
 /**
- * H2 in a folder on this machine: read through a pool, written through one {@link WriteLane}.
- *
- * <p>A file {@code clean-stop} is laid down at an orderly end and taken away at the start. When it is missing, the last
- * run ended in a crash, and every table is compared with its indexes before anything is served.
+ * H2 in a folder on this machine: read through a pool, written through one {@link WriteLane}. After a run that did not
+ * end in an orderly way, every table is compared with its indexes before anything is served.
  */
 public final class EmbeddedDatabase implements Database {
     private static final Logger LOG = LoggerFactory.getLogger(EmbeddedDatabase.class);
-    private static final String NAME = "hingeline";
-    private static final String CLEAN_STOP = "clean-stop";
     private static final int READERS = 8;
 
-    private final Path folder;
+    private final DatabaseFolder folder;
     private final WriteLane lane;
     private final HikariDataSource readers;
     private final Jdbi readJdbi;
     private final Jdbi writeJdbi;
+    private final AtomicBoolean closed = new AtomicBoolean();
 
-    private EmbeddedDatabase(Path folder, WriteLane lane, HikariDataSource readers) {
+    private EmbeddedDatabase(DatabaseFolder folder, WriteLane lane, HikariDataSource readers) {
         this.folder = folder;
         this.lane = lane;
         this.readers = readers;
         this.readJdbi = Sql.configure(Jdbi.create(readers));
-        this.writeJdbi = Sql.configure(Jdbi.create(() -> {
-            throw new SQLException("the write lane hands out its connection itself");
-        }));
+        this.writeJdbi = Sql.configure(Jdbi.create(new OnLane(lane)));
+        this.writeJdbi.getConfig(Handles.class).setForceEndTransactions(false);
     }
 
     /**
      * Opens the database in a folder, making it if need be, checking it if the last run did not end well, and bringing
      * its tables up to date.
      *
-     * @throws StoreException when it cannot be opened or is damaged
+     * @throws DamagedDatabaseException when the check finds faults, or the file holds no tables though it did before
+     * @throws UnreadableDatabaseException when the file is gone or the engine cannot make sense of it
+     * @throws DatabaseInUseException when another process has it open
+     * @throws StoreException when it cannot be opened for another reason
      */
-    public static EmbeddedDatabase open(Path folder) {
+    public static EmbeddedDatabase open(Path path) {
+        DatabaseFolder folder = new DatabaseFolder(path);
         try {
-            Files.createDirectories(folder);
-            boolean existed = Files.exists(databaseFile(folder));
-            boolean endedWell = Files.deleteIfExists(folder.resolve(CLEAN_STOP));
-            Connection connection = DriverManager.getConnection(url(folder), "sa", "");
-            if (existed && !endedWell) {
-                checkAfterCrash(connection);
+            Files.createDirectories(path);
+            boolean existed = Files.exists(folder.file());
+            if (!existed && folder.wasMade()) {
+                throw new UnreadableDatabaseException("the database file " + folder.file() + " is gone");
             }
-            Migrations.run(url(folder), "sa", "");
-            WriteLane lane = new WriteLane(connection);
-            lane.transaction(same -> true); // a checkpoint behind the migrations
-            return new EmbeddedDatabase(folder, lane, readers(folder));
+            boolean endedWell = folder.takeCleanStop();
+            Connection connection = connect(folder, endedWell);
+            try {
+                check(connection, folder, existed && !endedWell);
+                return serving(connection, folder);
+            } catch (SQLException | IOException | RuntimeException e) {
+                abandon(connection, e);
+                throw e;
+            }
         } catch (IOException e) {
-            throw new StoreException("the database folder " + folder + " cannot be used: " + e.getMessage(), e);
+            throw new StoreException("the database folder " + path + " cannot be used: " + e.getMessage(), e);
         } catch (SQLException e) {
-            throw new StoreException("the embedded database in " + folder + " cannot be opened: " + e.getMessage(), e);
+            throw new StoreException("the embedded database in " + path + " cannot be opened: " + e.getMessage(), e);
         }
     }
 
     /** The database file of a folder. */
     public static Path databaseFile(Path folder) {
-        return folder.resolve(NAME + ".mv.db");
+        return new DatabaseFolder(folder).file();
     }
 
-    static String url(Path folder) {
-        // the engine's own shutdown hook is off: this program closes the database itself, after its writers
-        return "jdbc:h2:file:" + folder.toAbsolutePath().resolve(NAME)
-                + ";MODE=PostgreSQL;DATABASE_TO_LOWER=TRUE;DEFAULT_NULL_ORDERING=HIGH"
-                + ";WRITE_DELAY=0;DB_CLOSE_ON_EXIT=FALSE;DB_CLOSE_DELAY=-1;MAX_COMPACT_TIME=5000;QUERY_CACHE_SIZE=64";
-    }
-
-    private static void checkAfterCrash(Connection connection) throws SQLException {
-        LOG.warn("the last run did not end in an orderly way; comparing every table with its indexes");
-        List<String> faults = IntegrityCheck.faults(connection);
-        if (!faults.isEmpty()) {
-            try (Statement statement = connection.createStatement()) {
-                statement.execute("SHUTDOWN IMMEDIATELY");
+    private static Connection connect(DatabaseFolder folder, boolean endedWell) throws IOException {
+        try {
+            return folder.connect();
+        } catch (StoreException e) {
+            if (endedWell) {
+                folder.layCleanStop(); // nothing ran, so the last end is still an orderly one
             }
-            throw new DamagedDatabaseException(faults);
+            throw e;
         }
-        LOG.info("every table agrees with its indexes");
     }
 
-    private static HikariDataSource readers(Path folder) {
+    private static void check(Connection connection, DatabaseFolder folder, boolean afterCrash) throws SQLException {
+        if (folder.wasMade() && !IntegrityCheck.holdsTables(connection)) {
+            throw new DamagedDatabaseException(List.of(folder.file() + " holds no tables, though it did before"));
+        }
+        if (afterCrash) {
+            LOG.warn("the last run did not end in an orderly way; comparing every table with its indexes");
+            List<String> faults = IntegrityCheck.faults(connection);
+            if (!faults.isEmpty()) {
+                throw new DamagedDatabaseException(faults);
+            }
+            LOG.info("every table agrees with its indexes");
+        }
+    }
+
+    private static EmbeddedDatabase serving(Connection connection, DatabaseFolder folder)
+            throws SQLException, IOException {
+        Migrations.run(folder.url(), DatabaseFolder.USER, DatabaseFolder.PASSWORD);
+        WriteLane lane = new WriteLane(connection);
+        lane.transaction(same -> true); // a checkpoint behind the migrations
+        folder.layMade();
+        return new EmbeddedDatabase(folder, lane, readers(folder));
+    }
+
+    /** Lets the database go without writing anything more to it. */
+    private static void abandon(Connection connection, Exception reason) {
+        try (connection;
+                Statement statement = connection.createStatement()) {
+            statement.execute("SHUTDOWN IMMEDIATELY");
+        } catch (SQLException e) {
+            reason.addSuppressed(e);
+        }
+    }
+
+    private static HikariDataSource readers(DatabaseFolder folder) {
         HikariConfig config = new HikariConfig();
-        config.setJdbcUrl(url(folder));
-        config.setUsername("sa");
-        config.setPassword("");
+        config.setJdbcUrl(folder.url());
+        config.setUsername(DatabaseFolder.USER);
+        config.setPassword(DatabaseFolder.PASSWORD);
         config.setMaximumPoolSize(READERS);
         config.setMinimumIdle(1);
         config.setPoolName("readers");
@@ -109,8 +140,8 @@ public final class EmbeddedDatabase implements Database {
 
     @Override
     public <T> T write(Function<Books, T> work) {
-        return lane.transaction(connection -> {
-            try (Handle handle = writeJdbi.open(connection)) {
+        return lane.transaction(same -> {
+            try (Handle handle = writeJdbi.open()) {
                 return work.apply(new JdbiBooks(handle));
             }
         });
@@ -136,6 +167,19 @@ public final class EmbeddedDatabase implements Database {
         }
     }
 
+    /** The lane's connection, lent to Jdbi within a transaction of the lane; only the lane ends either. */
+    private record OnLane(WriteLane lane) implements ConnectionFactory {
+        @Override
+        public Connection openConnection() {
+            return lane.held();
+        }
+
+        @Override
+        public void closeConnection(Connection connection) {
+            // the lane keeps its connection open
+        }
+    }
+
     /** Writes a consistent copy of the running database to a zip file, in one piece or not at all. */
     public void backUpTo(Path zip) {
         Path part = zip.resolveSibling(zip.getFileName() + ".part");
@@ -144,7 +188,8 @@ public final class EmbeddedDatabase implements Database {
             Files.createDirectories(zip.toAbsolutePath().getParent());
             statement.execute("BACKUP TO '" + part.toAbsolutePath().toString().replace("'", "''") + "'");
             connection.commit();
-            Files.move(part, zip, java.nio.file.StandardCopyOption.ATOMIC_MOVE);
+            DatabaseFolder.force(part);
+            Files.move(part, zip, StandardCopyOption.ATOMIC_MOVE);
         } catch (SQLException | IOException e) {
             throw new StoreException("the backup to " + zip + " failed: " + e.getMessage(), e);
         } finally {
@@ -152,17 +197,17 @@ public final class EmbeddedDatabase implements Database {
         }
     }
 
-    /** Compares every table with its indexes; for tests and for the command that checks on demand. */
+    /** Compares every table with its indexes, while writers wait; in words, none when all is sound. */
     public List<String> integrityFaults() {
-        try (Connection connection = readers.getConnection()) {
-            return IntegrityCheck.faults(connection);
-        } catch (SQLException e) {
-            throw new StoreException("the check of the tables could not be made: " + e.getMessage(), e);
-        }
+        return lane.transaction(IntegrityCheck::faults);
     }
 
+    /** Waits for the writer at work, then ends; a second call does nothing. */
     @Override
     public void close() {
+        if (closed.getAndSet(true)) {
+            return;
+        }
         try {
             readers.close();
             Connection connection = lane.acquire();
@@ -172,7 +217,7 @@ public final class EmbeddedDatabase implements Database {
                 lane.release();
             }
             lane.close();
-            Files.writeString(folder.resolve(CLEAN_STOP), "the last run ended in an orderly way\n");
+            folder.layCleanStop();
         } catch (SQLException | IOException e) {
             throw new StoreException("the embedded database did not close well: " + e.getMessage(), e);
         }

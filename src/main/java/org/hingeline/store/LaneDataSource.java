@@ -43,6 +43,9 @@ final class LaneDataSource implements DataSource {
                     if (method.getName().equals("isClosed")) {
                         return closed[0];
                     }
+                    if (closed[0] && method.getDeclaringClass() != Object.class) {
+                        throw new SQLException("this connection has given the write lane back");
+                    }
                     try {
                         return method.invoke(real, args);
                     } catch (InvocationTargetException e) {

@@ -40,11 +40,15 @@ public final class PostgresDatabase implements Database {
         config.setMaximumPoolSize(CONNECTIONS);
         config.setPoolName("postgresql");
         config.addDataSourceProperty("reWriteBatchedInserts", "true");
+        HikariDataSource pool = null;
         try {
-            HikariDataSource pool = new HikariDataSource(config);
+            pool = new HikariDataSource(config);
             Migrations.run(url, user, password);
             return new PostgresDatabase(pool);
         } catch (RuntimeException e) {
+            if (pool != null) {
+                pool.close();
+            }
             throw new StoreException("the database at " + url + " cannot be used: " + e.getMessage(), e);
         }
     }

@@ -1,7 +1,8 @@
 package org.hingeline.store;
 
 /** A database failure in words of this program; the cause says it in the driver's. */
-public final class StoreException extends RuntimeException {
+public sealed class StoreException extends RuntimeException
+        permits DatabaseInUseException, UnreadableDatabaseException {
     private static final long serialVersionUID = 1L;
 
     StoreException(String message, Throwable cause) {

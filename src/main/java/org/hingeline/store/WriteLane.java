@@ -47,14 +47,35 @@ final class WriteLane implements AutoCloseable {
         }
     }
 
-    /** Takes the lane until {@link #release}; for callers that bring their own transactions. */
+    /**
+     * Takes the lane until {@link #release}; for callers that bring their own transactions.
+     *
+     * @throws IllegalStateException when this thread has it already: a transaction within a transaction would commit
+     *     the outer one half done
+     */
     Connection acquire() {
+        if (lock.isHeldByCurrentThread()) {
+            throw new IllegalStateException("this thread is writing already; a transaction cannot hold another");
+        }
         lock.lock();
+        return connection;
+    }
+
+    /** The connection, for the holder of the lane. */
+    Connection held() {
+        if (!lock.isHeldByCurrentThread()) {
+            throw new IllegalStateException("only the holder of the write lane may use its connection");
+        }
         return connection;
     }
 
     void release() {
         lock.unlock();
+    }
+
+    /** How many writers wait for the lane. */
+    int waiting() {
+        return lock.getQueueLength();
     }
 
     /** Puts everything committed on disk. Only for the holder of the lane. */

@@ -52,6 +52,9 @@ public record Moment(String iso, String clock, String age) {
     /** A span of time in words, to the minute below a day, to the hour below three days: {@code 12 min}, {@code 18 h 20 min}. */
     public static String span(Duration length) {
         long minutes = length.toMinutes();
+        if (minutes == 0) {
+            return "less than a minute";
+        }
         if (minutes < 60) {
             return minutes + " min";
         }
