@@ -25,8 +25,7 @@ final class JsonFaults {
     private static final Pattern CHARACTER = Pattern.compile("Unexpected character \\('(.+?)' \\(code \\d+");
     private static final Pattern TOKEN = Pattern.compile("(?:Unrecognized|Non-standard) token '([^']*)'");
     private static final Pattern TWICE = Pattern.compile("Duplicate Object property \"(.*)\"");
-    private static final Pattern GIVEN = Pattern.compile(
-            "(Array|Object|Boolean|String|Integer|Floating-point|Number)" + " value(?: \\(([^)]*)\\))?");
+    private static final Pattern GIVEN = Pattern.compile(" value \\([\"']?(.*?)[\"']?\\)");
 
     private JsonFaults() {}
 
@@ -86,20 +85,21 @@ final class JsonFaults {
 
     /** What was given instead, with a space before it; empty when that is not known. */
     private static String given(DatabindException e) {
-        if (e instanceof InvalidFormatException invalid && invalid.getValue() instanceof String text) {
-            return " " + quoted(text);
-        }
-        Matcher found = GIVEN.matcher(e.getOriginalMessage());
-        if (!found.find()) {
+        if (!(e instanceof MismatchedInputException mismatched) || mismatched.getCurrentToken() == null) {
             return "";
         }
-        String shown = found.group(2);
-        return switch (found.group(1)) {
-            case "Array" -> " […]";
-            case "Object" -> " {…}";
-            case "String" -> "";
-            case "Boolean" -> e.getOriginalMessage().contains("VALUE_TRUE") ? " true" : " false";
-            default -> shown == null || shown.startsWith("token") ? "" : " " + cut(shown);
+        Matcher quoted = GIVEN.matcher(e.getOriginalMessage());
+        Object value = e instanceof InvalidFormatException invalid
+                ? invalid.getValue()
+                : quoted.find() ? quoted.group(1) : null;
+        return switch (mismatched.getCurrentToken()) {
+            case START_ARRAY -> " […]";
+            case START_OBJECT -> " {…}";
+            case VALUE_TRUE -> " true";
+            case VALUE_FALSE -> " false";
+            case VALUE_STRING -> value == null ? "" : " " + quoted(value.toString());
+            case VALUE_NUMBER_INT, VALUE_NUMBER_FLOAT -> value == null ? "" : " " + cut(value.toString());
+            default -> "";
         };
     }
 

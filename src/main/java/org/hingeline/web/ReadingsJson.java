@@ -76,6 +76,7 @@ final class ReadingsJson {
         long from = parser.currentTokenLocation().getByteOffset();
         if (parser.currentToken() != JsonToken.START_OBJECT) {
             parser.skipChildren();
+            parser.finishToken();
             rows.add(faulty(index, "a reading must be an object with the fields " + FIELDS, text(parser, from)));
             return;
         }
