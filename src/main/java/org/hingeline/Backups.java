@@ -28,12 +28,14 @@ final class Backups {
 
     private final @Nullable EmbeddedDatabase database;
     private final Path folder;
+    private final Duration every;
     private final int keep;
     private final InstantSource clock;
 
-    private Backups(@Nullable EmbeddedDatabase database, Path folder, int keep, InstantSource clock) {
+    private Backups(@Nullable EmbeddedDatabase database, Path folder, Duration every, int keep, InstantSource clock) {
         this.database = database;
         this.folder = folder;
+        this.every = every;
         this.keep = keep;
         this.clock = clock;
     }
@@ -42,6 +44,7 @@ final class Backups {
         return new Backups(
                 database instanceof EmbeddedDatabase embedded ? embedded : null,
                 settings.backupsFolder(),
+                settings.backups().every(),
                 settings.backups().keep(),
                 clock);
     }
@@ -51,9 +54,12 @@ final class Backups {
         return database != null;
     }
 
+    /** Makes one if the newest is due to be followed, so that many starts in a row do not push the older ones out. */
     void make() {
         EmbeddedDatabase open = database;
-        if (open == null) {
+        if (open == null
+                || age().map(age -> age.compareTo(every.multipliedBy(9).dividedBy(10)) < 0)
+                        .orElse(false)) {
             return;
         }
         Path zip = folder.resolve("hingeline-" + STAMP.format(clock.instant()) + ".zip");

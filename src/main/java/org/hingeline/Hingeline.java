@@ -2,6 +2,7 @@ package org.hingeline;
 
 import java.time.Clock;
 import org.hingeline.config.BadSettings;
+import org.hingeline.store.DamagedDatabaseException;
 import org.hingeline.store.StoreException;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
@@ -39,6 +40,7 @@ public final class Hingeline {
                 .setExecutionExceptionHandler((failure, line, parsed) -> {
                     if (failure instanceof BadSettings
                             || failure instanceof StoreException
+                            || failure instanceof DamagedDatabaseException
                             || failure instanceof IllegalArgumentException
                             || failure instanceof CommandFailure) {
                         line.getErr().println(line.getCommandName() + ": " + failure.getMessage());

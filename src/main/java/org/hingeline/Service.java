@@ -27,6 +27,7 @@ import org.hingeline.monitor.Check;
 import org.hingeline.monitor.DoseDesk;
 import org.hingeline.monitor.DoseWaters;
 import org.hingeline.monitor.Housekeeping;
+import org.hingeline.monitor.JournalBook;
 import org.hingeline.monitor.LimitDesk;
 import org.hingeline.monitor.MessageDesk;
 import org.hingeline.monitor.Passwords;
@@ -35,6 +36,7 @@ import org.hingeline.monitor.ReadingIntake;
 import org.hingeline.monitor.Secrets;
 import org.hingeline.monitor.Signals;
 import org.hingeline.monitor.StatusBoard;
+import org.hingeline.monitor.Storage;
 import org.hingeline.store.Database;
 import org.hingeline.store.EmbeddedDatabase;
 import org.hingeline.web.LiveEvents;
@@ -61,13 +63,27 @@ final class Service implements AutoCloseable {
     }
 
     static Service start(Settings settings, Clock clock) {
-        Database database = Databases.open(settings);
+        Databases.Opened opened = Databases.openToServe(settings, clock);
+        Database database = opened.database();
         try {
+            String report = opened.report();
+            if (report != null) {
+                tell(database, report, clock);
+            }
             return start(settings, clock, database);
         } catch (RuntimeException e) {
             database.close();
             throw e;
         }
+    }
+
+    /** A fall back to a backup is written into every site's journal; the log has said it loudly. */
+    private static void tell(Database database, String report, Clock clock) {
+        database.writeOnly(books -> books.place()
+                .sites()
+                .forEach(site -> books.journal()
+                        .add(new JournalBook.Entry(
+                                clock.instant(), site.id(), "hingeline", "backup-put-back", "database", report))));
     }
 
     private static Service start(Settings settings, Clock clock, Database database) {
@@ -196,6 +212,14 @@ final class Service implements AutoCloseable {
 
     int port() {
         return web.port();
+    }
+
+    Storage storage() {
+        return database;
+    }
+
+    WebServer web() {
+        return web;
     }
 
     Accounts accounts() {

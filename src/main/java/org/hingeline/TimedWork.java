@@ -35,7 +35,7 @@ final class TimedWork implements Check, AutoCloseable {
         List<RecurringTask<?>> tasks = new ArrayList<>();
         tasks.add(every("watch-limits", Duration.ofSeconds(5), housekeeping::watchLimits));
         tasks.add(every("late-readings", Duration.ofSeconds(3), () -> workOff(housekeeping)));
-        tasks.add(every("old-sessions", Duration.ofHours(1), housekeeping::removeOldSessions));
+        tasks.add(every("tidy", Duration.ofHours(1), housekeeping::tidy));
         // delivery claims each message, so every node may look; the schedule only makes sure that somebody does
         tasks.add(every("deliver", Duration.ofSeconds(5), nudge::now));
         if (backups.possible()) {

@@ -162,6 +162,22 @@ public final class Accounts {
                 && memberships.stream().allMatch(m -> m.site().id() == site.id());
     }
 
+    /**
+     * Gives somebody who signs in already a role at another site, or another role there; their password stays as it is.
+     *
+     * @throws FieldFaultsException when nobody has this name
+     */
+    public void addToSite(Site site, String name, Role role, String who) {
+        Instant now = clock.instant();
+        storage.writeOnly(books -> {
+            Person known = books.people()
+                    .personByName(name)
+                    .orElseThrow(() -> new FieldFaultsException("name", "nobody signs in as \"" + name + "\""));
+            books.people().saveMembership(known.id(), site.id(), role);
+            journal(books, now, site, who, "person-saved", name, "role " + role.code());
+        });
+    }
+
     private void checkPassword(String password, FieldFaults faults) {
         if (password.length() < rules.minPasswordLength() || password.length() > MAX_PASSWORD) {
             faults.add(

@@ -1,9 +1,13 @@
 package org.hingeline.monitor;
 
+import java.time.Duration;
+import java.time.Instant;
 import java.time.InstantSource;
 
 /** The timed work that nobody asks for: time passing over the limits, late states computed again, old sessions gone. */
 public final class Housekeeping {
+    private static final Duration KEEP_REFUSED = Duration.ofDays(90);
+
     private final Storage storage;
     private final InstantSource clock;
     private final AlertWatch watch;
@@ -30,7 +34,12 @@ public final class Housekeeping {
         return storage.read(books -> books.water().nextSpan()).isPresent() && storage.write(ledger::workOff);
     }
 
-    public void removeOldSessions() {
-        storage.writeOnly(books -> books.people().removeSessionsExpiredBy(clock.instant()));
+    /** Takes away sessions that are over, and refused rows that nobody will look at any more. */
+    public void tidy() {
+        Instant now = clock.instant();
+        storage.writeOnly(books -> {
+            books.people().removeSessionsExpiredBy(now);
+            books.readings().removeRefusedBefore(now.minus(KEEP_REFUSED));
+        });
     }
 }

@@ -171,6 +171,9 @@ public final class LimitDesk {
         if (action.isEmpty() || action.length() > 300) {
             faults.add("action", "action must say what to do, in 1 to 300 characters; it has " + action.length());
         }
+        if (Texts.hasControls(action)) {
+            faults.add("action", "action has a control character; accepted: text and line breaks");
+        }
         faults.throwIfAny();
         return new Limit(
                 0,

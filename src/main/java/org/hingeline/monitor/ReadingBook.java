@@ -34,5 +34,8 @@ public interface ReadingBook {
 
     void insertRefused(List<RefusedRow> rows);
 
+    /** Newest first. */
     List<RefusedRow> refused(long siteId, int most);
+
+    void removeRefusedBefore(Instant time);
 }

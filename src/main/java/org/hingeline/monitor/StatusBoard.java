@@ -4,7 +4,6 @@ import java.time.Duration;
 import java.time.Instant;
 import java.time.InstantSource;
 import java.util.ArrayList;
-import java.util.Collections;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
@@ -19,8 +18,8 @@ import org.hingeline.monitor.ReadingBook.StoredReading;
 
 /** What the pages and the API show of the water: how each point stands now, and its history. */
 public final class StatusBoard {
-    /** States answered to one question for history; a longer span is thinned by its step. */
-    private static final int MOST_STATES = 50_000;
+    /** States answered to one question for history. */
+    private static final int MOST_STATES = 10_000;
 
     private final Storage storage;
     private final InstantSource clock;
@@ -90,23 +89,23 @@ public final class StatusBoard {
      * Water states of a time span, oldest first; of each step only the newest.
      *
      * @param step zero for every state
+     * @throws FieldFaultsException when that would be more than one answer can hold
      */
     public List<WaterState> history(Point point, Instant from, Instant to, Duration step) {
-        List<WaterState> all = storage.read(books -> books.water().between(point.id(), from, to, MOST_STATES));
-        if (step.isZero()) {
-            return all;
+        if (!step.isZero() && Duration.between(from, to).dividedBy(step) > MOST_STATES) {
+            throw new FieldFaultsException(
+                    "step",
+                    "step " + step + " makes more than " + MOST_STATES
+                            + " states; take a longer step or a shorter span");
         }
-        List<WaterState> thinned = new ArrayList<>();
-        long last = Long.MIN_VALUE;
-        for (int i = all.size() - 1; i >= 0; i--) {
-            long slot = Math.floorDiv(all.get(i).at().toEpochMilli(), step.toMillis());
-            if (slot != last) {
-                thinned.add(all.get(i));
-                last = slot;
-            }
+        List<WaterState> states = storage.read(books -> step.isZero()
+                ? books.water().between(point.id(), from, to, MOST_STATES + 1)
+                : books.water().newestOfEach(point.id(), from, to, step));
+        if (states.size() > MOST_STATES) {
+            throw new FieldFaultsException(
+                    "step", "the span holds more than " + MOST_STATES + " states; add step, for example step=PT10M");
         }
-        Collections.reverse(thinned);
-        return thinned;
+        return states;
     }
 
     /** Readings of one quantity at a point, by sensor, oldest first. */

@@ -1,5 +1,6 @@
 package org.hingeline.monitor;
 
+import java.time.Duration;
 import java.time.Instant;
 import java.util.List;
 import java.util.Optional;
@@ -23,6 +24,9 @@ public interface WaterBook {
 
     /** States with from ≤ at ≤ to, oldest first. */
     List<WaterState> between(long pointId, Instant from, Instant to, int most);
+
+    /** Of each step between from and to (steps count from the epoch) the newest state, oldest first. */
+    List<WaterState> newestOfEach(long pointId, Instant from, Instant to, Duration step);
 
     void addSpan(long pointId, Instant after, Instant to);
 

@@ -137,6 +137,13 @@ final class ReadingTables implements ReadingBook {
                 .list();
     }
 
+    @Override
+    public void removeRefusedBefore(Instant time) {
+        handle.createUpdate("DELETE FROM refused_row WHERE received_at < :time")
+                .bind("time", time)
+                .execute();
+    }
+
     private static StoredReading reading(ResultSet row) throws SQLException {
         return new StoredReading(
                 row.getLong("sensor_id"),

@@ -4,7 +4,9 @@ import java.sql.PreparedStatement;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.sql.Types;
+import java.time.Duration;
 import java.time.Instant;
+import java.util.ArrayList;
 import java.util.Collections;
 import java.util.HashSet;
 import java.util.List;
@@ -139,6 +141,36 @@ final class WaterTables implements WaterBook {
                 .bind("most", most)
                 .map((row, context) -> state(row))
                 .list();
+    }
+
+    /** Jumps from the newest state of one step to that of the step before, so that dense data costs no more than thin. */
+    @Override
+    public List<WaterState> newestOfEach(long pointId, Instant from, Instant to, Duration step) {
+        String sql = """
+                SELECT * FROM water_state WHERE point_id = ? AND at >= ? AND at <= ? ORDER BY at DESC LIMIT 1
+                """;
+        List<WaterState> states = new ArrayList<>();
+        try (PreparedStatement query = handle.getConnection().prepareStatement(sql)) {
+            query.setLong(1, pointId);
+            Sql.setInstant(query, 2, from);
+            Instant last = to;
+            while (!last.isBefore(from)) {
+                Sql.setInstant(query, 3, last);
+                try (ResultSet row = query.executeQuery()) {
+                    if (!row.next()) {
+                        break;
+                    }
+                    WaterState state = state(row);
+                    states.add(state);
+                    long slot = Math.floorDiv(state.at().toEpochMilli(), step.toMillis());
+                    last = Instant.ofEpochMilli(slot * step.toMillis() - 1);
+                }
+            }
+        } catch (SQLException e) {
+            throw new StoreException("water states could not be read: " + e.getMessage(), e);
+        }
+        Collections.reverse(states);
+        return states;
     }
 
     @Override

@@ -96,8 +96,7 @@ class AccountsTest {
     @Test
     void a_person_of_two_sites_is_changed_by_neither_alone() {
         Site other = hatchery.otherSite();
-        hatchery.database.writeOnly(books -> books.people()
-                .saveMembership(books.people().personByName("ana").orElseThrow().id(), other.id(), Role.MANAGER));
+        accounts.addToSite(other, "ana", Role.MANAGER, "command line");
 
         assertThatThrownBy(() ->
                         accounts.savePerson(hatchery.site, "ana", "Ana", "stolen tide 19", Role.VIEWER, "manager"))

@@ -4,10 +4,14 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.hingeline.store.Samples.T0;
 
+import java.time.Duration;
 import java.time.Instant;
 import java.util.function.Consumer;
 import org.hingeline.alert.Limit;
 import org.hingeline.alert.Phase;
+import org.hingeline.alert.Priority;
+import org.hingeline.alert.Side;
+import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.AlertBook;
 import org.hingeline.monitor.AlertBook.Alert;
 import org.junit.jupiter.api.Test;
@@ -160,6 +164,46 @@ interface AlertContract extends StoreUnderTest {
         assertThat(seen().alerts().alert(southId, open)).isEmpty();
         assertThat(seen().alerts().openAlerts(southId)).isEmpty();
         assertThat(seen().alerts().closedAlerts(southId, 10)).isEmpty();
+    }
+
+    @Test
+    default void open_alerts_are_counted_over_all_sites_and_so_are_silent_points() {
+        Samples.Place north = Samples.place(store(), "north");
+        Samples.Place south = Samples.place(store(), "south");
+        assertThat(seen().alerts().countOpen()).isZero();
+        assertThat(seen().alerts().countSilent()).isZero();
+        long low = open(alert(north, limit(north, 1.8), T0));
+        long silent = open(alert(south, silence(south), T0));
+        long silentToo = open(alert(north, silence(north), T0));
+
+        assertThat(seen().alerts().countOpen()).isEqualTo(3);
+        assertThat(seen().alerts().countSilent()).isEqualTo(2);
+
+        change(alerts -> alerts.acknowledge(silent, T0, "mia", null));
+        change(alerts -> alerts.returned(silentToo, T0));
+        assertThat(seen().alerts().countOpen()).isEqualTo(3);
+        assertThat(seen().alerts().countSilent()).isOne();
+
+        change(alerts -> alerts.close(silent, T0));
+        change(alerts -> alerts.close(low, T0));
+        assertThat(seen().alerts().countOpen()).isOne();
+        assertThat(seen().alerts().countSilent()).isZero();
+    }
+
+    private Limit silence(Samples.Place place) {
+        Limit silence = new Limit(
+                0,
+                place.tank().id(),
+                "silence",
+                Quantity.SILENCE,
+                Side.ABOVE,
+                45,
+                0,
+                Duration.ZERO,
+                Duration.ZERO,
+                Priority.MEDIUM,
+                "Look at the gateway.");
+        return done().alerts().saveLimit(silence, T0);
     }
 
     private void assertRefused(long id, Consumer<AlertBook> change) {

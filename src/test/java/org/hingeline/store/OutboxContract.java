@@ -187,6 +187,22 @@ interface OutboxContract extends StoreUnderTest {
     }
 
     @Test
+    default void a_message_is_due_from_its_time_until_somebody_takes_it_and_again_when_the_claim_ends() {
+        Site north = Samples.site(store(), "north");
+        add(north, "a", T0);
+
+        assertThat(seen().outbox().anyDue(T0.minusMillis(1))).isFalse();
+        assertThat(seen().outbox().anyDue(T0)).isTrue();
+
+        claim(T0, 9);
+        assertThat(seen().outbox().anyDue(T0.plus(CLAIM).minusMillis(1))).isFalse();
+        assertThat(seen().outbox().anyDue(T0.plus(CLAIM))).isTrue();
+
+        done().outbox().sent(all(north).get(0).id(), T0);
+        assertThat(seen().outbox().anyDue(T0.plus(CLAIM))).isFalse();
+    }
+
+    @Test
     default void claimers_at_the_same_time_share_the_messages_and_never_get_the_same() throws Exception {
         Site north = Samples.site(store(), "north");
         List<String> keys = new ArrayList<>();

@@ -45,6 +45,22 @@ interface WaterContract extends StoreUnderTest {
     }
 
     @Test
+    default void of_each_step_the_newest_state_comes_back_and_empty_steps_are_left_out() {
+        Point tank = Samples.place(store(), "north").tank();
+        Instant hour = Instant.parse("2026-05-14T03:00:00Z");
+        for (int second : new int[] {0, 5, 595, 600, 601, 1800, 2399}) {
+            save(complete(tank, hour.plusSeconds(second)));
+        }
+
+        List<WaterState> newest =
+                seen().water().newestOfEach(tank.id(), hour, hour.plusSeconds(2398), Duration.ofMinutes(10));
+
+        assertThat(newest)
+                .extracting(state -> Duration.between(hour, state.at()).toSeconds())
+                .containsExactly(595L, 601L, 1800L);
+    }
+
+    @Test
     default void a_number_stands_in_the_column_that_bears_its_name() throws Exception {
         Point tank = Samples.place(store(), "north").tank();
         save(complete(tank, T0));
