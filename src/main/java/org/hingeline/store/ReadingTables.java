@@ -11,6 +11,12 @@ import org.hingeline.quality.Flag;
 import org.jdbi.v3.core.Handle;
 import org.jdbi.v3.core.statement.PreparedBatch;
 
+/**
+ * Readings and refused rows.
+ *
+ * <p>The order of every query names all columns of the key, or the reverse of all: then the engine walks the index from
+ * that end and stops at the limit, instead of sorting everything there is.
+ */
 final class ReadingTables implements ReadingBook {
     private final Handle handle;
 
@@ -22,7 +28,7 @@ final class ReadingTables implements ReadingBook {
     public List<StoredReading> between(long sensorId, Instant from, Instant to) {
         return handle.createQuery("""
                         SELECT sensor_id, at, reading_value, flag FROM reading
-                        WHERE sensor_id = :sensor AND at >= :from AND at <= :to ORDER BY at
+                        WHERE sensor_id = :sensor AND at >= :from AND at <= :to ORDER BY sensor_id, at
                         """)
                 .bind("sensor", sensorId)
                 .bind("from", from)
@@ -36,7 +42,7 @@ final class ReadingTables implements ReadingBook {
         return handle.createQuery("""
                         SELECT sensor_id, at, reading_value, flag FROM reading
                         WHERE sensor_id = :sensor AND at >= :from AND at < :before AND flag NOT IN (4, 9)
-                        ORDER BY at DESC LIMIT 1
+                        ORDER BY sensor_id DESC, at DESC LIMIT 1
                         """)
                 .bind("sensor", sensorId)
                 .bind("from", from)
@@ -49,7 +55,8 @@ final class ReadingTables implements ReadingBook {
     public Optional<Instant> newestAt(long pointId) {
         return handle
                 .createQuery("""
-                        SELECT (SELECT max(r.at) FROM reading r WHERE r.sensor_id = s.id) AS newest
+                        SELECT (SELECT r.at FROM reading r WHERE r.sensor_id = s.id
+                                ORDER BY r.sensor_id DESC, r.at DESC LIMIT 1) AS newest
                         FROM sensor s WHERE s.point_id = :point
                         """)
                 .bind("point", pointId)

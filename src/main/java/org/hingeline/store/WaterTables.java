@@ -20,6 +20,7 @@ import org.hingeline.monitor.WaterState;
 import org.jdbi.v3.core.Handle;
 import org.jspecify.annotations.Nullable;
 
+/** Water states; of the order of the queries the same holds as in {@link ReadingTables}. */
 final class WaterTables implements WaterBook {
     private static final int NUMBERS = 17;
 
@@ -32,7 +33,8 @@ final class WaterTables implements WaterBook {
     @Override
     public List<Instant> timesFrom(long pointId, Instant from, int most) {
         return handle.createQuery("""
-                        SELECT at FROM water_state WHERE point_id = :point AND at >= :from ORDER BY at LIMIT :most
+                        SELECT at FROM water_state WHERE point_id = :point AND at >= :from
+                        ORDER BY point_id, at LIMIT :most
                         """)
                 .bind("point", pointId)
                 .bind("from", from)
@@ -113,7 +115,8 @@ final class WaterTables implements WaterBook {
 
     @Override
     public Optional<WaterState> newest(long pointId) {
-        return handle.createQuery("SELECT * FROM water_state WHERE point_id = :point ORDER BY at DESC LIMIT 1")
+        return handle.createQuery(
+                        "SELECT * FROM water_state WHERE point_id = :point ORDER BY point_id DESC, at DESC LIMIT 1")
                 .bind("point", pointId)
                 .map((row, context) -> state(row))
                 .findOne();
@@ -122,7 +125,8 @@ final class WaterTables implements WaterBook {
     @Override
     public Optional<WaterState> newestComplete(long pointId) {
         return handle.createQuery("""
-                        SELECT * FROM water_state WHERE point_id = :point AND complete ORDER BY at DESC LIMIT 1
+                        SELECT * FROM water_state WHERE point_id = :point AND complete
+                        ORDER BY point_id DESC, at DESC LIMIT 1
                         """)
                 .bind("point", pointId)
                 .map((row, context) -> state(row))
@@ -133,7 +137,7 @@ final class WaterTables implements WaterBook {
     public List<WaterState> between(long pointId, Instant from, Instant to, int most) {
         return handle.createQuery("""
                         SELECT * FROM water_state WHERE point_id = :point AND at >= :from AND at <= :to
-                        ORDER BY at LIMIT :most
+                        ORDER BY point_id, at LIMIT :most
                         """)
                 .bind("point", pointId)
                 .bind("from", from)
