@@ -172,7 +172,7 @@ CREATE TABLE limit_rule (
     off_delay_s BIGINT NOT NULL,
     priority    VARCHAR(10) NOT NULL,
     action      VARCHAR(300) NOT NULL,     -- what a person is to do
-    created_at  TIMESTAMP WITH TIME ZONE NOT NULL,
+    created_at  TIMESTAMP WITH TIME ZONE NOT NULL, -- made, put back, or set on another quantity
     retired_at  TIMESTAMP WITH TIME ZONE,  -- taken away; can be put back
     UNIQUE (point_id, name)
 );

@@ -99,11 +99,17 @@
     }
   }
 
+  /* how to find the same button or link in the next version of the page */
+  function address(element) {
+    if (element.id) return `#${CSS.escape(element.id)}`;
+    return element.matches("a[href]") ? `a[href="${CSS.escape(element.getAttribute("href"))}"]` : null;
+  }
+
   function swap(part, next) {
-    const focused = document.activeElement?.id;
+    const focused = part.contains(document.activeElement) ? address(document.activeElement) : null;
     const before = part.dataset.say;
     part.replaceWith(document.adoptNode(next));
-    if (focused && document.activeElement?.id !== focused) document.getElementById(focused)?.focus({ preventScroll: true });
+    if (focused) next.querySelector(focused)?.focus({ preventScroll: true });
     if (said && before !== next.dataset.say) {
       said.textContent = next.dataset.say;
       if (location.pathname === "/") document.title = document.title.replace(before.trim(), next.dataset.say.trim());
@@ -124,9 +130,8 @@
   function listen() {
     const source = new EventSource(events);
     source.addEventListener("open", () => {
-      const back = brokenSince !== 0;
       whole();
-      if (back) refresh();
+      refresh(); // what changed before the line stood was told to nobody
     });
     source.addEventListener("changed", () => {
       whole();
@@ -154,6 +159,9 @@
       }
     }, 10 * SECOND);
   }
+
+  /* a form that came back is met where it is wrong, not at the top of the page */
+  addEventListener("load", () => setTimeout(() => document.querySelector("[aria-invalid=true]")?.focus()));
 
   tick();
   setInterval(tick, 10 * SECOND);

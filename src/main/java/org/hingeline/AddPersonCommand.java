@@ -7,6 +7,7 @@ import java.util.Arrays;
 import org.hingeline.config.PasswordFile;
 import org.hingeline.config.Settings;
 import org.hingeline.hatchery.Site;
+import org.hingeline.monitor.Accounts;
 import org.hingeline.monitor.Role;
 import org.hingeline.store.Database;
 import org.jspecify.annotations.Nullable;
@@ -46,14 +47,24 @@ final class AddPersonCommand implements Runnable {
             description = "a file that holds only the password (default: asks for it)")
     private @Nullable Path passwordFile;
 
+    @Option(
+            names = "--known",
+            description = "somebody who signs in already gets a role at this site too; asks for no password")
+    private boolean known;
+
     @Override
     public void run() {
         Settings settings = config.read();
-        String password = passwordFile != null ? PasswordFile.read(passwordFile) : ask();
+        String password = known ? "" : passwordFile != null ? PasswordFile.read(passwordFile) : ask();
         try (Database database = Databases.open(settings)) {
             Site found = site(database, site);
-            Service.accounts(settings, Hingeline.CLOCK, database, new SecureRandom())
-                    .savePerson(found, name, displayName == null ? name : displayName, password, role, "command line");
+            Accounts accounts = Service.accounts(settings, Hingeline.CLOCK, database, new SecureRandom());
+            if (known) {
+                accounts.addToSite(found, name, role, "command line");
+            } else {
+                accounts.savePerson(
+                        found, name, displayName == null ? name : displayName, password, role, "command line");
+            }
         }
         spec.commandLine().getOut().println(name + " can sign in at " + site + " as " + role.code() + ".");
     }

@@ -36,6 +36,7 @@ import org.hingeline.monitor.ReadingIntake;
 import org.hingeline.monitor.Secrets;
 import org.hingeline.monitor.Signals;
 import org.hingeline.monitor.StatusBoard;
+import org.hingeline.monitor.Storage;
 import org.hingeline.store.Database;
 import org.hingeline.store.EmbeddedDatabase;
 import org.hingeline.web.LiveEvents;
@@ -211,6 +212,14 @@ final class Service implements AutoCloseable {
 
     int port() {
         return web.port();
+    }
+
+    Storage storage() {
+        return database;
+    }
+
+    WebServer web() {
+        return web;
     }
 
     Accounts accounts() {

@@ -9,11 +9,22 @@ import java.net.http.HttpRequest.BodyPublishers;
 import java.net.http.HttpResponse;
 import java.net.http.HttpResponse.BodyHandlers;
 import java.nio.file.Path;
+import java.security.SecureRandom;
 import java.time.Clock;
+import java.time.Instant;
+import java.util.List;
+import java.util.Set;
 import org.hingeline.config.PlaceFileReader;
 import org.hingeline.config.Settings;
 import org.hingeline.hatchery.Site;
+import org.hingeline.monitor.Accounts;
+import org.hingeline.monitor.Passwords;
+import org.hingeline.monitor.PeopleBook;
+import org.hingeline.monitor.PlacePlan;
+import org.hingeline.monitor.ReadingBook.RefusedRow;
+import org.hingeline.monitor.ReadingBook.StoredReading;
 import org.hingeline.monitor.Role;
+import org.hingeline.monitor.Storage;
 
 /**
  * The real service on a free port with the demo's place set up, for tests that go through HTTP: a manager {@code ana}, a
@@ -46,7 +57,65 @@ public final class RunningService implements AutoCloseable {
         return new RunningService(service, site, service.accounts().makeGatewayKey(site, "pump house", "test"));
     }
 
-    public Service service() {
+    /** The store itself, for what cannot be seen through HTTP. */
+    public Storage storage() {
+        return service.storage();
+    }
+
+    /** Rows that were not taken, newest first. */
+    public List<RefusedRow> refusedRows(Site at) {
+        return storage().read(books -> books.readings().refused(at.id(), 1000));
+    }
+
+    /** Every reading of the site, whatever its flag. */
+    public List<StoredReading> allReadings(Site at) {
+        return storage()
+                .read(books -> books.place().sensors(at.id()).stream()
+                        .flatMap(sensor -> books
+                                .readings()
+                                .between(
+                                        sensor.id(),
+                                        Instant.parse("1900-01-01T00:00:00Z"),
+                                        Instant.parse("9000-01-01T00:00:00Z"))
+                                .stream())
+                        .toList());
+    }
+
+    /** Every route the service serves, as {@code GET /api/v1/points}. */
+    public Set<String> routes() {
+        return service.web().routes();
+    }
+
+    /** Sets up another place beside the first. */
+    public Site addPlace(PlacePlan plan) {
+        return service.place().apply(plan, "test");
+    }
+
+    public String gatewayKey(Site at) {
+        return service.accounts().makeGatewayKey(at, "another gateway", "test");
+    }
+
+    public String token(Site at, Role role) {
+        return service.accounts().makeAccessToken(at, "test " + role.code(), role, "test");
+    }
+
+    /** Signs in a person who belongs to the sites, and answers the token of their session cookie. */
+    public String signIn(String name, List<Site> sites, Role role) {
+        for (Site at : sites) {
+            storage().writeOnly(books -> {
+                long id = books.people()
+                        .personByName(name)
+                        .map(PeopleBook.Person::id)
+                        .orElseGet(() -> books.people()
+                                .savePerson(
+                                        name, name, new Passwords(new SecureRandom()).hash(PASSWORD), Instant.EPOCH));
+                books.people().saveMembership(id, at.id(), role);
+            });
+        }
+        return ((Accounts.SignIn.Welcome) service.accounts().signIn(name, PASSWORD)).token();
+    }
+
+    Service service() {
         return service;
     }
 
@@ -56,6 +125,21 @@ public final class RunningService implements AutoCloseable {
 
     public String gatewayKey() {
         return gatewayKey;
+    }
+
+    /** Adds somebody who signs in with {@link #PASSWORD}. */
+    public void addPerson(Site at, String name, String displayName, Role role) {
+        service.accounts().savePerson(at, name, displayName, PASSWORD, role, "test");
+    }
+
+    /** Gives somebody who signs in already a role at another site. */
+    public void addToSite(Site at, String name, Role role) {
+        service.accounts().addToSite(at, name, role, "test");
+    }
+
+    /** Sets up another site from a place file's text. */
+    public Site addPlace(String yaml) {
+        return service.place().apply(PlaceFileReader.readText("test", yaml), "test");
     }
 
     /** A key for another gateway. */

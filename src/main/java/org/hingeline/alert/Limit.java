@@ -46,6 +46,11 @@ public record Limit(
         return quantity == Quantity.SILENCE;
     }
 
+    /** Whether a value, in the canonical unit, is out of this limit. */
+    public boolean isPast(double value) {
+        return side.out(value, threshold);
+    }
+
     private static void checkDelay(String field, Duration delay) {
         if (delay.isNegative() || delay.compareTo(MAX_DELAY) > 0) {
             throw new IllegalArgumentException(field + " " + delay.toSeconds() / 60.0 + " must be 0 to 1440");

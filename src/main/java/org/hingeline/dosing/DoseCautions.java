@@ -46,7 +46,7 @@ final class DoseCautions {
         add(
                 cautions,
                 "measure-between",
-                "Mix for three turnovers and measure pH before each next addition; stop when it is not as foretold.");
+                "Mix for three turnovers and measure pH before each next addition; stop when it is not what the plan expects.");
         cautions.add(ammonia(water.before(), after));
         add(
                 cautions,

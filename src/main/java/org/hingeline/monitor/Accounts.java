@@ -145,8 +145,8 @@ public final class Accounts {
         storage.writeOnly(books -> {
             Optional<Person> known = books.people().personByName(name);
             if (known.isPresent()
-                    && books.people().memberships(known.get().id()).stream()
-                            .noneMatch(m -> m.site().id() == site.id())) {
+                    && !belongsOnlyTo(
+                            site, books.people().memberships(known.get().id()))) {
                 throw new FieldFaultsException("name", "name \"" + name + "\" is taken; choose another");
             }
             long id = books.people().savePerson(name, displayName, hash, now);
@@ -154,6 +154,28 @@ public final class Accounts {
             books.people().saveMembership(id, site.id(), role);
             journal(books, now, site, who, "person-saved", name, "role " + role.code());
         });
+    }
+
+    /**
+     * Gives somebody who signs in already a role at another site, or another role there; their password stays as it is.
+     *
+     * @throws FieldFaultsException when nobody has this name
+     */
+    public void addToSite(Site site, String name, Role role, String who) {
+        Instant now = clock.instant();
+        storage.writeOnly(books -> {
+            Person known = books.people()
+                    .personByName(name)
+                    .orElseThrow(() -> new FieldFaultsException("name", "nobody signs in as \"" + name + "\""));
+            books.people().saveMembership(known.id(), site.id(), role);
+            journal(books, now, site, who, "person-saved", name, "role " + role.code());
+        });
+    }
+
+    /** A person of another site too is not for this site to change: their password opens that site as well. */
+    private static boolean belongsOnlyTo(Site site, List<Membership> memberships) {
+        return !memberships.isEmpty()
+                && memberships.stream().allMatch(m -> m.site().id() == site.id());
     }
 
     private void checkPassword(String password, FieldFaults faults) {

@@ -15,7 +15,11 @@ import org.jspecify.annotations.Nullable;
 /** Limits, what the alert machine remembers of each, and the alerts. */
 public interface AlertBook {
 
-    /** A limit in use and the machine's memory of it. */
+    /**
+     * A limit in use and the machine's memory of it.
+     *
+     * @param createdAt since when its quantity is watched: when the limit was made, put back, or set on another quantity
+     */
     record Watched(Limit limit, AlertState state, @Nullable Long alertId, Instant createdAt) {}
 
     /**

@@ -34,7 +34,10 @@ public final class AlertDesk {
         this.signals = signals;
     }
 
-    /** @return the alert now open for the limit, if any */
+    /**
+     * @param tell whether people are to hear of it
+     * @return the alert now open for the limit, if any
+     */
     @Nullable
     Long carryOut(
             Books books,
@@ -43,37 +46,43 @@ public final class AlertDesk {
             Limit limit,
             Transition transition,
             @Nullable Long alertId,
+            boolean tell,
             Instant now) {
         AlertState state = transition.state();
-        Observation latest = state.latest();
-        Instant valueAt = latest == null ? now : latest.at();
         return switch (transition.effect()) {
             case NOTHING, ACKNOWLEDGE -> alertId;
             case RAISE -> {
                 long id = books.alerts().open(newAlert(siteId, point, limit, state, now));
-                messages.alert(books, siteId, id, limit, MessageDesk.Kind.RAISED, valueAt, now);
+                tell(tell, books, siteId, id, limit, MessageDesk.Kind.RAISED, now);
                 yield id;
             }
             case RAISE_AGAIN -> {
                 long id = Objects.requireNonNull(alertId);
-                Observation out = latest(state);
-                books.alerts().reopen(id, since(limit, state), now, out.value(), out.standardUncertainty());
-                messages.alert(books, siteId, id, limit, MessageDesk.Kind.RAISED_AGAIN, valueAt, now);
+                Observation latest = latest(state);
+                books.alerts().reopen(id, since(limit, state), now, latest.value(), latest.standardUncertainty());
+                tell(tell, books, siteId, id, limit, MessageDesk.Kind.RAISED_AGAIN, now);
                 yield id;
             }
             case RETURN -> {
                 long id = Objects.requireNonNull(alertId);
                 books.alerts().returned(id, now);
-                messages.alert(books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, valueAt, now);
+                tell(tell, books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, now);
                 yield id;
             }
             case CLOSE -> {
                 long id = Objects.requireNonNull(alertId);
                 books.alerts().close(id, now);
-                messages.alert(books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, valueAt, now);
+                tell(tell, books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, now);
                 yield null;
             }
         };
+    }
+
+    private void tell(
+            boolean tell, Books books, long siteId, long id, Limit limit, MessageDesk.Kind kind, Instant now) {
+        if (tell) {
+            messages.alert(books, siteId, id, limit, kind, now);
+        }
     }
 
     private static Alert newAlert(long siteId, Point point, Limit limit, AlertState state, Instant now) {
@@ -127,12 +136,15 @@ public final class AlertDesk {
      * A person says that they have seen it.
      *
      * @param note at most 500 characters
-     * @throws IllegalArgumentException when the note is too long
+     * @throws FieldFaultsException when the note cannot be kept
      */
     public Acknowledged acknowledge(long siteId, long alertId, String who, @Nullable String note) {
         if (note != null && note.length() > NOTE_MOST) {
-            throw new IllegalArgumentException(
-                    "note has " + note.length() + " characters; at most " + NOTE_MOST + " are kept");
+            throw new FieldFaultsException(
+                    "note", "note has " + note.length() + " characters; at most " + NOTE_MOST + " are kept");
+        }
+        if (note != null && Texts.hasControls(note)) {
+            throw new FieldFaultsException("note", "note has a control character; accepted: text and line breaks");
         }
         String kept = note == null || note.isBlank() ? null : note.strip();
         Instant now = clock.instant();

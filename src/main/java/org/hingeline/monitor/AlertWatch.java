@@ -3,10 +3,11 @@ package org.hingeline.monitor;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
+import java.util.NavigableMap;
 import java.util.Objects;
+import java.util.TreeMap;
 import java.util.function.Function;
 import java.util.stream.Collectors;
 import org.hingeline.alert.AlertMachine;
@@ -31,13 +32,20 @@ public final class AlertWatch {
     /** What became known of a point: new readings, its sensors, and the water states they led to. */
     record News(Point point, List<StoredReading> readings, List<Sensor> sensors, List<WaterState> states) {}
 
+    /** Where the age of a value plays no part. */
+    static final Duration NO_MATTER = Duration.ofDays(1);
+
     private final AlertDesk desk;
+    private final Attention attention = new Attention();
 
     public AlertWatch(AlertDesk desk) {
         this.desk = desk;
     }
 
-    /** Holds new readings and states against the limits of their points. */
+    /**
+     * Holds new readings and states against the limits of their points. What arrives can end a silence, never begin one:
+     * it may be the first part of what a gateway kept.
+     */
     void observe(Books books, long siteId, List<News> news, Instant now) {
         Map<Long, News> byPoint =
                 news.stream().collect(Collectors.toMap(n -> n.point().id(), Function.identity()));
@@ -45,12 +53,13 @@ public final class AlertWatch {
                 .collect(Collectors.groupingBy(w -> w.limit().pointId()));
         watched.forEach((pointId, limits) -> {
             News here = Objects.requireNonNull(byPoint.get(pointId));
-            run(books, siteId, here.point(), limits, limit -> observations(limit, here), now);
+            run(new Run(books, siteId, here.point(), now), limits, limit -> observations(limit, here), false);
         });
     }
 
-    /** Lets time pass over every limit: delays run out, points fall silent. */
+    /** Lets time pass over every limit: delays run out, points fall silent. To be called every few seconds. */
     public void tick(Books books, Instant now) {
+        Duration watching = attention.look(now);
         Map<Long, List<Watched>> watched = books
                 .alerts()
                 .watchedForUpdate(books.alerts().pointsWithLimits())
@@ -58,31 +67,36 @@ public final class AlertWatch {
                 .collect(Collectors.groupingBy(w -> w.limit().pointId()));
         watched.forEach((pointId, limits) -> {
             Point point = books.place().pointById(pointId).orElseThrow();
-            run(books, point.siteId(), point, limits, limit -> List.of(), now);
+            boolean maySayItIsSilent = Attention.suffices(watching, point.maxGap());
+            run(new Run(books, point.siteId(), point, now), limits, limit -> List.of(), maySayItIsSilent);
         });
     }
 
+    private record Run(Books books, long siteId, Point point, Instant now) {}
+
     /** Runs the machine over the limits of one point, silence last. */
     private void run(
-            Books books,
-            long siteId,
-            Point point,
+            Run run,
             List<Watched> limits,
             Function<Limit, List<Observation>> observationsOf,
-            Instant now) {
-        Instant oldest = null;
+            boolean maySayItIsSilent) {
+        Instant silentSince = null;
         for (Watched watched : limits) {
-            if (watched.limit().onSilence()) {
+            Limit limit = watched.limit();
+            if (limit.onSilence()) {
                 continue;
             }
-            AlertState after =
-                    step(books, siteId, point, watched, observationsOf.apply(watched.limit()), now, point.maxGap());
-            Instant last = lastKnown(after, watched);
-            oldest = oldest == null || last.isBefore(oldest) ? last : oldest;
+            Duration fresh = Freshness.of(limit.quantity(), run.point());
+            AlertState after = step(run, watched, observationsOf.apply(limit), fresh);
+            Instant known = lastKnown(after, watched);
+            boolean inTime = !known.plus(fresh).isBefore(run.now());
+            // the pause between two samples taken by hand is no silence
+            Instant since = inTime && fresh.compareTo(run.point().maxGap()) > 0 ? run.now() : known;
+            silentSince = silentSince == null || since.isBefore(silentSince) ? since : silentSince;
         }
         for (Watched watched : limits) {
-            if (watched.limit().onSilence() && oldest != null) {
-                silence(books, siteId, point, watched, oldest, now);
+            if (watched.limit().onSilence() && silentSince != null) {
+                silence(run, watched, silentSince, maySayItIsSilent);
             }
         }
     }
@@ -90,46 +104,69 @@ public final class AlertWatch {
     /** Since when the limit's quantity is unknown; a new limit is given time from its making. */
     private static Instant lastKnown(AlertState state, Watched watched) {
         Observation latest = state.latest();
-        return latest == null ? watched.createdAt() : latest.at();
+        return latest == null || latest.at().isBefore(watched.createdAt()) ? watched.createdAt() : latest.at();
     }
 
-    private void silence(Books books, long siteId, Point point, Watched watched, Instant oldest, Instant now) {
-        double minutes = Math.max(0, Duration.between(oldest, now).toMillis() / 60_000.0);
-        boolean worthARow = watched.state().phase().open()
-                || watched.state().outSince() != null
-                || minutes > watched.limit().threshold();
-        if (worthARow) {
-            step(books, siteId, point, watched, List.of(new Observation(now, minutes, 0)), now, Duration.ofDays(1));
+    private void silence(Run run, Watched watched, Instant since, boolean maySayItIsSilent) {
+        double minutes = Math.max(0, Duration.between(since, run.now()).toMillis() / 60_000.0);
+        boolean silent = minutes > watched.limit().threshold();
+        boolean open = watched.state().phase().open();
+        if (silent ? maySayItIsSilent : open) {
+            step(run, watched, List.of(new Observation(run.now(), minutes, 0)), NO_MATTER);
         }
     }
 
-    private AlertState step(
-            Books books,
-            long siteId,
-            Point point,
-            Watched watched,
-            List<Observation> observations,
-            Instant now,
-            Duration freshFor) {
+    private AlertState step(Run run, Watched watched, List<Observation> observations, Duration freshFor) {
         Limit limit = watched.limit();
-        AlertState state = watched.state();
-        Long alertId = watched.alertId();
+        AlertState state = corrected(limit, watched.state(), observations);
         List<Event> events = new ArrayList<>(observations.size() + 1);
         observations.forEach(observation -> events.add(new Event.Observed(observation)));
         events.add(new Event.Tick());
+        List<Transition> decided = new ArrayList<>();
         for (Event event : events) {
-            Transition transition = AlertMachine.next(limit, freshFor, state, event, now);
+            Transition transition = AlertMachine.next(limit, freshFor, state, event, run.now());
             state = transition.state();
-            alertId = desk.carryOut(books, siteId, point, limit, transition, alertId, now);
+            if (transition.effect() != Transition.Effect.NOTHING) {
+                decided.add(transition);
+            }
+        }
+        Long alertId = watched.alertId();
+        for (int i = 0; i < decided.size(); i++) {
+            // water that went to and fro within one batch: people hear that it began, and how it stands now
+            boolean tell = i == decided.size() - 1 || decided.get(i).effect() == Transition.Effect.RAISE;
+            alertId = desk.carryOut(
+                    run.books(), run.siteId(), run.point(), limit, decided.get(i), alertId, tell, run.now());
         }
         if (!state.equals(watched.state()) || !Objects.equals(alertId, watched.alertId())) {
-            books.alerts().saveState(limit.id(), state, alertId);
+            run.books().alerts().saveState(limit.id(), state, alertId);
         }
         return state;
     }
 
+    /**
+     * The memory with its newest value as it is known now: a late input, say an alkalinity titrated this morning, changes
+     * what is computed for moments that have passed, and the present is judged by the newest of them.
+     */
+    private static AlertState corrected(Limit limit, AlertState state, List<Observation> observations) {
+        Observation latest = state.latest();
+        if (latest == null || limit.quantity().measured()) {
+            return state;
+        }
+        return observations.stream()
+                .filter(o -> o.at().equals(latest.at()) && !o.equals(latest))
+                .findFirst()
+                .map(o -> limit.isPast(o.value())
+                        ? new AlertState(state.phase(), orElse(state.outSince(), o.at()), null, o)
+                        : new AlertState(state.phase(), null, state.backSince(), o))
+                .orElse(state);
+    }
+
+    private static Instant orElse(@Nullable Instant first, Instant second) {
+        return first != null ? first : second;
+    }
+
     private static List<Observation> observations(Limit limit, News news) {
-        List<Observation> observations = new ArrayList<>();
+        NavigableMap<Instant, Observation> observations = new TreeMap<>();
         if (limit.quantity().measured()) {
             Map<Long, Sensor> sensors = news.sensors().stream()
                     .filter(sensor -> sensor.quantity() == limit.quantity())
@@ -137,19 +174,21 @@ public final class AlertWatch {
             for (StoredReading reading : news.readings()) {
                 @Nullable Sensor sensor = sensors.get(reading.sensorId());
                 if (sensor != null && reading.flag().usable()) {
-                    observations.add(new Observation(reading.at(), reading.value(), sensor.standardUncertainty()));
+                    observations.merge(
+                            reading.at(),
+                            new Observation(reading.at(), reading.value(), sensor.standardUncertainty()),
+                            (a, b) -> b.standardUncertainty() < a.standardUncertainty() ? b : a);
                 }
             }
         } else {
             for (WaterState state : news.states()) {
                 @Nullable WaterNumbers numbers = state.numbers();
                 if (numbers != null) {
-                    observations.add(observation(limit.quantity(), state.at(), numbers));
+                    observations.put(state.at(), observation(limit.quantity(), state.at(), numbers));
                 }
             }
         }
-        observations.sort(Comparator.comparing(Observation::at));
-        return observations;
+        return List.copyOf(observations.values());
     }
 
     static Observation observation(Quantity quantity, Instant at, WaterNumbers numbers) {

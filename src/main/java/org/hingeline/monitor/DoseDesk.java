@@ -66,10 +66,12 @@ public final class DoseDesk {
         Double volumeL = wish.volumeL() != null
                 ? wish.volumeL()
                 : status.map(PointStatus::point).map(Point::volumeL).orElse(null);
-        if (volumeL == null || !Double.isFinite(volumeL)) {
+        if (volumeL == null) {
             faults.add(
                     "volumeL",
                     "volumeL is missing: the point has no volume set, so the request must say it, in litres");
+        } else if (!Double.isFinite(volumeL)) {
+            faults.add("volumeL", "volumeL " + volumeL + " must be a finite number, in litres");
         }
         Target target = target(wish.target(), faults);
         Agent agent = agent(wish.agent(), faults);

@@ -6,13 +6,9 @@ import java.time.InstantSource;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
-import org.hingeline.alert.AlertMachine;
-import org.hingeline.alert.AlertState;
-import org.hingeline.alert.Event;
 import org.hingeline.alert.Limit;
 import org.hingeline.alert.Priority;
 import org.hingeline.alert.Side;
-import org.hingeline.alert.Transition;
 import org.hingeline.hatchery.Codes;
 import org.hingeline.hatchery.Point;
 import org.hingeline.measure.Quantity;
@@ -60,11 +56,13 @@ public final class LimitDesk {
 
     /** As {@link #save}, inside a transaction that is already open. */
     Limit save(Books books, Point point, Limit limit, String who, Instant now) {
-        String before = books.alerts()
-                .limit(point.id(), limit.name())
-                .map(LimitDesk::words)
-                .orElse("none");
+        Optional<Watched> known = watched(books, point, limit.name());
+        String before = known.map(Watched::limit).map(LimitDesk::words).orElse("none");
+        if (before.equals(words(limit))) {
+            return known.map(Watched::limit).orElseThrow();
+        }
         Limit saved = books.alerts().saveLimit(limit, now);
+        known.ifPresent(watched -> LimitChange.carryOver(books, watched, saved, now));
         books.journal()
                 .add(new JournalBook.Entry(
                         now,
@@ -95,21 +93,17 @@ public final class LimitDesk {
     }
 
     private static boolean retire(Books books, Point point, String name, String who, Instant now) {
-        Optional<Watched> found = books.alerts().watchedForUpdate(List.of(point.id())).stream()
-                .filter(w -> w.limit().name().equals(name))
-                .findFirst();
+        Optional<Watched> found = watched(books, point, name);
         if (found.isEmpty()) {
             return false;
         }
         Watched watched = found.get();
-        Transition transition =
-                AlertMachine.next(watched.limit(), point.maxGap(), watched.state(), new Event.Retired(), now);
-        Long alertId = watched.alertId();
-        if (transition.effect() == Transition.Effect.CLOSE && alertId != null) {
-            books.alerts().close(alertId, now);
-        }
-        books.alerts().saveState(watched.limit().id(), AlertState.INITIAL, null);
+        LimitChange.end(books, watched, now);
         books.alerts().retireLimit(watched.limit().id(), now);
+        if (books.alerts().limits(point.id()).stream().allMatch(Limit::onSilence)) {
+            // with nothing left to watch no value is waited for, so none can end this alert
+            watched(books, point, SILENCE).ifPresent(silence -> LimitChange.end(books, silence, now));
+        }
         books.journal()
                 .add(new JournalBook.Entry(
                         now,
@@ -119,6 +113,12 @@ public final class LimitDesk {
                         point.code() + "/" + name,
                         "before: " + words(watched.limit())));
         return true;
+    }
+
+    private static Optional<Watched> watched(Books books, Point point, String name) {
+        return books.alerts().watchedForUpdate(List.of(point.id())).stream()
+                .filter(w -> w.limit().name().equals(name))
+                .findFirst();
     }
 
     /** The watch over silence of a point. */
@@ -170,6 +170,9 @@ public final class LimitDesk {
         String action = wish.action() == null ? "" : wish.action().strip();
         if (action.isEmpty() || action.length() > 300) {
             faults.add("action", "action must say what to do, in 1 to 300 characters; it has " + action.length());
+        }
+        if (Texts.hasControls(action)) {
+            faults.add("action", "action has a control character; accepted: text and line breaks");
         }
         faults.throwIfAny();
         return new Limit(

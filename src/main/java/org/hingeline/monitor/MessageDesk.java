@@ -1,6 +1,7 @@
 package org.hingeline.monitor;
 
 import java.time.Instant;
+import java.util.Arrays;
 import org.hingeline.alert.Limit;
 import org.hingeline.hatchery.Batch;
 import org.hingeline.hatchery.Point;
@@ -13,14 +14,16 @@ public final class MessageDesk {
 
     /** What a message tells of. */
     enum Kind {
-        RAISED("raised"),
-        RAISED_AGAIN("again"),
-        BACK_TO_NORMAL("back");
+        RAISED("raised", "raised"),
+        RAISED_AGAIN("again", "raised again"),
+        BACK_TO_NORMAL("back", "back to normal");
 
         private final String code;
+        private final String words;
 
-        Kind(String code) {
+        Kind(String code, String words) {
             this.code = code;
+            this.words = words;
         }
     }
 
@@ -36,14 +39,24 @@ public final class MessageDesk {
         this.installation = installation;
     }
 
-    /** @param valueAt time of the value that this tells of; one batch may bring several turns of one alert */
-    void alert(Books books, long siteId, long alertId, Limit limit, Kind kind, Instant valueAt, Instant now) {
+    /** What a message told of, in a word or three: "raised", "back to normal". */
+    public static String news(OutboxBook.Message message) {
+        return Arrays.stream(Kind.values())
+                .filter(kind -> message.key().contains("-" + kind.code + "-"))
+                .findFirst()
+                .map(kind -> kind.words)
+                .orElse(message.subject());
+    }
+
+    void alert(Books books, long siteId, long alertId, Limit limit, Kind kind, Instant now) {
         Alert alert = books.alerts().alert(siteId, alertId).orElseThrow();
         AlertNews news = news(books, siteId, alert, limit, now);
         AlertText text = text(news, kind);
+        // what was said before tells two messages of one kind and moment apart: both can stand in one batch of readings
+        int before = books.outbox().messagesOf(alertId).size();
         for (Subscriber subscriber : books.people().subscribers(siteId)) {
             if (subscriber.active() && alert.priority().atLeast(subscriber.minPriority())) {
-                books.outbox().add(message(siteId, alert, kind, text, subscriber, valueAt, now));
+                books.outbox().add(message(siteId, alert, kind, text, subscriber, before, now));
             }
         }
     }
@@ -68,9 +81,9 @@ public final class MessageDesk {
     }
 
     private OutboxBook.Message message(
-            long siteId, Alert alert, Kind kind, AlertText text, Subscriber subscriber, Instant valueAt, Instant now) {
-        String key = "alert-" + alert.id() + "-" + kind.code + "-" + now.toEpochMilli() + "-" + valueAt.toEpochMilli()
-                + "-" + subscriber.id() + "-" + installation;
+            long siteId, Alert alert, Kind kind, AlertText text, Subscriber subscriber, int before, Instant now) {
+        String key = "alert-" + alert.id() + "-" + kind.code + "-" + now.toEpochMilli() + "-" + before + "-"
+                + subscriber.id() + "-" + installation;
         return new OutboxBook.Message(
                 0,
                 siteId,

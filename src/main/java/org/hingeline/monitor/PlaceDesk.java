@@ -5,6 +5,7 @@ import java.time.InstantSource;
 import java.util.List;
 import java.util.Optional;
 import org.hingeline.alert.Limit;
+import org.hingeline.hatchery.Batch;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Sensor;
 import org.hingeline.hatchery.Site;
@@ -39,16 +40,13 @@ public final class PlaceDesk {
     private Site apply(Books books, PlacePlan plan, String who, Instant now) {
         Site site = books.place().saveSite(plan.site().toSite());
         plan.points().forEach(point -> savePoint(books, point.toPoint(site.id()), now));
-        plan.sensors()
-                .forEach(sensor ->
-                        books.place().saveSensor(site.id(), sensor.toSensor(pointId(books, site, sensor.point()))));
+        plan.sensors().forEach(sensor -> saveSensor(books, site, sensor));
         plan.limits().forEach(wanted -> {
             Point point = books.place().point(site.id(), wanted.point()).orElseThrow();
             limits.save(books, point, wanted.toLimit(point.id()), who, now);
         });
         plan.subscribers().forEach(subscriber -> books.people().saveSubscriber(subscriber.toSubscriber(site.id())));
-        plan.batches()
-                .forEach(batch -> books.place().saveBatch(batch.toBatch(pointId(books, site, batch.point()), now)));
+        plan.batches().forEach(batch -> saveBatch(books, site, batch, now));
         journal(
                 books,
                 now,
@@ -92,25 +90,42 @@ public final class PlaceDesk {
     public void saveSensor(Site site, PlacePlan.SensorPlan plan, String who) {
         Instant now = clock.instant();
         storage.writeOnly(books -> {
-            Point point = books.place()
-                    .point(site.id(), plan.point())
-                    .orElseThrow(() -> new FieldFaultsException(
-                            "point", "point \"" + plan.point() + "\" is not known at this site"));
-            Optional<Sensor> known = books.place().sensors(site.id()).stream()
-                    .filter(sensor -> sensor.code().equals(plan.code()))
-                    .findFirst();
-            if (known.isPresent()
-                    && (known.get().quantity() != plan.quantity() || known.get().pointId() != point.id())) {
-                throw new FieldFaultsException(
-                        "code",
-                        "sensor \"" + plan.code() + "\" is registered already for "
-                                + known.get().quantity().code()
-                                + " and keeps its point and quantity, because its readings belong there; take another code");
-            }
-            books.place().saveSensor(site.id(), plan.toSensor(point.id()));
+            saveSensor(books, site, plan);
             journal(books, now, site, who, "sensor-saved", plan.code(), plan.toString());
         });
         signals.siteChanged(site.id());
+    }
+
+    private static void saveSensor(Books books, Site site, PlacePlan.SensorPlan plan) {
+        Point point = books.place()
+                .point(site.id(), plan.point())
+                .orElseThrow(() ->
+                        new FieldFaultsException("point", "point \"" + plan.point() + "\" is not known at this site"));
+        Optional<Sensor> known = books.place().sensors(site.id()).stream()
+                .filter(sensor -> sensor.code().equals(plan.code()))
+                .findFirst();
+        if (known.isPresent()
+                && (known.get().quantity() != plan.quantity() || known.get().pointId() != point.id())) {
+            throw new FieldFaultsException(
+                    "code",
+                    "sensor \"" + plan.code() + "\" is registered already for "
+                            + known.get().quantity().code()
+                            + " and keeps its point and quantity, because its readings belong there; take another code");
+        }
+        books.place().saveSensor(site.id(), plan.toSensor(point.id()));
+    }
+
+    /** A spawn given in hours before now is that of a new batch; one that is in the tank already keeps its own. */
+    private static void saveBatch(Books books, Site site, PlacePlan.BatchPlan plan, Instant now) {
+        Batch wanted = plan.toBatch(pointId(books, site, plan.point()), now);
+        Instant spawnedAt = plan.hoursSinceSpawn() == null
+                ? wanted.spawnedAt()
+                : books.place().batchesNow(site.id(), now).stream()
+                        .filter(b -> b.pointId() == wanted.pointId() && b.code().equals(wanted.code()))
+                        .findFirst()
+                        .map(Batch::spawnedAt)
+                        .orElse(wanted.spawnedAt());
+        books.place().saveBatch(new Batch(0, wanted.pointId(), wanted.code(), wanted.species(), spawnedAt, null));
     }
 
     public void saveSubscriber(Site site, PlacePlan.SubscriberPlan plan, boolean active, String who) {

@@ -26,9 +26,14 @@ final class PointInputs {
         }
     }
 
-    /** Of two sensors read at the same moment, the one registered as the more certain. */
+    /** Of two sensors read at the same moment, the one registered as the more certain; of equals always the same one. */
     private static Candidate moreCertain(Candidate a, Candidate b) {
-        return b.sensor().standardUncertainty() < a.sensor().standardUncertainty() ? b : a;
+        int byUncertainty =
+                Double.compare(a.sensor().standardUncertainty(), b.sensor().standardUncertainty());
+        int order = byUncertainty != 0
+                ? byUncertainty
+                : a.sensor().code().compareTo(b.sensor().code());
+        return order <= 0 ? a : b;
     }
 
     /** The newest usable value at or before a moment. */

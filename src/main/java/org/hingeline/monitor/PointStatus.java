@@ -5,7 +5,6 @@ import java.time.Instant;
 import java.util.List;
 import java.util.Optional;
 import org.hingeline.alert.Limit;
-import org.hingeline.alert.Side;
 import org.hingeline.hatchery.Batch;
 import org.hingeline.hatchery.Point;
 import org.hingeline.measure.Quantity;
@@ -39,7 +38,7 @@ public record PointStatus(
         FIT("fit"),
         /** Past at least one limit. */
         OUT("out-of-limit"),
-        /** An input is missing or too old, so nobody can say. */
+        /** An input, or a quantity that has a limit, is missing or too old, so nobody can say. */
         UNKNOWN("unknown"),
         /** Known, but no limit is set to hold it against. */
         NO_LIMIT("no-limit");
@@ -65,7 +64,9 @@ public record PointStatus(
         if (!passed().isEmpty()) {
             return Verdict.OUT;
         }
-        if (numbers().isEmpty()) {
+        boolean known = numbers().isPresent()
+                && watching().stream().allMatch(limit -> value(limit.quantity()).isPresent());
+        if (!known) {
             return Verdict.UNKNOWN;
         }
         return watching().isEmpty() ? Verdict.NO_LIMIT : Verdict.FIT;
@@ -90,16 +91,14 @@ public record PointStatus(
     }
 
     private boolean isPassed(Limit limit) {
-        Optional<Double> value = value(limit.quantity());
-        return value.isPresent()
-                && (limit.side() == Side.BELOW ? value.get() < limit.threshold() : value.get() > limit.threshold());
+        return value(limit.quantity()).filter(limit::isPast).isPresent();
     }
 
     private Optional<Double> value(Quantity quantity) {
         if (quantity.measured()) {
             return readings.stream()
                     .filter(known -> known.quantity() == quantity
-                            && fresh(known.reading().at()))
+                            && within(known.reading().at(), Freshness.of(quantity, point)))
                     .map(known -> known.reading().value())
                     .findFirst();
         }
@@ -108,6 +107,10 @@ public record PointStatus(
     }
 
     private boolean fresh(Instant at) {
-        return Duration.between(at, now).compareTo(point.maxGap()) <= 0;
+        return within(at, point.maxGap());
+    }
+
+    private boolean within(Instant at, Duration age) {
+        return Duration.between(at, now).compareTo(age) <= 0;
     }
 }

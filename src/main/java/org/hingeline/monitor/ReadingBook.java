@@ -24,6 +24,9 @@ public interface ReadingBook {
     /** The newest usable reading of one sensor with from ≤ at &lt; before. */
     Optional<StoredReading> newestBefore(long sensorId, Instant from, Instant before);
 
+    /** Time of the first usable reading of one sensor with after &lt; at ≤ to. */
+    Optional<Instant> firstAfter(long sensorId, Instant after, Instant to);
+
     /** Time of the newest reading of any sensor of the point. */
     Optional<Instant> newestAt(long pointId);
 

@@ -43,20 +43,21 @@ final class ReadingCheck {
         if (fault != null) {
             throw new RowRefusedException(fault);
         }
-        Point point = points.get(required("point", row.point()));
+        String pointCode = required("point", row.point());
+        Point point = points.get(pointCode);
         if (point == null) {
-            throw new RowRefusedException("point \"" + row.point() + "\" is not known at this site; known: "
+            throw new RowRefusedException("point " + Texts.quoted(pointCode) + " is not known at this site; known: "
                     + listed(points.keySet().stream().sorted().toList()));
         }
         String code = required("quantity", row.quantity());
         Quantity quantity = Quantity.ofCode(code)
                 .filter(Quantity::measured)
                 .orElseThrow(() -> new RowRefusedException(
-                        "quantity \"" + code + "\" cannot be posted; accepted: " + Quantity.measuredCodes()));
+                        "quantity " + Texts.quoted(code) + " cannot be posted; accepted: " + Quantity.measuredCodes()));
         Sensor sensor = sensorOf(point, quantity, row.sensor());
         String unit = row.unit() == null ? sensor.unit() : row.unit();
         UnitConversion conversion = UnitConversion.of(quantity, unit)
-                .orElseThrow(() -> new RowRefusedException("unit \"" + unit + "\" is not accepted for " + code
+                .orElseThrow(() -> new RowRefusedException("unit " + Texts.quoted(unit) + " is not accepted for " + code
                         + "; accepted: " + UnitConversion.acceptedFor(quantity)));
         Double value = row.value();
         if (value == null || !Double.isFinite(value)) {
@@ -66,6 +67,10 @@ final class ReadingCheck {
                             : "value " + value + " is not a finite number");
         }
         double canonical = conversion.toCanonical(value);
+        if (!Double.isFinite(canonical)) {
+            throw new RowRefusedException("value " + value + " " + unit + " is too large to be a number in "
+                    + quantity.unit().ucum());
+        }
         return new StoredReading(
                 sensor.id(), time(required("at", row.at())), canonical, GrossRange.test(quantity, canonical));
     }
@@ -76,12 +81,12 @@ final class ReadingCheck {
             Sensor named =
                     here.stream().filter(s -> s.code().equals(code)).findFirst().orElse(null);
             if (named == null) {
-                throw new RowRefusedException("sensor \"" + code + "\" is not registered at " + point.code()
+                throw new RowRefusedException("sensor " + Texts.quoted(code) + " is not registered at " + point.code()
                         + "; registered: " + codes(here));
             }
             if (named.quantity() != quantity) {
-                throw new RowRefusedException(
-                        "sensor \"" + code + "\" measures " + named.quantity().code() + ", not " + quantity.code());
+                throw new RowRefusedException("sensor " + Texts.quoted(code) + " measures "
+                        + named.quantity().code() + ", not " + quantity.code());
             }
             return named;
         }
@@ -108,15 +113,17 @@ final class ReadingCheck {
             at = OffsetDateTime.parse(text).toInstant().truncatedTo(ChronoUnit.MILLIS);
         } catch (DateTimeParseException e) {
             throw new RowRefusedException(
-                    "at \"" + text + "\" is not an ISO 8601 time with offset such as 2026-05-14T03:20:00Z");
+                    "at " + Texts.quoted(text) + " is not an ISO 8601 time with offset such as 2026-05-14T03:20:00Z");
         }
         if (at.isAfter(latest)) {
-            throw new RowRefusedException("at " + text + " is in the future; accepted up to " + tolerance.toSeconds()
-                    + " s ahead of the service's clock, which allows " + latest.truncatedTo(ChronoUnit.SECONDS)
-                    + " now. Check the gateway's clock");
+            throw new RowRefusedException(
+                    "at " + Texts.quoted(text) + " is in the future; accepted up to " + tolerance.toSeconds()
+                            + " s ahead of the service's clock, which allows " + latest.truncatedTo(ChronoUnit.SECONDS)
+                            + " now. Check the gateway's clock");
         }
         if (at.isBefore(EARLIEST)) {
-            throw new RowRefusedException("at " + text + " is before " + EARLIEST + ". Check the gateway's clock");
+            throw new RowRefusedException(
+                    "at " + Texts.quoted(text) + " is before " + EARLIEST + ". Check the gateway's clock");
         }
         times.put(text, at);
         return at;

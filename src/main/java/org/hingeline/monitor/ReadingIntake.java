@@ -4,7 +4,6 @@ import java.time.Duration;
 import java.time.Instant;
 import java.time.InstantSource;
 import java.util.ArrayList;
-import java.util.Collections;
 import java.util.Comparator;
 import java.util.HashMap;
 import java.util.List;
@@ -124,11 +123,14 @@ public final class ReadingIntake {
         Map<Long, List<Row>> bySensor =
                 rows.stream().collect(Collectors.groupingBy(row -> row.reading().sensorId()));
         bySensor.forEach((sensorId, ofSensor) -> {
-            // rows are in time order
-            Instant first = ofSensor.get(0).reading().at();
-            Instant last = ofSensor.get(ofSensor.size() - 1).reading().at();
+            NavigableSet<Instant> times = new TreeSet<>();
+            ofSensor.forEach(row -> times.add(row.reading().at()));
             Map<Instant, Double> known = new HashMap<>();
-            books.readings().between(sensorId, first, last).forEach(r -> known.put(r.at(), r.value()));
+            for (NavigableSet<Instant> spell : Spells.of(times)) {
+                books.readings()
+                        .between(sensorId, spell.first(), spell.last())
+                        .forEach(r -> known.put(r.at(), r.value()));
+            }
             for (Row row : ofSensor) {
                 StoredReading reading = row.reading();
                 Double standing = known.putIfAbsent(reading.at(), reading.value());
@@ -156,17 +158,10 @@ public final class ReadingIntake {
                 books.place().points(siteId).stream().collect(Collectors.toMap(Point::id, Function.identity()));
         List<AlertWatch.News> news = new ArrayList<>();
         byPoint.forEach((pointId, readings) -> {
-            NavigableSet<Instant> times = new TreeSet<>();
-            for (StoredReading reading : readings) {
-                if (AgeLimits.NEEDED.contains(sensorOf(sensors, reading).quantity())) {
-                    times.add(reading.at());
-                }
-            }
             List<Sensor> here = sensors.values().stream()
                     .filter(sensor -> sensor.pointId() == pointId)
                     .toList();
-            List<WaterState> states =
-                    times.isEmpty() ? Collections.emptyList() : ledger.assess(books, pointId, here, times);
+            List<WaterState> states = ledger.assess(books, pointId, here, readings);
             Point point = points.get(pointId);
             if (point == null) {
                 throw new IllegalStateException("point " + pointId + " vanished");
@@ -191,7 +186,10 @@ public final class ReadingIntake {
                         row.text(),
                         refused.getOrDefault(row.index(), "")))
                 .toList();
-        storage.writeOnly(books -> books.readings().insertRefused(rows));
+        storage.writeOnly(books -> {
+            books.readings().insertRefused(rows);
+            books.people().gatewayHeard(gateway.id(), now);
+        });
     }
 
     private static Sensor sensorOf(Map<Long, Sensor> sensors, StoredReading reading) {

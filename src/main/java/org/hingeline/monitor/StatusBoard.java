@@ -72,7 +72,7 @@ public final class StatusBoard {
         List<PointStatus.Known> known = new ArrayList<>();
         for (Sensor sensor : books.place().sensorsOf(point.id())) {
             if (limits.stream().anyMatch(limit -> limit.quantity() == sensor.quantity())) {
-                newest(books, sensor, point.maxGap(), now)
+                newest(books, sensor, Freshness.of(sensor.quantity(), point), now)
                         .ifPresent(reading -> known.add(new PointStatus.Known(sensor.quantity(), reading)));
             }
         }

@@ -40,7 +40,9 @@ final class WaterAssessor {
         List<MissingInput> missing = new ArrayList<>();
         for (Quantity quantity : AgeLimits.NEEDED) {
             Duration allowed = ageLimits.of(quantity);
-            Optional<Candidate> freshest = inputs.freshest(quantity, at);
+            Duration remembered = remembered(allowed);
+            Optional<Candidate> freshest = inputs.freshest(quantity, at)
+                    .filter(c -> Duration.between(c.reading().at(), at).compareTo(remembered) <= 0);
             if (freshest.isPresent()
                     && Duration.between(freshest.get().reading().at(), at).compareTo(allowed) <= 0) {
                 found.put(quantity, freshest.get());
@@ -54,6 +56,11 @@ final class WaterAssessor {
             return new WaterState(pointId, at, used, missing, null, List.of());
         }
         return compute(pointId, at, used, found);
+    }
+
+    /** How far back a state looks: twice the allowed age, so that it can say how old a value it did not use was. */
+    static Duration remembered(Duration allowedAge) {
+        return allowedAge.multipliedBy(2);
     }
 
     private static InputUsed inputUsed(Quantity quantity, Candidate candidate) {

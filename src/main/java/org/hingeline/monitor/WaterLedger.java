@@ -3,10 +3,15 @@ package org.hingeline.monitor;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
+import java.util.EnumMap;
 import java.util.List;
+import java.util.Map;
 import java.util.NavigableSet;
 import java.util.TreeSet;
+import java.util.stream.Collectors;
 import org.hingeline.hatchery.Sensor;
+import org.hingeline.measure.Quantity;
+import org.hingeline.monitor.ReadingBook.StoredReading;
 
 /**
  * Keeps the water states of a point in step with its readings: computes the states at the times of new readings, and
@@ -29,25 +34,70 @@ final class WaterLedger {
     /**
      * To be called after the readings are stored, in the same transaction.
      *
-     * @param times when a quantity that enters the state was newly read; not empty
-     * @return the states at these times, oldest first
+     * @param sensors of the point
+     * @param fresh readings of these sensors just stored, of any quantity
+     * @return the states at the times of fresh readings that enter a state, and those after them that had to be computed
+     *     again, the newest state of the point among them if it had; oldest first
      */
-    List<WaterState> assess(Books books, long pointId, List<Sensor> sensors, NavigableSet<Instant> times) {
-        List<Instant> standing = books.water().timesFrom(pointId, times.first(), ON_THE_SPOT + 1);
-        NavigableSet<Instant> all = new TreeSet<>(times);
-        Instant reach = times.last().plus(ageLimits.longestOfAll());
-        int again = Math.min(standing.size(), ON_THE_SPOT);
-        for (Instant at : standing.subList(0, again)) {
-            if (!at.isAfter(reach)) {
-                all.add(at);
+    List<WaterState> assess(Books books, long pointId, List<Sensor> sensors, List<StoredReading> fresh) {
+        List<Sensor> entering = sensors.stream()
+                .filter(sensor -> AgeLimits.NEEDED.contains(sensor.quantity()))
+                .toList();
+        Map<Long, Quantity> quantities = entering.stream().collect(Collectors.toMap(Sensor::id, Sensor::quantity));
+        NavigableSet<Instant> times = new TreeSet<>();
+        Map<Quantity, Instant> latest = new EnumMap<>(Quantity.class);
+        for (StoredReading reading : fresh) {
+            Quantity quantity = quantities.get(reading.sensorId());
+            if (quantity != null) {
+                times.add(reading.at());
+                if (reading.flag().usable()) {
+                    latest.merge(quantity, reading.at(), (a, b) -> a.isAfter(b) ? a : b);
+                }
             }
         }
-        if (standing.size() > ON_THE_SPOT && standing.get(again).isBefore(reach)) {
-            books.water().addSpan(pointId, standing.get(again - 1), reach);
+        if (times.isEmpty()) {
+            return List.of();
         }
-        List<WaterState> states = compute(books, pointId, sensors, all);
+        List<Instant> standing = books.water().timesFrom(pointId, times.first(), ON_THE_SPOT + 1);
+        NavigableSet<Instant> all = new TreeSet<>(times);
+        if (!times.containsAll(standing)) {
+            Instant reach = reach(books, entering, latest, times.first());
+            standing.stream()
+                    .limit(ON_THE_SPOT)
+                    .filter(at -> !at.isAfter(reach))
+                    .forEach(all::add);
+            if (standing.size() > ON_THE_SPOT && !standing.get(ON_THE_SPOT).isAfter(reach)) {
+                books.water().addSpan(pointId, standing.get(ON_THE_SPOT - 1), reach);
+                // the newest state speaks for the present: it does not wait
+                books.water()
+                        .newest(pointId)
+                        .map(WaterState::at)
+                        .filter(at -> !at.isAfter(reach))
+                        .ifPresent(all::add);
+            }
+        }
+        List<WaterState> states = compute(books, pointId, entering, all);
         books.water().save(states);
-        return states.stream().filter(state -> times.contains(state.at())).toList();
+        return states;
+    }
+
+    /**
+     * Up to when states can differ because of fresh readings: until each quantity is read again, or its last fresh value
+     * is too old even to be named as missing.
+     */
+    private Instant reach(Books books, List<Sensor> entering, Map<Quantity, Instant> latest, Instant none) {
+        Instant reach = none;
+        for (Map.Entry<Quantity, Instant> entry : latest.entrySet()) {
+            Instant last = entry.getValue();
+            Instant end = last.plus(WaterAssessor.remembered(ageLimits.of(entry.getKey())));
+            for (Sensor sensor : entering) {
+                if (sensor.quantity() == entry.getKey()) {
+                    end = books.readings().firstAfter(sensor.id(), last, end).orElse(end);
+                }
+            }
+            reach = end.isAfter(reach) ? end : reach;
+        }
+        return reach;
     }
 
     /**
@@ -78,24 +128,28 @@ final class WaterLedger {
     }
 
     private List<WaterState> compute(Books books, long pointId, List<Sensor> sensors, NavigableSet<Instant> times) {
+        List<WaterState> states = new ArrayList<>(times.size());
+        for (NavigableSet<Instant> spell : Spells.of(times)) {
+            PointInputs inputs = inputs(books, sensors, spell.first(), spell.last());
+            for (Instant at : spell) {
+                states.add(assessor.assess(pointId, at, inputs));
+            }
+        }
+        return states;
+    }
+
+    private PointInputs inputs(Books books, List<Sensor> sensors, Instant first, Instant last) {
         PointInputs inputs = new PointInputs();
         for (Sensor sensor : sensors) {
             if (!AgeLimits.NEEDED.contains(sensor.quantity())) {
                 continue;
             }
-            // twice the allowed age, so that a state can say how old a value it did not use was
-            Duration back = ageLimits.of(sensor.quantity()).multipliedBy(2);
+            Duration back = WaterAssessor.remembered(ageLimits.of(sensor.quantity()));
             books.readings()
-                    .newestBefore(sensor.id(), times.first().minus(back), times.first())
+                    .newestBefore(sensor.id(), first.minus(back), first)
                     .ifPresent(reading -> inputs.add(sensor, reading));
-            books.readings()
-                    .between(sensor.id(), times.first(), times.last())
-                    .forEach(reading -> inputs.add(sensor, reading));
+            books.readings().between(sensor.id(), first, last).forEach(reading -> inputs.add(sensor, reading));
         }
-        List<WaterState> states = new ArrayList<>(times.size());
-        for (Instant at : times) {
-            states.add(assessor.assess(pointId, at, inputs));
-        }
-        return states;
+        return inputs;
     }
 }

@@ -63,9 +63,11 @@ final class AlertTables implements AlertBook {
                         UPDATE limit_rule
                         SET quantity = :quantity, side = :side, threshold = :threshold, deadband = :deadband,
                             on_delay_s = :onDelayS, off_delay_s = :offDelayS, priority = :priority, action = :action,
+                            created_at = CASE WHEN retired_at IS NULL AND quantity = :quantity
+                                              THEN created_at ELSE CAST(:now AS TIMESTAMP WITH TIME ZONE) END,
                             retired_at = NULL
                         WHERE point_id = :point AND name = :name
-                        """).execute();
+                        """).bind("now", now).execute();
         if (updated == 0) {
             long id = Sql.insertedId(bound(limit, """
                             INSERT INTO limit_rule

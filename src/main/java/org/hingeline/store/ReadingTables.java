@@ -43,6 +43,20 @@ final class ReadingTables implements ReadingBook {
     }
 
     @Override
+    public Optional<Instant> firstAfter(long sensorId, Instant after, Instant to) {
+        return handle.createQuery("""
+                        SELECT at FROM reading
+                        WHERE sensor_id = :sensor AND at > :after AND at <= :to AND flag NOT IN (4, 9)
+                        ORDER BY at LIMIT 1
+                        """)
+                .bind("sensor", sensorId)
+                .bind("after", after)
+                .bind("to", to)
+                .map((row, context) -> Sql.instant(row, "at"))
+                .findOne();
+    }
+
+    @Override
     public Optional<Instant> newestAt(long pointId) {
         return handle
                 .createQuery("""

@@ -11,6 +11,7 @@ import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Site;
 import org.hingeline.monitor.AlertBook.Alert;
 import org.hingeline.monitor.AlertDesk;
+import org.hingeline.monitor.MessageDesk;
 import org.hingeline.monitor.OutboxBook.Message;
 import org.hingeline.monitor.StatusBoard;
 import org.hingeline.web.view.AlertsView;
@@ -79,7 +80,7 @@ final class AlertPages {
         return new Told(
                 message.recipientName(),
                 MessagePages.channel(message),
-                message.subject(),
+                MessageDesk.news(message),
                 MessagePages.state(message).words() + MessagePages.detail(message, now, zone));
     }
 
@@ -97,6 +98,7 @@ final class AlertPages {
                                 : "Somebody was faster, or the alert is over already.",
                         null)
                 .leave(ctx);
-        ctx.redirect(pages.link(ctx, Forms.text(ctx, "next").equals("/alerts") ? "/alerts" : "/"));
+        String next = SignInPages.next(Forms.text(ctx, "next"));
+        ctx.redirect(pages.link(ctx, next.contains("?") ? "/" : next));
     }
 }

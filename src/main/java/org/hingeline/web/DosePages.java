@@ -13,6 +13,7 @@ import org.hingeline.alert.Limit;
 import org.hingeline.dosing.Amount;
 import org.hingeline.dosing.DosePlan;
 import org.hingeline.dosing.DoseStep;
+import org.hingeline.dosing.Remedy;
 import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.DoseDesk;
 import org.hingeline.monitor.DoseWish;
@@ -166,7 +167,7 @@ final class DosePages {
                 plan.remedies().stream().map(remedy -> remedy.detail()).toList(),
                 plan.cautions().stream().map(caution -> caution.detail()).toList(),
                 plan.reasons().stream()
-                        .map(reason -> new DoseView.Reason(reason.detail(), reason.lift()))
+                        .map(reason -> new DoseView.Reason(why(reason.detail()), reason.lift()))
                         .toList());
     }
 
@@ -179,12 +180,21 @@ final class DosePages {
             case PLAN ->
                 mass == null || after == null
                         ? ""
-                        : grams(mass.value()) + " of " + hydration + " sodium carbonate in "
+                        : (plan.remedies().stream().anyMatch(Remedy::reachesTarget)
+                                        ? "Air first. If that cannot be: "
+                                        : "")
+                                + grams(mass.value()) + " of " + hydration + " sodium carbonate in "
                                 + (plan.steps().size() == 1
                                         ? "one step"
                                         : plan.steps().size() + " steps")
                                 + " would bring \u03a9 to " + Words.number(after.omegaAragonite(), 2) + ".";
         };
+    }
+
+    /** Without the name a program knows it by, as a sentence with its full stop. */
+    private static String why(String detail) {
+        String words = Words.sentence(detail.replaceFirst("^[a-zA-Z0-9]+ is missing: ", ""));
+        return words.endsWith(".") ? words : words + ".";
     }
 
     private static Step step(DoseStep step) {

@@ -1,17 +1,16 @@
 package org.hingeline.web;
 
 import io.javalin.http.Context;
-import java.util.List;
-import java.util.stream.Collectors;
-import org.hingeline.web.Problem.FieldError;
+import java.util.regex.Pattern;
 import tools.jackson.core.JacksonException;
 import tools.jackson.core.StreamReadFeature;
 import tools.jackson.core.json.JsonFactory;
-import tools.jackson.databind.DatabindException;
 import tools.jackson.databind.DeserializationFeature;
 import tools.jackson.databind.MapperFeature;
-import tools.jackson.databind.exc.UnrecognizedPropertyException;
+import tools.jackson.databind.cfg.CoercionAction;
+import tools.jackson.databind.cfg.CoercionInputShape;
 import tools.jackson.databind.json.JsonMapper;
+import tools.jackson.databind.type.LogicalType;
 
 /** JSON in and out: strict in what it takes, and every refusal names the field. */
 final class Json {
@@ -24,16 +23,25 @@ final class Json {
             .enable(DeserializationFeature.FAIL_ON_TRAILING_TOKENS)
             .disable(DeserializationFeature.ACCEPT_FLOAT_AS_INT)
             .disable(MapperFeature.ALLOW_COERCION_OF_SCALARS)
+            .withCoercionConfig(
+                    LogicalType.Textual,
+                    config -> config.setCoercion(CoercionInputShape.Integer, CoercionAction.Fail)
+                            .setCoercion(CoercionInputShape.Float, CoercionAction.Fail)
+                            .setCoercion(CoercionInputShape.Boolean, CoercionAction.Fail))
             .build();
+
+    private static final Pattern TYPE = Pattern.compile("application/json\\s*(;.*)?", Pattern.CASE_INSENSITIVE);
 
     private Json() {}
 
     /** The request's body as a record; a bad one ends the request with 400 and names the field. */
     static <T> T body(Context ctx, Class<T> type) {
         byte[] bytes = ctx.bodyAsBytes();
+        requireType(ctx);
         if (bytes.length == 0) {
             throw new ProblemException(400, "No body", "the request has no body; a JSON object is needed");
         }
+        requireUtf8(bytes);
         try {
             T value = MAPPER.readValue(bytes, type);
             if (value == null) {
@@ -41,7 +49,7 @@ final class Json {
             }
             return value;
         } catch (JacksonException e) {
-            throw new ProblemException(problem(e));
+            throw new ProblemException(JsonFaults.problem(e));
         }
     }
 
@@ -53,46 +61,24 @@ final class Json {
         ctx.status(problem.status()).contentType("application/problem+json").result(MAPPER.writeValueAsBytes(problem));
     }
 
-    /** What is wrong with a body, without words of the program's inside. */
-    static Problem problem(JacksonException e) {
-        String where = e.getLocation() == null
-                ? ""
-                : " (line " + e.getLocation().getLineNr() + ", column "
-                        + e.getLocation().getColumnNr() + ")";
-        if (e instanceof UnrecognizedPropertyException unknown) {
-            String known = unknown.getKnownPropertyIds() == null
-                    ? ""
-                    : "; accepted: "
-                            + unknown.getKnownPropertyIds().stream()
-                                    .map(String::valueOf)
-                                    .sorted()
-                                    .collect(Collectors.joining(", "));
-            String detail = "field \"" + unknown.getPropertyName() + "\" is not known here" + known;
-            return Problem.ofFields(
-                    400, "Unknown field", detail + where, List.of(new FieldError(pointer(unknown), detail)));
+    /** JSON is UTF-8 (RFC 8259, 8.1); the parser would also read UTF-16 and UTF-32, and then lose count of the bytes. */
+    static void requireUtf8(byte[] body) {
+        for (int i = 0; i < Math.min(4, body.length); i++) {
+            int b = body[i] & 0xff;
+            if (b == 0 || b == 0xfe || b == 0xff) {
+                throw new ProblemException(400, "Broken JSON", "the body is not UTF-8");
+            }
         }
-        if (e instanceof DatabindException wrong && !wrong.getPath().isEmpty()) {
-            String detail = firstLine(e.getOriginalMessage());
-            return Problem.ofFields(
-                    400, "Wrong field", detail + where, List.of(new FieldError(pointer(wrong), detail)));
-        }
-        return Problem.of(400, "Broken JSON", firstLine(e.getOriginalMessage()) + where);
     }
 
-    private static String pointer(DatabindException e) {
-        return e.getPath().stream()
-                .map(step -> step.getPropertyName() != null
-                        ? step.getPropertyName().replace("~", "~0").replace("/", "~1")
-                        : String.valueOf(step.getIndex()))
-                .collect(Collectors.joining("/", "/", ""));
-    }
-
-    /** The library's words without class names and source snippets. */
-    private static String firstLine(String message) {
-        String line = message.lines().findFirst().orElse("the JSON cannot be read");
-        return line.replaceAll("`?(?:java|org\\.hingeline|tools)\\.[\\w.$`\\[\\]]+", "value")
-                .replaceAll("\\(for value[^)]*\\)", "")
-                .replaceAll(": enable `[^`]*` to allow", " is not JSON")
-                .strip();
+    /** Ends the request with 415 when its body says that it is something else. */
+    static void requireType(Context ctx) {
+        String type = ctx.contentType();
+        if (type != null && !TYPE.matcher(type).matches()) {
+            throw new ProblemException(
+                    415,
+                    "Unknown format",
+                    "content type " + JsonFaults.quoted(type) + " is not taken here; accepted: application/json");
+        }
     }
 }

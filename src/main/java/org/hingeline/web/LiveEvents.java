@@ -18,6 +18,9 @@ public final class LiveEvents implements AutoCloseable {
     private static final Duration GATHER = Duration.ofMillis(500);
     private static final Duration ALIVE = Duration.ofSeconds(15);
 
+    /** A browser throws an event without data away. */
+    private static final String DATA = "yes";
+
     private final Map<Long, Set<SseClient>> clients = new ConcurrentHashMap<>();
     private final Set<Long> changed = ConcurrentHashMap.newKeySet();
     private final ScheduledExecutorService timer = Executors.newSingleThreadScheduledExecutor(work -> {
@@ -53,18 +56,18 @@ public final class LiveEvents implements AutoCloseable {
         Set<SseClient> ofSite = clients.computeIfAbsent(siteId, id -> ConcurrentHashMap.newKeySet());
         client.onClose(() -> ofSite.remove(client));
         ofSite.add(client);
-        client.sendEvent("alive", "");
+        client.sendEvent("alive", DATA);
     }
 
     private void tellChanged() {
         for (Long siteId : changed) {
             changed.remove(siteId);
-            clients.getOrDefault(siteId, Set.of()).forEach(client -> client.sendEvent("changed", ""));
+            clients.getOrDefault(siteId, Set.of()).forEach(client -> client.sendEvent("changed", DATA));
         }
     }
 
     private void tellAll(String event) {
-        clients.values().forEach(ofSite -> ofSite.forEach(client -> client.sendEvent(event, "")));
+        clients.values().forEach(ofSite -> ofSite.forEach(client -> client.sendEvent(event, DATA)));
     }
 
     /** Lets every page go; to be called before the server stops, which would wait for them. */

@@ -44,7 +44,9 @@ final class PathPoints {
                 status.openAlerts().stream()
                         .map(alert -> openAlert(alert, status.now(), zone))
                         .toList(),
-                status.point().volumeL() != null);
+                status.point().volumeL() != null,
+                !status.watching().isEmpty(),
+                urgency(status));
     }
 
     private static Place place(PointKind kind) {
@@ -69,7 +71,7 @@ final class PathPoints {
         return switch (status.verdict()) {
             case FIT -> "fit";
             case UNKNOWN -> "not known";
-            case NO_LIMIT -> "without a limit to judge it by";
+            case NO_LIMIT -> "not judged: no limit is set";
             case OUT -> passed(gravest(status.passed()));
         };
     }
@@ -119,7 +121,6 @@ final class PathPoints {
         List<String> notes = new ArrayList<>();
         WaterState state = status.newest();
         if (state == null) {
-            notes.add("Nothing has been read here yet.");
             return notes;
         }
         state.missing().forEach(missing -> notes.add(Words.missing(missing, status.now())));
@@ -132,11 +133,25 @@ final class PathPoints {
         return notes;
     }
 
+    private static Optional<Alert> standing(List<Alert> open) {
+        return open.stream().filter(alert -> alert.returnedAt() == null).max(Comparator.comparing(Alert::priority));
+    }
+
+    /** 0 when there is nothing to do, else 1 for low priority to 3 for high. */
+    private static int urgency(PointStatus status) {
+        if (action(status).isEmpty()) {
+            return 0;
+        }
+        return 1
+                + standing(status.openAlerts())
+                        .map(Alert::priority)
+                        .orElseGet(() -> gravest(status.passed()).priority())
+                        .ordinal();
+    }
+
     /** What to do: the action of the gravest limit past which an alert stands, else of the gravest limit passed. */
     private static String action(PointStatus status) {
-        Optional<Alert> standing = status.openAlerts().stream()
-                .filter(alert -> alert.returnedAt() == null)
-                .findFirst();
+        Optional<Alert> standing = standing(status.openAlerts());
         if (standing.isPresent()) {
             return standing.get().action();
         }
@@ -151,13 +166,14 @@ final class PathPoints {
                 acknowledged(alert, now, zone));
     }
 
+    /** Who has taken an alert on, when, and their note; empty while nobody has. */
     static String acknowledged(Alert alert, Instant now, ZoneId zone) {
         Instant at = alert.acknowledgedAt();
         if (at == null) {
             return "";
         }
         String note = alert.acknowledgementNote();
-        return "Taken on by " + alert.acknowledgedBy() + " at "
-                + Moment.of(at, now, zone).clock() + (note == null ? "" : ": " + note);
+        return alert.acknowledgedBy() + " at " + Moment.of(at, now, zone).clock()
+                + (note == null || note.isBlank() ? "" : ": " + note);
     }
 }

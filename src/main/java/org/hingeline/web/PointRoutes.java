@@ -48,7 +48,7 @@ final class PointRoutes {
 
     private void water(Context ctx) {
         PointStatus status = found(board, ctx);
-        if (ctx.queryParam("from") == null && ctx.queryParam("to") == null) {
+        if (ctx.queryParam("from") == null && ctx.queryParam("to") == null && ctx.queryParam("step") == null) {
             Json.answer(ctx, 200, PointJson.water(status));
             return;
         }
@@ -73,7 +73,8 @@ final class PointRoutes {
                 .orElseThrow(() -> new ProblemException(
                         400,
                         "Wrong query",
-                        "quantity \"" + code + "\" is not measured; ask with ?quantity= and one of "
+                        (code == null ? "quantity is missing" : "quantity \"" + code + "\" is not measured")
+                                + "; ask with ?quantity= and one of "
                                 + Quantity.measuredCodes()));
         Instant to = Times.query(ctx, "to", clock.instant());
         Instant from = Times.query(ctx, "from", to.minus(HISTORY));

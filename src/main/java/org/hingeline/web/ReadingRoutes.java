@@ -24,13 +24,7 @@ final class ReadingRoutes {
     }
 
     private void post(Context ctx) {
-        String type = ctx.contentType();
-        if (type != null && !type.startsWith("application/json")) {
-            throw new ProblemException(
-                    415,
-                    "Unknown format",
-                    "content type \"" + type + "\" is not taken here; accepted: application/json");
-        }
+        Json.requireType(ctx);
         List<IncomingReading> rows = ReadingsJson.parse(ctx.bodyAsBytes(), mostRows);
         if (rows.isEmpty()) {
             throw new ProblemException(422, "No readings", "readings is empty; at least one is needed");

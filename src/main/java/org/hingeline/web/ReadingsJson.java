@@ -27,10 +27,14 @@ final class ReadingsJson {
 
     /** @throws ProblemException when the body as a whole cannot be taken */
     static List<IncomingReading> parse(byte[] body, int mostRows) {
+        if (body.length == 0) {
+            throw new ProblemException(400, "No body", "the request has no body; a JSON object is needed");
+        }
+        Json.requireUtf8(body);
         try (JsonParser parser = Json.MAPPER.createParser(body)) {
             return new ReadingsJson(body, mostRows).whole(parser);
         } catch (JacksonException e) {
-            throw new ProblemException(Json.problem(e));
+            throw new ProblemException(JsonFaults.problem(e));
         }
     }
 
@@ -41,7 +45,8 @@ final class ReadingsJson {
         boolean seen = false;
         while (parser.nextToken() == JsonToken.PROPERTY_NAME) {
             if (!parser.currentName().equals("readings")) {
-                throw shape("field \"" + parser.currentName() + "\" is not known here; accepted: readings");
+                throw shape(
+                        "field " + JsonFaults.quoted(parser.currentName()) + " is not known here; accepted: readings");
             }
             seen = true;
             if (parser.nextToken() != JsonToken.START_ARRAY) {
@@ -71,6 +76,7 @@ final class ReadingsJson {
         long from = parser.currentTokenLocation().getByteOffset();
         if (parser.currentToken() != JsonToken.START_OBJECT) {
             parser.skipChildren();
+            parser.finishToken();
             rows.add(faulty(index, "a reading must be an object with the fields " + FIELDS, text(parser, from)));
             return;
         }
@@ -92,12 +98,13 @@ final class ReadingsJson {
                 case "unit" -> unit = string(parser, token);
                 case "sensor" -> sensor = string(parser, token);
                 case "value" -> {
-                    value = token.isNumeric() ? (Double) parser.getDoubleValue() : null;
+                    double number = token.isNumeric() ? parser.getDoubleValue() : Double.NaN;
+                    value = Double.isFinite(number) ? (Double) number : null;
                     wrong = value != null || token == JsonToken.VALUE_NULL
                             ? null
                             : "value " + shown(parser, token) + " is not a finite number";
                 }
-                default -> wrong = "field \"" + name + "\" is not known; accepted: " + FIELDS;
+                default -> wrong = "field " + JsonFaults.quoted(name) + " is not known; accepted: " + FIELDS;
             }
             if (wrong == null
                     && !name.equals("value")
@@ -110,8 +117,7 @@ final class ReadingsJson {
             }
             fault = fault == null ? wrong : fault;
         }
-        rows.add(new IncomingReading(
-                index, point, quantity, value, at, unit, sensor, fault, fault == null ? "" : text(parser, from)));
+        rows.add(new IncomingReading(index, point, quantity, value, at, unit, sensor, fault, text(parser, from)));
     }
 
     private static @Nullable String string(JsonParser parser, JsonToken token) {
@@ -123,8 +129,7 @@ final class ReadingsJson {
             return token == JsonToken.START_ARRAY ? "[…]" : "{…}";
         }
         String text = String.valueOf(parser.getString());
-        String cut = text.length() > 60 ? text.substring(0, 60) + "…" : text;
-        return token == JsonToken.VALUE_STRING ? "\"" + cut + "\"" : cut;
+        return token == JsonToken.VALUE_STRING ? JsonFaults.quoted(text) : JsonFaults.cut(text);
     }
 
     /** The row as it was sent. */

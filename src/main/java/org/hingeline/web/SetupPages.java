@@ -89,13 +89,7 @@ final class SetupPages {
         } catch (FieldFaultsException e) {
             page(ctx, 422, section, Forms.refused(ctx, e), null, "");
         } catch (IllegalArgumentException e) {
-            page(
-                    ctx,
-                    422,
-                    section,
-                    Forms.refused(ctx, new FieldFaultsException("", String.valueOf(e.getMessage()))),
-                    null,
-                    "");
+            page(ctx, 422, section, Forms.refused(ctx, Forms.ofField(ctx, e)), null, "");
         }
     }
 
@@ -116,13 +110,17 @@ final class SetupPages {
                 String gateway = Forms.text(ctx, "name");
                 requireNamed(gateway);
                 return new ShownOnce(
-                        "Gateway key \u201c" + gateway + "\u201d", accounts.makeGatewayKey(site, gateway, who));
+                        section,
+                        "Gateway key \u201c" + gateway + "\u201d",
+                        accounts.makeGatewayKey(site, gateway, who));
             }
             case "access-tokens" -> {
                 String name = Forms.text(ctx, "name");
                 requireNamed(name);
                 return new ShownOnce(
-                        "Access token \u201c" + name + "\u201d", accounts.makeAccessToken(site, name, role(ctx), who));
+                        section,
+                        "Access token \u201c" + name + "\u201d",
+                        accounts.makeAccessToken(site, name, role(ctx), who));
             }
             default -> throw noSuchSection(section);
         }
@@ -180,11 +178,10 @@ final class SetupPages {
         Double volumeL = Forms.number(ctx, "volumeL", faults);
         Double maxGapMin = Forms.number(ctx, "maxGapMin", faults);
         faults.throwIfAny();
-        // a new point comes after the last of its kind, a known one stays where it is
-        int position = known.stream()
-                .filter(p -> p.code().equals(code))
-                .findFirst()
-                .map(Point::position)
+        // a new point comes after the last of its kind, a known one stays where it is and fed as it was
+        Optional<Point> before =
+                known.stream().filter(p -> p.code().equals(code)).findFirst();
+        int position = before.map(Point::position)
                 .orElseGet(() -> known.stream()
                                 .filter(p -> p.kind().compareTo(kind.orElseThrow()) <= 0)
                                 .mapToInt(Point::position)
@@ -196,7 +193,7 @@ final class SetupPages {
                 Forms.text(ctx, "name"),
                 kind.orElseThrow(),
                 position,
-                null,
+                before.map(Point::feedsFrom).orElse(null),
                 volumeL,
                 Duration.ofSeconds(Math.round((maxGapMin == null ? 15 : maxGapMin) * 60)));
     }
@@ -260,7 +257,7 @@ final class SetupPages {
                     Double volumeL = p.volumeL();
                     return new Row(
                             p.name(),
-                            p.code() + ", " + p.kind().words().toLowerCase(Locale.ROOT)
+                            "code " + p.code() + ", " + p.kind().words().toLowerCase(Locale.ROOT)
                                     + (volumeL == null ? "" : ", " + Words.number(volumeL, 0) + "\u00a0L")
                                     + ", silent after " + Moment.span(p.maxGap()),
                             "",
@@ -280,13 +277,18 @@ final class SetupPages {
                             .orElse("");
                     return new Row(
                             s.code(),
-                            s.quantity().words() + " at " + point + ", in " + s.unit()
+                            s.quantity().words() + " at " + point + unit(s.unit())
                                     + (scale == null ? "" : ", " + scale.wireName() + " scale") + ", \u00b1"
                                     + Words.plain(s.standardUncertainty()),
                             "",
                             "");
                 })
                 .toList();
+    }
+
+    /** Unless it is a bare number, as of pH and salinity. */
+    private static String unit(String unit) {
+        return unit.equals("1") || unit.equals("[pH]") ? "" : ", in " + unit;
     }
 
     private List<Row> keyRows(Site site) {
@@ -337,15 +339,20 @@ final class SetupPages {
                 .toList();
     }
 
+    private static String told(Priority least) {
+        return switch (least) {
+            case HIGH -> "high priority only";
+            case MEDIUM -> "high and medium priority";
+            case LOW -> "everything";
+        };
+    }
+
     private List<Row> subscriberRows(Site site) {
         List<Row> rows = new ArrayList<>();
         for (Subscriber s : place.subscribers(site)) {
             rows.add(new Row(
                     s.name(),
-                    s.email() + ", "
-                            + (s.active()
-                                    ? "told from priority " + s.minPriority().code() + " up"
-                                    : "not told any more"),
+                    s.email() + ", " + (s.active() ? "is told about " + told(s.minPriority()) : "not told any more"),
                     s.active() ? s.code() : "",
                     s.active() ? "Stop telling" : ""));
         }

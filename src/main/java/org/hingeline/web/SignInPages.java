@@ -73,7 +73,7 @@ final class SignInPages {
                             "Too many failed attempts. Try again in " + minutes + " min (" + until + " UTC).",
                             next));
         } else {
-            form(ctx, 401, new SignInView(name, "Name or password do not match.", "", next));
+            form(ctx, 401, new SignInView(name, "Name and password do not match.", "", next));
         }
     }
 

@@ -12,6 +12,8 @@ import io.micrometer.prometheusmetrics.PrometheusMeterRegistry;
 import java.util.List;
 import java.util.Locale;
 import java.util.Set;
+import java.util.TreeSet;
+import java.util.stream.Collectors;
 import org.eclipse.jetty.util.thread.QueuedThreadPool;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.Secrets;
@@ -81,6 +83,7 @@ public final class WebServer implements AutoCloseable {
             TimedHandler timed = new TimedHandler(registry, Tags.empty());
             timed.setHandler(server.getHandler());
             server.setHandler(timed);
+            server.setErrorHandler(new EarlyRefusals());
         });
         config.http.maxRequestSize = rules.maxBodyBytes();
         config.http.prefer405over404 = true;
@@ -117,7 +120,7 @@ public final class WebServer implements AutoCloseable {
             LOG.warn("{} {} was refused", ctx.method(), ctx.path(), e);
             tell(ctx, Problem.of(422, "Cannot be taken", String.valueOf(e.getMessage())), pages);
         });
-        routes.exception(JacksonException.class, (e, ctx) -> tell(ctx, Json.problem(e), pages));
+        routes.exception(JacksonException.class, (e, ctx) -> tell(ctx, JsonFaults.problem(e), pages));
         routes.exception(
                 HttpResponseException.class,
                 (e, ctx) -> tell(ctx, Problem.of(e.getStatus(), title(e.getStatus()), detail(e, ctx)), pages));
@@ -177,6 +180,15 @@ public final class WebServer implements AutoCloseable {
     /** The port it is served on. */
     public int port() {
         return javalin.port();
+    }
+
+    /** Every route that is served, as {@code GET /api/v1/points}; what the description of the API is held against. */
+    public Set<String> routes() {
+        return javalin.unsafe.internalRouter.allHttpHandlers().stream()
+                .map(parsed -> parsed.endpoint)
+                .filter(endpoint -> endpoint.method.isHttpMethod())
+                .map(endpoint -> endpoint.method.name() + " " + endpoint.path)
+                .collect(Collectors.toCollection(TreeSet::new));
     }
 
     @Override

@@ -52,15 +52,22 @@ final class Words {
     /** "Ω below 1.80 for 10 min; ends at 1.85 or above for 10 min". */
     static String rule(Limit limit) {
         if (limit.onSilence()) {
-            return "nothing usable heard for " + Moment.span(Duration.ofMinutes(Math.round(limit.threshold())));
+            return "Nothing usable heard for " + Moment.span(Duration.ofMinutes(Math.round(limit.threshold())));
         }
         double back = limit.side() == Side.BELOW
                 ? limit.threshold() + limit.deadband()
                 : limit.threshold() - limit.deadband();
-        return limit.quantity().words() + " " + limit.side().code() + " "
+        return sentence(limit.quantity().words()) + " " + limit.side().code() + " "
                 + withUnit(limit.quantity(), limit.threshold()) + delay(limit.onDelay()) + "; ends at "
                 + number(limit.quantity(), back) + " or " + (limit.side() == Side.BELOW ? "above" : "below")
                 + delay(limit.offDelay());
+    }
+
+    /** With a capital first letter, except where that would change what it says: pH, pCO2. */
+    static String sentence(String words) {
+        return words.length() > 1 && Character.isUpperCase(words.charAt(1))
+                ? words
+                : words.substring(0, 1).toUpperCase(Locale.ROOT) + words.substring(1);
     }
 
     private static String delay(Duration delay) {
@@ -70,15 +77,19 @@ final class Words {
         return " for " + (delay.toSeconds() % 60 == 0 ? Moment.span(delay) : delay.toSeconds() + " s");
     }
 
-    /** "Ω 1.62 ±0.11, under your 1.80 since 03:00"; "no usable value since 01:10". */
+    /** "Ω 1.62 ±0.11, under your 1.80 since 03:00"; "no usable value from 01:10 to 01:40". */
     static String alert(Alert alert, Instant now, ZoneId zone) {
-        String since = Moment.of(alert.since(), now, zone).clock();
+        Instant until = alert.returnedAt() != null ? alert.returnedAt() : alert.closedAt();
+        String from = Moment.of(alert.since(), now, zone).clock();
+        String when = until == null
+                ? "since " + from
+                : "from " + from + " to " + Moment.of(until, now, zone).clock();
         if (alert.quantity() == Quantity.SILENCE) {
-            return "no usable value since " + since;
+            return "no usable value " + when;
         }
         String uncertainty = alert.uncertainty() > 0 ? " \u00b1" + number(alert.quantity(), alert.uncertainty()) : "";
         return alert.quantity().words() + " " + number(alert.quantity(), alert.value()) + uncertainty + ", "
-                + alert.side().word() + " your " + withUnit(alert.quantity(), alert.threshold()) + " since " + since;
+                + alert.side().word() + " your " + withUnit(alert.quantity(), alert.threshold()) + " " + when;
     }
 
     /** "alkalinity 80 h old, older than the 72 h allowed"; "pH not read in the last 30 min". */
@@ -86,9 +97,9 @@ final class Words {
         Instant newest = missing.newestAt();
         String allowed = Moment.span(missing.allowedAge());
         return newest == null
-                ? missing.quantity().words() + ": none read lately; " + allowed + " old is allowed"
-                : missing.quantity().words() + " is " + Moment.span(Duration.between(newest, now)) + " old; at most "
-                        + allowed + " is allowed";
+                ? sentence(missing.quantity().words()) + " was not read in the last " + allowed
+                : sentence(missing.quantity().words()) + " is " + Moment.span(Duration.between(newest, now))
+                        + " old; at most " + allowed + " is allowed";
     }
 
     /** "Crassostrea gigas, 31 h after spawn: building the first shell". */

@@ -58,6 +58,7 @@ public final class Browser implements AutoCloseable {
                 "--disable-component-update",
                 "--disable-sync",
                 "--hide-scrollbars",
+                "--force-prefers-reduced-motion", // a page that still scrolls is clicked beside the mark
                 "--user-data-dir=" + profile);
         var service = new ChromeDriverService.Builder()
                 .usingDriverExecutable(chromedriver.toFile())

@@ -46,7 +46,7 @@ interface LimitContract extends StoreUnderTest {
     }
 
     @Test
-    default void a_limit_changed_keeps_its_id_and_its_memory() {
+    default void a_limit_changed_keeps_its_id_and_its_memory_and_is_watched_anew_on_another_quantity() {
         Point tank = Samples.place(store(), "north").tank();
         Limit first = save(limit(tank, "omega", 1.8), T0);
         AlertState state = new AlertState(Phase.NORMAL, T0, null, new Observation(T0, 1.7, 0.1));
@@ -79,7 +79,19 @@ interface LimitContract extends StoreUnderTest {
                         Duration.ofHours(24),
                         Priority.LOW,
                         "Cool."));
-        assertThat(watched(tank)).containsExactly(new Watched(saved, state, null, T0));
+        assertThat(watched(tank)).containsExactly(new Watched(saved, state, null, T0.plusSeconds(60)));
+    }
+
+    @Test
+    default void a_limit_with_another_threshold_is_watched_since_its_making_and_one_put_back_since_then() {
+        Point tank = Samples.place(store(), "north").tank();
+        save(limit(tank, "omega", 1.8), T0);
+        Limit changed = save(limit(tank, "omega", 1.9), T0.plusSeconds(60));
+        assertThat(watched(tank)).extracting(Watched::createdAt).containsExactly(T0);
+
+        done().alerts().retireLimit(changed.id(), T0.plusSeconds(120));
+        save(limit(tank, "omega", 1.9), T0.plusSeconds(180));
+        assertThat(watched(tank)).extracting(Watched::createdAt).containsExactly(T0.plusSeconds(180));
     }
 
     @Test

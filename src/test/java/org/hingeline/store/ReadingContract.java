@@ -74,6 +74,21 @@ interface ReadingContract extends StoreUnderTest {
     }
 
     @Test
+    default void first_after_leaves_the_start_out_takes_the_end_in_and_passes_over_failed_values() {
+        Sensor ph = Samples.place(store(), "north").ph();
+        insert(List.of(
+                reading(ph, T0, 7),
+                new StoredReading(ph.id(), T0.plusSeconds(1), 7, Flag.FAIL),
+                reading(ph, T0.plusSeconds(2), 7),
+                reading(ph, T0.plusSeconds(3), 7)));
+
+        assertThat(seen().readings().firstAfter(ph.id(), T0, T0.plusSeconds(2))).contains(T0.plusSeconds(2));
+        assertThat(seen().readings().firstAfter(ph.id(), T0.minusMillis(1), T0.plusSeconds(3)))
+                .contains(T0);
+        assertThat(seen().readings().firstAfter(ph.id(), T0, T0.plusSeconds(1))).isEmpty();
+    }
+
+    @Test
     default void newest_before_passes_over_failed_and_missing_values_only() {
         Sensor ph = Samples.place(store(), "north").ph();
         List<Flag> flags = List.of(Flag.NOT_EVALUATED, Flag.FAIL, Flag.SUSPECT, Flag.MISSING, Flag.PASS);

@@ -72,7 +72,9 @@ final class LookSamples {
                 "",
                 "",
                 List.of(),
-                place == Place.TANK);
+                place == Place.TANK,
+                true,
+                0);
     }
 
     PathPoint larval3() {
@@ -90,7 +92,9 @@ final class LookSamples {
                 CLOSE,
                 "C. gigas, 31 h after spawn: first shell",
                 List.of(new OpenAlert("41", "Ω below 1.80", ago(2), "")),
-                true);
+                true,
+                true,
+                3);
     }
 
     PathPoint dark(String code, String name, Place place) {
@@ -108,7 +112,9 @@ final class LookSamples {
                 "",
                 "",
                 List.of(),
-                place == Place.TANK);
+                place == Place.TANK,
+                true,
+                0);
     }
 
     TideStrip strip(boolean tide, Standing end) {
@@ -176,7 +182,9 @@ final class LookSamples {
                 List.of(
                         new OpenAlert("38", "Ω below 1.80", ago(160), "Ana Reis took it on at 01:05: valve closed"),
                         new OpenAlert("40", "temperature below 11 °C", ago(14), "")),
-                false));
+                false,
+                true,
+                2));
         path.add(dark("storage", "Storage", Place.STORAGE));
         path.add(fit("header", "Header", Place.HEADER, "1.84"));
         for (int tank = 1; tank <= 12; tank++) {
@@ -212,7 +220,9 @@ final class LookSamples {
                 "",
                 "",
                 List.of(),
-                false);
+                false,
+                true,
+                0);
     }
 
     PointView point(boolean refused) {
@@ -449,7 +459,8 @@ final class LookSamples {
                                 List.of(new SetupView.Row("Ana Reis", "manager", "1", "Remove")), Form.empty()),
                         SetupSections.subscribers(List.of(), Form.empty())),
                 shown
-                        ? new SetupView.ShownOnce("Gateway key “pump house”", "hgk_3q9vXK2bUZ7sR0yPmD5wTnA8eLcF1jHg")
+                        ? new SetupView.ShownOnce(
+                                "gateway-keys", "Gateway key “pump house”", "hgk_3q9vXK2bUZ7sR0yPmD5wTnA8eLcF1jHg")
                         : null);
     }
 }

@@ -149,7 +149,11 @@ class PagesTest {
         List<String> pages = List.of(
                 page("status", layout, new StatusView(null, List.of(point))),
                 page("point", layout, inner),
-                page("setup", layout, new SetupView(List.of(), new SetupView.ShownOnce(hostile, hostile))),
+                page(
+                        "setup",
+                        layout,
+                        new SetupView(
+                                SAMPLES.setup(true).sections(), new SetupView.ShownOnce("points", hostile, hostile))),
                 page("sign-in", LayoutView.signedOut("t"), new SignInView(hostile, hostile, "", hostile)),
                 page("error", layout, new ErrorView(404, hostile, hostile)));
         for (String html : pages) {

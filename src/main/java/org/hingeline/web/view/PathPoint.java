@@ -19,6 +19,8 @@ import java.util.List;
  * @param batch who lives there: "C. gigas, 31 h after spawn: first shell"; empty when nobody
  * @param alerts open alerts of this point, most urgent first
  * @param dosable whether a dose can be planned here
+ * @param judged whether any limit is set, so that somebody is told
+ * @param urgency of what is to be done: 0 for nothing, 1 for low priority to 3 for high
  */
 public record PathPoint(
         String code,
@@ -34,7 +36,9 @@ public record PathPoint(
         String action,
         String batch,
         List<OpenAlert> alerts,
-        boolean dosable) {
+        boolean dosable,
+        boolean judged,
+        int urgency) {
     public PathPoint {
         notes = List.copyOf(notes);
         alerts = List.copyOf(alerts);

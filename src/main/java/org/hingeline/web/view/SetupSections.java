@@ -14,7 +14,7 @@ public final class SetupSections {
         return new Section(
                 "points",
                 "Points",
-                "Where the water is watched, in the order it flows.",
+                "Where the water is watched, in the order it flows. Adding a code that is there already changes that point.",
                 rows,
                 List.of(
                         text("code", "Code", "lower case, as gateways send it: larval-3"),
@@ -35,7 +35,7 @@ public final class SetupSections {
         return new Section(
                 "sensors",
                 "Sensors",
-                "What measures one quantity at a point, in which unit and how surely.",
+                "What measures one quantity at a point, in which unit and how surely. A code that is there already is changed.",
                 rows,
                 List.of(
                         text("code", "Code", "as gateways send it: ph-3"),
@@ -81,10 +81,11 @@ public final class SetupSections {
         return new Section(
                 "people",
                 "People",
-                "Who may sign in. Viewers look, operators acknowledge, dose and set limits, managers also set up.",
+                "Who may sign in. Viewers look, operators acknowledge, dose and set limits, managers also set up. A name that is "
+                        + "there already gets the new role and password.",
                 rows,
                 List.of(
-                        text("name", "Name to sign in with", ""),
+                        text("name", "Name to sign in with", "small letters, digits and hyphens: ana"),
                         select("role", "Role", ROLES),
                         new Field("password", "First password", "password", "at least 10 characters", true, List.of())),
                 "Add person",
@@ -96,7 +97,7 @@ public final class SetupSections {
         return new Section(
                 "subscribers",
                 "Subscribers",
-                "Who is told about alerts.",
+                "Who is told about alerts, by e-mail.",
                 rows,
                 List.of(
                         text("name", "Name", ""),

@@ -11,8 +11,8 @@ import org.jspecify.annotations.Nullable;
  */
 public record SetupView(List<Section> sections, @Nullable ShownOnce shownOnce) {
 
-    /** A secret shown once: what it is ("Gateway key “pump house”") and itself. */
-    public record ShownOnce(String what, String secret) {}
+    /** A secret shown once: the section it was made in, what it is ("Gateway key “pump house”") and itself. */
+    public record ShownOnce(String section, String what, String secret) {}
 
     /**
      * A list with a form to add to it.

@@ -41,6 +41,9 @@ public record TideStrip(
     public record Level(Instant at, double metres) {}
 
     private static final DateTimeFormatter CLOCK = DateTimeFormatter.ofPattern("HH:mm", Locale.ENGLISH);
+    /** What lasted shorter in all is too small to see in the drawing and not worth a word, unless it is how things stand now. */
+    private static final Duration WORTH_TELLING = Duration.ofMinutes(10);
+
     private static final int HIGH_WATER = 10;
     private static final int LOW_WATER = 62;
     private static final int NO_TIDE = 24;
@@ -116,11 +119,15 @@ public record TideStrip(
         for (Stretch s : whole) {
             sums.merge(s.standing(), Duration.between(s.from(), s.to()), Duration::plus);
         }
-        return title + ": "
-                + sums.entrySet().stream()
+        Standing now = whole.get(whole.size() - 1).standing();
+        boolean justNow = sums.getOrDefault(now, Duration.ZERO).compareTo(WORTH_TELLING) < 0;
+        sums.values().removeIf(length -> length.compareTo(WORTH_TELLING) < 0);
+        String told = sums.size() == 1
+                ? sums.keySet().iterator().next().word() + " throughout"
+                : sums.entrySet().stream()
                         .map(e -> e.getKey().word() + " " + Moment.span(e.getValue()))
-                        .collect(Collectors.joining(", "))
-                + ".";
+                        .collect(Collectors.joining(", "));
+        return title + ": " + told + (justNow ? ", " + now.word() + " just now" : "") + ".";
     }
 
     private static String surface(Instant from, Instant now, List<Level> levels) {

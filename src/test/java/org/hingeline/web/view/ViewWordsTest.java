@@ -54,7 +54,7 @@ class ViewWordsTest {
     @Test
     void the_headline_counts_when_there_are_too_many_to_name() {
         assertThat(site("A:SHORT", "B:SHORT", "C:SHORT", "D:SHORT", "E:UNKNOWN").headline())
-                .isEqualTo("4 points are past your limits. Not known at E. The water is fit nowhere.");
+                .isEqualTo("4 points are short of carbonate. Not known at E. The water is known to be fit nowhere.");
     }
 
     @Test
@@ -64,6 +64,47 @@ class ViewWordsTest {
         assertThat(status.headline()).isEqualTo("Not known at B and C. Water fit at 1 of 3 points.");
         assertThat(site("A:UNKNOWN").headline()).isEqualTo("Not known at any point.");
         assertThat(new StatusView(null, List.of()).standing()).isEqualTo(Standing.UNKNOWN);
+    }
+
+    @Test
+    void a_point_without_a_limit_is_told_as_that_and_not_as_unknown() {
+        StatusView status = site("A:FIT", "B:NO_LIMIT");
+        assertThat(status.standing()).isEqualTo(Standing.FIT);
+        assertThat(status.headline()).isEqualTo("Water fit at 1 of 2 points. No limit is set at B.");
+        assertThat(site("A:NO_LIMIT", "B:NO_LIMIT").standing()).isEqualTo(Standing.UNKNOWN);
+        assertThat(site("A:NO_LIMIT", "B:NO_LIMIT").headline())
+                .isEqualTo("No limit is set at any point: nothing is judged and nobody is told.");
+    }
+
+    @Test
+    void what_is_to_be_done_at_several_points_is_said_once_and_the_most_urgent_first() {
+        StatusView status = new StatusView(
+                null,
+                List.of(
+                        toDo("A", "Look.", 2),
+                        toDo("B", "Close the valve.", 3),
+                        toDo("C", "Look.", 2),
+                        toDo("D", "", 0)));
+        assertThat(status.toDo())
+                .extracting(
+                        StatusView.ToDo::action,
+                        todo -> todo.points().stream().map(PathPoint::name).toList())
+                .containsExactly(
+                        org.assertj.core.groups.Tuple.tuple("Close the valve.", List.of("B")),
+                        org.assertj.core.groups.Tuple.tuple("Look.", List.of("A", "C")));
+    }
+
+    @Test
+    void the_strip_wastes_no_word_on_a_few_minutes_unless_they_are_the_present() {
+        assertThat(strip(stretch(24, 6, Standing.FIT), stretch(5.9, 0, Standing.FIT)))
+                .isEqualTo("Intake: fit throughout.");
+        assertThat(strip(stretch(24, 0.05, Standing.FIT), stretch(0.05, 0, Standing.SHORT)))
+                .isEqualTo("Intake: fit throughout, short just now.");
+    }
+
+    private static String strip(Stretch... stretches) {
+        return TideStrip.draw("Intake", NOW.minus(Duration.ofHours(24)), NOW, LISBON, List.of(stretches), List.of())
+                .summary();
     }
 
     @Test
@@ -131,20 +172,34 @@ class ViewWordsTest {
         return new LayoutView("One", "s 1", choices, "Ana", Role.VIEWER, "t", "UTC", Moment.never(), "", "");
     }
 
-    private static Stretch stretch(int fromHoursAgo, int toHoursAgo, Standing standing) {
-        return new Stretch(
-                NOW.minus(Duration.ofHours(fromHoursAgo)), NOW.minus(Duration.ofHours(toHoursAgo)), standing);
+    private static Stretch stretch(double fromHoursAgo, double toHoursAgo, Standing standing) {
+        return new Stretch(hoursAgo(fromHoursAgo), hoursAgo(toHoursAgo), standing);
+    }
+
+    private static Instant hoursAgo(double hours) {
+        return NOW.minusSeconds(Math.round(hours * 3600));
     }
 
     private static StatusView site(String... points) {
         return new StatusView(
                 null,
                 java.util.Arrays.stream(points)
-                        .map(p -> point(p.split(":")[0], Standing.valueOf(p.split(":")[1])))
+                        .map(p -> point(p.split(":")[0], p.split(":")[1]))
                         .toList());
     }
 
-    private static PathPoint point(String name, Standing standing) {
+    private static PathPoint point(String name, String standing) {
+        return standing.equals("NO_LIMIT")
+                ? point(name, Standing.UNKNOWN, "2.10", "", false, 0)
+                : point(name, Standing.valueOf(standing), "", "", true, 0);
+    }
+
+    private static PathPoint toDo(String name, String action, int urgency) {
+        return point(name, Standing.SHORT, "1.50", action, true, urgency);
+    }
+
+    private static PathPoint point(
+            String name, Standing standing, String omega, String action, boolean judged, int urgency) {
         String verdict = standing == Standing.SHORT ? "short of carbonate" : standing.word();
         return new PathPoint(
                 name,
@@ -152,14 +207,16 @@ class ViewWordsTest {
                 Place.TANK,
                 standing,
                 verdict,
-                "",
+                omega,
                 "",
                 "",
                 Moment.never(),
                 List.of(),
-                "",
+                action,
                 "",
                 List.of(),
-                false);
+                false,
+                judged,
+                urgency);
     }
 }

@@ -1,0 +1,95 @@
+package org.hingeline.browser;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import java.nio.file.Path;
+import java.time.Clock;
+import java.time.Instant;
+import java.util.List;
+import java.util.function.Supplier;
+import org.hingeline.RunningService;
+import org.junit.jupiter.api.AfterAll;
+import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.EnumSource;
+
+/** Every page in both sizes: nothing blocked, nothing failed, nothing wider than the screen. */
+class EveryPageTest {
+    private static final List<String> PAGES = List.of(
+            "/", "/alerts", "/messages", "/setup", "/points/larval-3", "/points/larval-4", "/points/larval-3/dose");
+
+    enum Size {
+        PHONE(Browser::phone),
+        DESK(Browser::desktop);
+
+        private final Supplier<Browser> browser;
+
+        Size(Supplier<Browser> browser) {
+            this.browser = browser;
+        }
+    }
+
+    @TempDir
+    static Path data;
+
+    private static RunningService service;
+
+    @BeforeAll
+    static void open() {
+        service = RunningService.start(data, Clock.systemUTC());
+        Instant now = Instant.now();
+        StringBuilder rows = new StringBuilder();
+        for (int minutes = 240; minutes >= 0; minutes -= 20) {
+            for (String pair : List.of(
+                    "ph\",\"value\":7.6",
+                    "temperature\",\"value\":22",
+                    "salinity\",\"value\":30",
+                    "totalAlkalinity\",\"value\":2080")) {
+                rows.append(rows.isEmpty() ? "" : ",")
+                        .append("{\"point\":\"larval-3\",\"at\":\"")
+                        .append(now.minusSeconds(60L * minutes))
+                        .append("\",\"quantity\":\"")
+                        .append(pair)
+                        .append("}");
+            }
+        }
+        assertThat(service.postReadings("{\"readings\":[" + rows + "]}").statusCode())
+                .isEqualTo(200);
+    }
+
+    @AfterAll
+    static void close() {
+        if (service != null) {
+            service.close();
+        }
+    }
+
+    @ParameterizedTest
+    @EnumSource(Size.class)
+    void stays_within_the_screen_and_the_browser_has_nothing_to_complain_of(Size size) {
+        try (Browser browser = size.browser.get()) {
+            Guest guest = new Guest(browser, service).comeIn("ana");
+            for (String page : PAGES) {
+                guest.open(page);
+                if (page.startsWith("/points/") && !page.endsWith("/dose")) {
+                    guest.until(
+                            "the course",
+                            () -> guest.ask(
+                                            "document.querySelectorAll('.charts canvas').length > 0 || /No Ω is known/.test(document.body.innerText)")
+                                    .equals("true"));
+                }
+                assertThat(guest.ask("document.documentElement.scrollWidth - innerWidth"))
+                        .as("sideways scrolling of " + page)
+                        .isEqualTo("0");
+                assertThat(
+                                guest.ask(
+                                        "[...document.querySelectorAll('main *')].filter(e => e.getBoundingClientRect().right > innerWidth + 1"
+                                                + " && !e.closest('svg, .charts, .unseen')).map(e => e.outerHTML.slice(0, 80)).join()"))
+                        .as("wider than the screen on " + page)
+                        .isEmpty();
+                assertThat(guest.console()).as("console of " + page).isEmpty();
+            }
+        }
+    }
+}
