@@ -1,7 +1,9 @@
 package org.hingeline.store;
 
+import java.sql.PreparedStatement;
 import java.sql.ResultSet;
 import java.sql.SQLException;
+import java.sql.Types;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.Collection;
@@ -138,27 +140,29 @@ final class AlertTables implements AlertBook {
                 .findOne();
     }
 
+    /** Plain JDBC: nearly every reading moves some limit's memory. */
     @Override
     public void saveState(long limitId, AlertState state, @Nullable Long alertId) {
+        String sql = """
+                UPDATE alert_state
+                SET phase = ?, out_since = ?, back_since = ?, latest_at = ?, latest_value = ?, latest_uncertainty = ?,
+                    alert_id = ?
+                WHERE limit_id = ?
+                """;
         Observation latest = state.latest();
-        Sql.one(
-                handle.createUpdate("""
-                                UPDATE alert_state
-                                SET phase = :phase, out_since = :outSince, back_since = :backSince,
-                                    latest_at = :latestAt, latest_value = :latestValue,
-                                    latest_uncertainty = :latestUncertainty, alert_id = :alert
-                                WHERE limit_id = :limit
-                                """)
-                        .bind("phase", state.phase().code())
-                        .bindByType("outSince", state.outSince(), Instant.class)
-                        .bindByType("backSince", state.backSince(), Instant.class)
-                        .bindByType("latestAt", latest == null ? null : latest.at(), Instant.class)
-                        .bind("latestValue", latest == null ? null : latest.value())
-                        .bind("latestUncertainty", latest == null ? null : latest.standardUncertainty())
-                        .bind("alert", alertId)
-                        .bind("limit", limitId)
-                        .execute(),
-                "saving the state of limit " + limitId);
+        try (PreparedStatement update = handle.getConnection().prepareStatement(sql)) {
+            update.setString(1, state.phase().code());
+            Sql.setInstant(update, 2, state.outSince());
+            Sql.setInstant(update, 3, state.backSince());
+            Sql.setInstant(update, 4, latest == null ? null : latest.at());
+            update.setObject(5, latest == null ? null : latest.value(), Types.DOUBLE);
+            update.setObject(6, latest == null ? null : latest.standardUncertainty(), Types.DOUBLE);
+            update.setObject(7, alertId, Types.BIGINT);
+            update.setLong(8, limitId);
+            Sql.one(update.executeUpdate(), "saving the state of limit " + limitId);
+        } catch (SQLException e) {
+            throw new StoreException("the state of limit " + limitId + " could not be saved: " + e.getMessage(), e);
+        }
     }
 
     @Override

@@ -11,6 +11,12 @@ import org.hingeline.quality.Flag;
 import org.jdbi.v3.core.Handle;
 import org.jdbi.v3.core.statement.PreparedBatch;
 
+/**
+ * Readings and refused rows.
+ *
+ * <p>The order of every query names all columns of the key, or the reverse of all: then the engine walks the index from
+ * that end and stops at the limit, instead of sorting everything there is.
+ */
 final class ReadingTables implements ReadingBook {
     private final Handle handle;
 
@@ -20,29 +26,20 @@ final class ReadingTables implements ReadingBook {
 
     @Override
     public List<StoredReading> between(long sensorId, Instant from, Instant to) {
-        return handle.createQuery("""
-                        SELECT sensor_id, at, reading_value, flag FROM reading
-                        WHERE sensor_id = :sensor AND at >= :from AND at <= :to ORDER BY at
-                        """)
-                .bind("sensor", sensorId)
-                .bind("from", from)
-                .bind("to", to)
-                .map((row, context) -> reading(row))
-                .list();
+        return Sql.list(handle, """
+                SELECT sensor_id, at, reading_value, flag FROM reading
+                WHERE sensor_id = ? AND at >= ? AND at <= ? ORDER BY sensor_id, at
+                """, ReadingTables::reading, sensorId, from, to);
     }
 
     @Override
     public Optional<StoredReading> newestBefore(long sensorId, Instant from, Instant before) {
-        return handle.createQuery("""
-                        SELECT sensor_id, at, reading_value, flag FROM reading
-                        WHERE sensor_id = :sensor AND at >= :from AND at < :before AND flag NOT IN (4, 9)
-                        ORDER BY at DESC LIMIT 1
-                        """)
-                .bind("sensor", sensorId)
-                .bind("from", from)
-                .bind("before", before)
-                .map((row, context) -> reading(row))
-                .findOne();
+        return Sql.list(handle, """
+                SELECT sensor_id, at, reading_value, flag FROM reading
+                WHERE sensor_id = ? AND at >= ? AND at < ? AND flag NOT IN (4, 9)
+                ORDER BY sensor_id DESC, at DESC LIMIT 1
+                """, ReadingTables::reading, sensorId, from, before).stream()
+                .findFirst();
     }
 
     @Override
@@ -63,7 +60,8 @@ final class ReadingTables implements ReadingBook {
     public Optional<Instant> newestAt(long pointId) {
         return handle
                 .createQuery("""
-                        SELECT (SELECT max(r.at) FROM reading r WHERE r.sensor_id = s.id) AS newest
+                        SELECT (SELECT r.at FROM reading r WHERE r.sensor_id = s.id
+                                ORDER BY r.sensor_id DESC, r.at DESC LIMIT 1) AS newest
                         FROM sensor s WHERE s.point_id = :point
                         """)
                 .bind("point", pointId)
@@ -145,10 +143,6 @@ final class ReadingTables implements ReadingBook {
     }
 
     private static StoredReading reading(ResultSet row) throws SQLException {
-        return new StoredReading(
-                row.getLong("sensor_id"),
-                Sql.instant(row, "at"),
-                row.getDouble("reading_value"),
-                Flag.ofCode(row.getInt("flag")));
+        return new StoredReading(row.getLong(1), Sql.instant(row, 2), row.getDouble(3), Flag.ofCode(row.getInt(4)));
     }
 }

@@ -11,8 +11,10 @@ import java.util.Collections;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.NavigableMap;
 import java.util.Optional;
 import java.util.Set;
+import java.util.TreeMap;
 import java.util.stream.Collectors;
 import org.hingeline.monitor.WaterBook;
 import org.hingeline.monitor.WaterNumbers;
@@ -20,6 +22,7 @@ import org.hingeline.monitor.WaterState;
 import org.jdbi.v3.core.Handle;
 import org.jspecify.annotations.Nullable;
 
+/** Water states; of the order of the queries the same holds as in {@link ReadingTables}. */
 final class WaterTables implements WaterBook {
     private static final int NUMBERS = 17;
 
@@ -31,14 +34,9 @@ final class WaterTables implements WaterBook {
 
     @Override
     public List<Instant> timesFrom(long pointId, Instant from, int most) {
-        return handle.createQuery("""
-                        SELECT at FROM water_state WHERE point_id = :point AND at >= :from ORDER BY at LIMIT :most
-                        """)
-                .bind("point", pointId)
-                .bind("from", from)
-                .bind("most", most)
-                .map((row, context) -> Sql.instant(row, "at"))
-                .list();
+        return Sql.list(handle, """
+                SELECT at FROM water_state WHERE point_id = ? AND at >= ? ORDER BY point_id, at LIMIT ?
+                """, row -> Sql.instant(row, 1), pointId, from, most);
     }
 
     /** Plain JDBC: this is the hot path of the whole service. */
@@ -82,8 +80,8 @@ final class WaterTables implements WaterBook {
                 handle.getConnection().prepareStatement("DELETE FROM water_state WHERE point_id = ? AND at = ?")) {
             boolean any = false;
             for (Map.Entry<Long, List<Instant>> entry : times.entrySet()) {
-                Set<Instant> present =
-                        present(entry.getKey(), Collections.min(entry.getValue()), Collections.max(entry.getValue()));
+                Set<Instant> present = new HashSet<>(
+                        times(entry.getKey(), Collections.min(entry.getValue()), Collections.max(entry.getValue())));
                 for (Instant at : entry.getValue()) {
                     if (present.contains(at)) {
                         delete.setLong(1, entry.getKey());
@@ -101,19 +99,17 @@ final class WaterTables implements WaterBook {
         }
     }
 
-    private Set<Instant> present(long pointId, Instant from, Instant to) {
-        return new HashSet<>(
-                handle.createQuery("SELECT at FROM water_state WHERE point_id = :point AND at >= :from AND at <= :to")
-                        .bind("point", pointId)
-                        .bind("from", from)
-                        .bind("to", to)
-                        .map((row, context) -> Sql.instant(row, "at"))
-                        .list());
+    /** Times of the states of a point, oldest first; read from the index alone. */
+    private List<Instant> times(long pointId, Instant from, Instant to) {
+        return Sql.list(handle, """
+                SELECT at FROM water_state WHERE point_id = ? AND at >= ? AND at <= ? ORDER BY point_id, at
+                """, row -> Sql.instant(row, 1), pointId, from, to);
     }
 
     @Override
     public Optional<WaterState> newest(long pointId) {
-        return handle.createQuery("SELECT * FROM water_state WHERE point_id = :point ORDER BY at DESC LIMIT 1")
+        return handle.createQuery(
+                        "SELECT * FROM water_state WHERE point_id = :point ORDER BY point_id DESC, at DESC LIMIT 1")
                 .bind("point", pointId)
                 .map((row, context) -> state(row))
                 .findOne();
@@ -122,7 +118,8 @@ final class WaterTables implements WaterBook {
     @Override
     public Optional<WaterState> newestComplete(long pointId) {
         return handle.createQuery("""
-                        SELECT * FROM water_state WHERE point_id = :point AND complete ORDER BY at DESC LIMIT 1
+                        SELECT * FROM water_state WHERE point_id = :point AND complete
+                        ORDER BY point_id DESC, at DESC LIMIT 1
                         """)
                 .bind("point", pointId)
                 .map((row, context) -> state(row))
@@ -133,7 +130,7 @@ final class WaterTables implements WaterBook {
     public List<WaterState> between(long pointId, Instant from, Instant to, int most) {
         return handle.createQuery("""
                         SELECT * FROM water_state WHERE point_id = :point AND at >= :from AND at <= :to
-                        ORDER BY at LIMIT :most
+                        ORDER BY point_id, at LIMIT :most
                         """)
                 .bind("point", pointId)
                 .bind("from", from)
@@ -143,33 +140,29 @@ final class WaterTables implements WaterBook {
                 .list();
     }
 
-    /** Jumps from the newest state of one step to that of the step before, so that dense data costs no more than thin. */
+    /**
+     * Chooses by the times, which the index gives at little cost, and reads only the states chosen. To ask for the newest
+     * state before a time, step by step, would have the engine walk through all that is newer at each step.
+     */
     @Override
     public List<WaterState> newestOfEach(long pointId, Instant from, Instant to, Duration step) {
-        String sql = """
-                SELECT * FROM water_state WHERE point_id = ? AND at >= ? AND at <= ? ORDER BY at DESC LIMIT 1
-                """;
-        List<WaterState> states = new ArrayList<>();
+        NavigableMap<Long, Instant> newest = new TreeMap<>();
+        times(pointId, from, to).forEach(at -> newest.put(Math.floorDiv(at.toEpochMilli(), step.toMillis()), at));
+        String sql = "SELECT * FROM water_state WHERE point_id = ? AND at = ?";
+        List<WaterState> states = new ArrayList<>(newest.size());
         try (PreparedStatement query = handle.getConnection().prepareStatement(sql)) {
             query.setLong(1, pointId);
-            Sql.setInstant(query, 2, from);
-            Instant last = to;
-            while (!last.isBefore(from)) {
-                Sql.setInstant(query, 3, last);
+            for (Instant at : newest.values()) {
+                Sql.setInstant(query, 2, at);
                 try (ResultSet row = query.executeQuery()) {
-                    if (!row.next()) {
-                        break;
+                    if (row.next()) {
+                        states.add(state(row));
                     }
-                    WaterState state = state(row);
-                    states.add(state);
-                    long slot = Math.floorDiv(state.at().toEpochMilli(), step.toMillis());
-                    last = Instant.ofEpochMilli(slot * step.toMillis() - 1);
                 }
             }
         } catch (SQLException e) {
             throw new StoreException("water states could not be read: " + e.getMessage(), e);
         }
-        Collections.reverse(states);
         return states;
     }
 
