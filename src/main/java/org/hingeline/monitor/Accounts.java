@@ -7,8 +7,8 @@ import java.util.List;
 import java.util.Optional;
 import org.hingeline.hatchery.Codes;
 import org.hingeline.hatchery.Site;
-import org.hingeline.monitor.PeopleBook.AccessToken;
-import org.hingeline.monitor.PeopleBook.GatewayKey;
+import org.hingeline.monitor.KeyBook.AccessToken;
+import org.hingeline.monitor.KeyBook.GatewayKey;
 import org.hingeline.monitor.PeopleBook.Membership;
 import org.hingeline.monitor.PeopleBook.Person;
 import org.hingeline.monitor.PeopleBook.Session;
@@ -107,7 +107,7 @@ public final class Accounts {
 
     /** The script behind an access token. */
     public Optional<Caller> byToken(String token) {
-        return storage.read(books -> books.people()
+        return storage.read(books -> books.keys()
                 .accessToken(Secrets.hash(token))
                 .map(found -> {
                     Site site = books.place().site(found.siteId()).orElseThrow();
@@ -117,7 +117,7 @@ public final class Accounts {
 
     /** The gateway behind a key. */
     public Optional<GatewayKey> byGatewayKey(String key) {
-        return storage.read(books -> books.people().gatewayKey(Secrets.hash(key)));
+        return storage.read(books -> books.keys().gatewayKey(Secrets.hash(key)));
     }
 
     /** Whether nobody can sign in yet. */
@@ -218,7 +218,7 @@ public final class Accounts {
         String key = secrets.make("hgk_");
         Instant now = clock.instant();
         storage.writeOnly(books -> {
-            books.people().addGatewayKey(site.id(), gateway.strip(), Secrets.hash(key), now);
+            books.keys().addGatewayKey(site.id(), gateway.strip(), Secrets.hash(key), now);
             journal(books, now, site, who, "gateway-key-made", gateway, "");
         });
         return key;
@@ -230,7 +230,7 @@ public final class Accounts {
         String token = secrets.make("hat_");
         Instant now = clock.instant();
         storage.writeOnly(books -> {
-            books.people().addAccessToken(site.id(), name.strip(), role, Secrets.hash(token), now);
+            books.keys().addAccessToken(site.id(), name.strip(), role, Secrets.hash(token), now);
             journal(books, now, site, who, "access-token-made", name, "role " + role.code());
         });
         return token;
@@ -240,7 +240,7 @@ public final class Accounts {
     public boolean revokeGatewayKey(Site site, long id, String who) {
         Instant now = clock.instant();
         return storage.write(books -> {
-            boolean done = books.people().revokeGatewayKey(site.id(), id, now);
+            boolean done = books.keys().revokeGatewayKey(site.id(), id, now);
             if (done) {
                 journal(books, now, site, who, "gateway-key-revoked", "key " + id, "");
             }
@@ -252,7 +252,7 @@ public final class Accounts {
     public boolean revokeAccessToken(Site site, long id, String who) {
         Instant now = clock.instant();
         return storage.write(books -> {
-            boolean done = books.people().revokeAccessToken(site.id(), id, now);
+            boolean done = books.keys().revokeAccessToken(site.id(), id, now);
             if (done) {
                 journal(books, now, site, who, "access-token-revoked", "token " + id, "");
             }
@@ -261,11 +261,11 @@ public final class Accounts {
     }
 
     public List<GatewayKey> gatewayKeys(Site site) {
-        return storage.read(books -> books.people().gatewayKeys(site.id()));
+        return storage.read(books -> books.keys().gatewayKeys(site.id()));
     }
 
     public List<AccessToken> accessTokens(Site site) {
-        return storage.read(books -> books.people().accessTokens(site.id()));
+        return storage.read(books -> books.keys().accessTokens(site.id()));
     }
 
     public List<PeopleBook.PersonAtSite> people(Site site) {

@@ -15,7 +15,7 @@ import org.hingeline.alert.Transition;
 import org.hingeline.alert.Transition.Effect;
 import org.hingeline.hatchery.Point;
 import org.hingeline.monitor.AlertBook.Alert;
-import org.hingeline.monitor.AlertBook.Watched;
+import org.hingeline.monitor.LimitBook.Watched;
 import org.jspecify.annotations.Nullable;
 
 /** Carries out what the alert machine decides: opens and closes alerts, tells people; and takes acknowledgements. */
@@ -168,7 +168,7 @@ public final class AlertDesk {
         if (alert.isEmpty()) {
             return Acknowledged.NO_SUCH_ALERT;
         }
-        Optional<Watched> watched = books.alerts().watchedByAlertForUpdate(alertId);
+        Optional<Watched> watched = books.limits().watchedByAlertForUpdate(alertId);
         if (watched.isEmpty()) {
             return Acknowledged.NOTHING_TO_DO;
         }
@@ -184,7 +184,7 @@ public final class AlertDesk {
         if (over) {
             books.alerts().close(alertId, now);
         }
-        books.alerts().saveState(limit.id(), transition.state(), over ? null : (Long) alertId);
+        books.limits().saveState(limit.id(), transition.state(), over ? null : (Long) alertId);
         books.journal()
                 .add(new JournalBook.Entry(
                         now,

@@ -19,7 +19,7 @@ import org.hingeline.alert.Transition;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Sensor;
 import org.hingeline.measure.Quantity;
-import org.hingeline.monitor.AlertBook.Watched;
+import org.hingeline.monitor.LimitBook.Watched;
 import org.hingeline.monitor.ReadingBook.StoredReading;
 import org.jspecify.annotations.Nullable;
 
@@ -49,7 +49,7 @@ public final class AlertWatch {
     void observe(Books books, long siteId, List<News> news, Instant now) {
         Map<Long, News> byPoint =
                 news.stream().collect(Collectors.toMap(n -> n.point().id(), Function.identity()));
-        Map<Long, List<Watched>> watched = books.alerts().watchedForUpdate(byPoint.keySet()).stream()
+        Map<Long, List<Watched>> watched = books.limits().watchedForUpdate(byPoint.keySet()).stream()
                 .collect(Collectors.groupingBy(w -> w.limit().pointId()));
         watched.forEach((pointId, limits) -> {
             News here = Objects.requireNonNull(byPoint.get(pointId));
@@ -61,8 +61,8 @@ public final class AlertWatch {
     public void tick(Books books, Instant now) {
         Duration watching = attention.look(now);
         Map<Long, List<Watched>> watched = books
-                .alerts()
-                .watchedForUpdate(books.alerts().pointsWithLimits())
+                .limits()
+                .watchedForUpdate(books.limits().pointsWithLimits())
                 .stream()
                 .collect(Collectors.groupingBy(w -> w.limit().pointId()));
         watched.forEach((pointId, limits) -> {
@@ -138,7 +138,7 @@ public final class AlertWatch {
                     run.books(), run.siteId(), run.point(), limit, decided.get(i), alertId, tell, run.now());
         }
         if (!state.equals(watched.state()) || !Objects.equals(alertId, watched.alertId())) {
-            run.books().alerts().saveState(limit.id(), state, alertId);
+            run.books().limits().saveState(limit.id(), state, alertId);
         }
         return state;
     }

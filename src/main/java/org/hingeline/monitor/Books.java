@@ -6,9 +6,13 @@ public interface Books {
 
     PeopleBook people();
 
+    KeyBook keys();
+
     ReadingBook readings();
 
     WaterBook water();
+
+    LimitBook limits();
 
     AlertBook alerts();
 

@@ -8,7 +8,7 @@ import org.hingeline.alert.Limit;
 import org.hingeline.alert.Phase;
 import org.hingeline.alert.Side;
 import org.hingeline.alert.Transition;
-import org.hingeline.monitor.AlertBook.Watched;
+import org.hingeline.monitor.LimitBook.Watched;
 import org.jspecify.annotations.Nullable;
 
 /** What becomes of an alert, and of what is remembered of a limit, when the limit changes or goes. */
@@ -27,7 +27,7 @@ final class LimitChange {
         if (transition.effect() == Transition.Effect.CLOSE && alertId != null) {
             books.alerts().close(alertId, now);
         }
-        books.alerts().saveState(watched.limit().id(), after, null);
+        books.limits().saveState(watched.limit().id(), after, null);
     }
 
     /**
@@ -50,7 +50,7 @@ final class LimitChange {
             double backLater = wider + after.deadband() - old.deadband();
             @Nullable Instant outSince = wider >= 0 ? state.outSince() : null;
             @Nullable Instant backSince = backLater <= 0 ? state.backSince() : null;
-            books.alerts()
+            books.limits()
                     .saveState(
                             old.id(),
                             new AlertState(state.phase(), outSince, backSince, state.latest()),

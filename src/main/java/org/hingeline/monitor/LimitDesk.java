@@ -12,7 +12,7 @@ import org.hingeline.alert.Side;
 import org.hingeline.hatchery.Codes;
 import org.hingeline.hatchery.Point;
 import org.hingeline.measure.Quantity;
-import org.hingeline.monitor.AlertBook.Watched;
+import org.hingeline.monitor.LimitBook.Watched;
 import org.jspecify.annotations.Nullable;
 
 /** Sets, changes and takes away limits; every change is journaled with what was there before. */
@@ -61,7 +61,7 @@ public final class LimitDesk {
         if (before.equals(words(limit))) {
             return known.map(Watched::limit).orElseThrow();
         }
-        Limit saved = books.alerts().saveLimit(limit, now);
+        Limit saved = books.limits().saveLimit(limit, now);
         known.ifPresent(watched -> LimitChange.carryOver(books, watched, saved, now));
         books.journal()
                 .add(new JournalBook.Entry(
@@ -99,8 +99,8 @@ public final class LimitDesk {
         }
         Watched watched = found.get();
         LimitChange.end(books, watched, now);
-        books.alerts().retireLimit(watched.limit().id(), now);
-        if (books.alerts().limits(point.id()).stream().allMatch(Limit::onSilence)) {
+        books.limits().retireLimit(watched.limit().id(), now);
+        if (books.limits().limits(point.id()).stream().allMatch(Limit::onSilence)) {
             // with nothing left to watch no value is waited for, so none can end this alert
             watched(books, point, SILENCE).ifPresent(silence -> LimitChange.end(books, silence, now));
         }
@@ -116,7 +116,7 @@ public final class LimitDesk {
     }
 
     private static Optional<Watched> watched(Books books, Point point, String name) {
-        return books.alerts().watchedForUpdate(List.of(point.id())).stream()
+        return books.limits().watchedForUpdate(List.of(point.id())).stream()
                 .filter(w -> w.limit().name().equals(name))
                 .findFirst();
     }

@@ -28,24 +28,6 @@ public interface PeopleBook {
     /** A signed-in browser. */
     record Session(long personId, String csrf, Instant expiresAt) {}
 
-    /** A key with which a gateway posts readings. */
-    record GatewayKey(
-            long id,
-            long siteId,
-            String gateway,
-            Instant createdAt,
-            @Nullable Instant lastHeardAt,
-            @Nullable Instant revokedAt) {}
-
-    /** A token with which a script calls the API. */
-    record AccessToken(
-            long id,
-            long siteId,
-            String name,
-            Role role,
-            Instant createdAt,
-            @Nullable Instant revokedAt) {}
-
     /** Someone who is told about alerts. */
     record Subscriber(
             long id, long siteId, String code, String name, String email, Priority minPriority, boolean active) {}
@@ -76,26 +58,6 @@ public interface PeopleBook {
     void removeSessionsExpiredBy(Instant time);
 
     void removeSessionsOf(long personId);
-
-    long addGatewayKey(long siteId, String gateway, String keyHash, Instant now);
-
-    /** The key in use with this hash. */
-    Optional<GatewayKey> gatewayKey(String keyHash);
-
-    List<GatewayKey> gatewayKeys(long siteId);
-
-    void gatewayHeard(long gatewayKeyId, Instant now);
-
-    boolean revokeGatewayKey(long siteId, long id, Instant now);
-
-    long addAccessToken(long siteId, String name, Role role, String tokenHash, Instant now);
-
-    /** The token in use with this hash. */
-    Optional<AccessToken> accessToken(String tokenHash);
-
-    List<AccessToken> accessTokens(long siteId);
-
-    boolean revokeAccessToken(long siteId, long id, Instant now);
 
     List<Subscriber> subscribers(long siteId);
 

@@ -78,7 +78,7 @@ public final class PlaceDesk {
     private static void savePoint(Books books, Point point, Instant now) {
         Point saved = books.place().savePoint(point);
         Limit silence = LimitDesk.silenceOf(saved);
-        books.alerts().saveLimit(silence, now);
+        books.limits().saveLimit(silence, now);
     }
 
     /**

@@ -15,7 +15,7 @@ import java.util.function.Function;
 import java.util.stream.Collectors;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Sensor;
-import org.hingeline.monitor.PeopleBook.GatewayKey;
+import org.hingeline.monitor.KeyBook.GatewayKey;
 import org.hingeline.monitor.ReadingBook.RefusedRow;
 import org.hingeline.monitor.ReadingBook.StoredReading;
 
@@ -113,7 +113,7 @@ public final class ReadingIntake {
         Tally tally = new Tally();
         sift(books, rows, tally);
         books.readings().insert(tally.fresh, gateway.id(), now);
-        books.people().gatewayHeard(gateway.id(), now);
+        books.keys().gatewayHeard(gateway.id(), now);
         assess(books, gateway.siteId(), sensors, tally.fresh, now);
         return tally;
     }
@@ -188,7 +188,7 @@ public final class ReadingIntake {
                 .toList();
         storage.writeOnly(books -> {
             books.readings().insertRefused(rows);
-            books.people().gatewayHeard(gateway.id(), now);
+            books.keys().gatewayHeard(gateway.id(), now);
         });
     }
 

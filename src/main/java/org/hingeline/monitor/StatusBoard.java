@@ -55,7 +55,7 @@ public final class StatusBoard {
     }
 
     private static PointStatus status(Books books, Point point, List<Alert> alerts, List<Batch> batches, Instant now) {
-        List<Limit> limits = books.alerts().limits(point.id());
+        List<Limit> limits = books.limits().limits(point.id());
         return new PointStatus(
                 point,
                 books.water().newest(point.id()).orElse(null),

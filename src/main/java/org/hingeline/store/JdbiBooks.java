@@ -3,6 +3,8 @@ package org.hingeline.store;
 import org.hingeline.monitor.AlertBook;
 import org.hingeline.monitor.Books;
 import org.hingeline.monitor.JournalBook;
+import org.hingeline.monitor.KeyBook;
+import org.hingeline.monitor.LimitBook;
 import org.hingeline.monitor.OutboxBook;
 import org.hingeline.monitor.PeopleBook;
 import org.hingeline.monitor.PlaceBook;
@@ -24,6 +26,11 @@ record JdbiBooks(Handle handle) implements Books {
     }
 
     @Override
+    public KeyBook keys() {
+        return new KeyTables(handle);
+    }
+
+    @Override
     public ReadingBook readings() {
         return new ReadingTables(handle);
     }
@@ -31,6 +38,11 @@ record JdbiBooks(Handle handle) implements Books {
     @Override
     public WaterBook water() {
         return new WaterTables(handle);
+    }
+
+    @Override
+    public LimitBook limits() {
+        return new LimitTables(handle);
     }
 
     @Override

@@ -3,7 +3,7 @@ package org.hingeline.web;
 import io.javalin.http.Context;
 import org.hingeline.hatchery.Site;
 import org.hingeline.monitor.Caller;
-import org.hingeline.monitor.PeopleBook.GatewayKey;
+import org.hingeline.monitor.KeyBook.GatewayKey;
 import org.hingeline.monitor.Role;
 import org.jspecify.annotations.Nullable;
 

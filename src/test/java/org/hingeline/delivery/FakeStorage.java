@@ -12,6 +12,8 @@ import java.util.function.Function;
 import org.hingeline.monitor.AlertBook;
 import org.hingeline.monitor.Books;
 import org.hingeline.monitor.JournalBook;
+import org.hingeline.monitor.KeyBook;
+import org.hingeline.monitor.LimitBook;
 import org.hingeline.monitor.OutboxBook;
 import org.hingeline.monitor.PeopleBook;
 import org.hingeline.monitor.PlaceBook;
@@ -214,6 +216,16 @@ final class FakeStorage implements Storage, Books, OutboxBook, JournalBook {
 
     @Override
     public AlertBook alerts() {
+        throw new UnsupportedOperationException();
+    }
+
+    @Override
+    public LimitBook limits() {
+        throw new UnsupportedOperationException();
+    }
+
+    @Override
+    public KeyBook keys() {
         throw new UnsupportedOperationException();
     }
 }

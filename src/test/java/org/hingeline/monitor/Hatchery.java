@@ -20,7 +20,7 @@ import org.hingeline.hatchery.PointKind;
 import org.hingeline.hatchery.Site;
 import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.AlertBook.Alert;
-import org.hingeline.monitor.PeopleBook.GatewayKey;
+import org.hingeline.monitor.KeyBook.GatewayKey;
 import org.hingeline.monitor.PlacePlan.PointPlan;
 import org.hingeline.monitor.PlacePlan.SensorPlan;
 import org.hingeline.monitor.PlacePlan.SitePlan;

@@ -141,7 +141,7 @@ class LimitChangeTest {
                                         "priority",
                                         "action"));
         assertThat(hatchery.database.<List<org.hingeline.alert.Limit>>read(
-                        books -> books.alerts().limits(hatchery.tank().id())))
+                        books -> books.limits().limits(hatchery.tank().id())))
                 .extracting(org.hingeline.alert.Limit::name)
                 .containsExactly("silence");
     }
@@ -153,9 +153,9 @@ class LimitChangeTest {
                 .hasMessageContaining("maxGapMin");
     }
 
-    private AlertBook.Watched watched() {
+    private LimitBook.Watched watched() {
         long tank = hatchery.tank().id();
-        return hatchery.database.write(books -> books.alerts().watchedForUpdate(List.of(tank)).stream()
+        return hatchery.database.write(books -> books.limits().watchedForUpdate(List.of(tank)).stream()
                 .filter(w -> w.limit().name().equals("low"))
                 .findFirst()
                 .orElseThrow());

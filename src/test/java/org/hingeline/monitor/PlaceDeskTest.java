@@ -168,7 +168,7 @@ class PlaceDeskTest {
 
     private List<Limit> limits() {
         return hatchery.database.read(
-                books -> books.alerts().limits(hatchery.tank().id()));
+                books -> books.limits().limits(hatchery.tank().id()));
     }
 
     private Limit silence() {

@@ -12,7 +12,7 @@ import java.util.List;
 import java.util.stream.IntStream;
 import org.hingeline.hatchery.Site;
 import org.hingeline.measure.Quantity;
-import org.hingeline.monitor.PeopleBook.GatewayKey;
+import org.hingeline.monitor.KeyBook.GatewayKey;
 import org.hingeline.monitor.ReadingBook.RefusedRow;
 import org.hingeline.monitor.ReadingBook.StoredReading;
 import org.hingeline.monitor.ReadingIntake.Answer;

@@ -203,7 +203,7 @@ interface AlertContract extends StoreUnderTest {
                 Duration.ZERO,
                 Priority.MEDIUM,
                 "Look at the gateway.");
-        return done().alerts().saveLimit(silence, T0);
+        return done().limits().saveLimit(silence, T0);
     }
 
     private void assertRefused(long id, Consumer<AlertBook> change) {
@@ -225,7 +225,7 @@ interface AlertContract extends StoreUnderTest {
     }
 
     private Limit limit(Samples.Place place, double threshold) {
-        return done().alerts().saveLimit(LimitContract.limit(place.tank(), "omega", threshold), T0);
+        return done().limits().saveLimit(LimitContract.limit(place.tank(), "omega", threshold), T0);
     }
 
     static Alert alert(Samples.Place place, Limit limit, Instant raisedAt) {

@@ -16,7 +16,7 @@ import org.hingeline.alert.Side;
 import org.hingeline.hatchery.Point;
 import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.AlertBook.Alert;
-import org.hingeline.monitor.AlertBook.Watched;
+import org.hingeline.monitor.LimitBook.Watched;
 import org.junit.jupiter.api.Test;
 
 interface LimitContract extends StoreUnderTest {
@@ -40,9 +40,9 @@ interface LimitContract extends StoreUnderTest {
                         Duration.ofSeconds(90),
                         Priority.HIGH,
                         "Close the intake valve; draw from storage."));
-        assertThat(seen().alerts().limit(tank.id(), "omega")).contains(saved);
-        assertThat(seen().alerts().limit(tank.id(), "other")).isEmpty();
-        assertThat(seen().alerts().retiredLimit(tank.id(), "omega")).isEmpty();
+        assertThat(seen().limits().limit(tank.id(), "omega")).contains(saved);
+        assertThat(seen().limits().limit(tank.id(), "other")).isEmpty();
+        assertThat(seen().limits().retiredLimit(tank.id(), "omega")).isEmpty();
     }
 
     @Test
@@ -50,7 +50,7 @@ interface LimitContract extends StoreUnderTest {
         Point tank = Samples.place(store(), "north").tank();
         Limit first = save(limit(tank, "omega", 1.8), T0);
         AlertState state = new AlertState(Phase.NORMAL, T0, null, new Observation(T0, 1.7, 0.1));
-        done().alerts().saveState(first.id(), state, null);
+        done().limits().saveState(first.id(), state, null);
         Limit changed = new Limit(
                 0,
                 tank.id(),
@@ -89,7 +89,7 @@ interface LimitContract extends StoreUnderTest {
         Limit changed = save(limit(tank, "omega", 1.9), T0.plusSeconds(60));
         assertThat(watched(tank)).extracting(Watched::createdAt).containsExactly(T0);
 
-        done().alerts().retireLimit(changed.id(), T0.plusSeconds(120));
+        done().limits().retireLimit(changed.id(), T0.plusSeconds(120));
         save(limit(tank, "omega", 1.9), T0.plusSeconds(180));
         assertThat(watched(tank)).extracting(Watched::createdAt).containsExactly(T0.plusSeconds(180));
     }
@@ -102,9 +102,9 @@ interface LimitContract extends StoreUnderTest {
         Limit omega = save(limit(tank, "omega", 1), T0);
         Limit elsewhere = save(limit(other, "omega", 2), T0);
 
-        assertThat(seen().alerts().limits(tank.id())).containsExactly(omega, ph);
-        assertThat(seen().alerts().limits(other.id())).containsExactly(elsewhere);
-        assertThat(seen().alerts().pointsWithLimits()).containsExactly(tank.id(), other.id());
+        assertThat(seen().limits().limits(tank.id())).containsExactly(omega, ph);
+        assertThat(seen().limits().limits(other.id())).containsExactly(elsewhere);
+        assertThat(seen().limits().pointsWithLimits()).containsExactly(tank.id(), other.id());
     }
 
     @Test
@@ -112,19 +112,19 @@ interface LimitContract extends StoreUnderTest {
         Point tank = Samples.place(store(), "north").tank();
         Limit omega = save(limit(tank, "omega", 1.8), T0);
 
-        done().alerts().retireLimit(omega.id(), T0.plusSeconds(1));
+        done().limits().retireLimit(omega.id(), T0.plusSeconds(1));
 
-        assertThat(seen().alerts().limits(tank.id())).isEmpty();
-        assertThat(seen().alerts().limit(tank.id(), "omega")).isEmpty();
-        assertThat(seen().alerts().retiredLimit(tank.id(), "omega")).contains(omega);
-        assertThat(seen().alerts().pointsWithLimits()).isEmpty();
+        assertThat(seen().limits().limits(tank.id())).isEmpty();
+        assertThat(seen().limits().limit(tank.id(), "omega")).isEmpty();
+        assertThat(seen().limits().retiredLimit(tank.id(), "omega")).contains(omega);
+        assertThat(seen().limits().pointsWithLimits()).isEmpty();
         assertThat(watched(tank)).isEmpty();
 
         Limit back = save(limit(tank, "omega", 1.9), T0.plusSeconds(2));
 
         assertThat(back.id()).isEqualTo(omega.id());
         assertThat(back.threshold()).isEqualTo(1.9);
-        assertThat(seen().alerts().retiredLimit(tank.id(), "omega")).isEmpty();
+        assertThat(seen().limits().retiredLimit(tank.id(), "omega")).isEmpty();
         assertThat(watched(tank)).extracting(Watched::limit).containsExactly(back);
     }
 
@@ -132,9 +132,9 @@ interface LimitContract extends StoreUnderTest {
     default void a_limit_cannot_be_taken_away_twice() {
         Point tank = Samples.place(store(), "north").tank();
         Limit omega = save(limit(tank, "omega", 1.8), T0);
-        done().alerts().retireLimit(omega.id(), T0);
+        done().limits().retireLimit(omega.id(), T0);
 
-        assertThatThrownBy(() -> done().alerts().retireLimit(omega.id(), T0))
+        assertThatThrownBy(() -> done().limits().retireLimit(omega.id(), T0))
                 .isInstanceOf(StoreException.class)
                 .hasMessageContaining("limit " + omega.id());
     }
@@ -151,8 +151,8 @@ interface LimitContract extends StoreUnderTest {
                 .containsExactly(
                         new Watched(omega, AlertState.INITIAL, null, T0),
                         new Watched(ph, AlertState.INITIAL, null, T0.plusMillis(1)));
-        assertThat(done().alerts().watchedForUpdate(List.of())).isEmpty();
-        assertThat(done().alerts().watchedForUpdate(List.of(tank.id(), other.id())))
+        assertThat(done().limits().watchedForUpdate(List.of())).isEmpty();
+        assertThat(done().limits().watchedForUpdate(List.of(tank.id(), other.id())))
                 .hasSize(3);
     }
 
@@ -165,20 +165,20 @@ interface LimitContract extends StoreUnderTest {
         AlertState full = new AlertState(
                 Phase.ACKNOWLEDGED, T0.plusMillis(1), T0.plusMillis(2), new Observation(T0.plusMillis(3), 1.7, 0.125));
 
-        done().alerts().saveState(omega.id(), full, alertId);
+        done().limits().saveState(omega.id(), full, alertId);
 
         assertThat(watched(north.tank())).containsExactly(new Watched(omega, full, alertId, T0));
-        assertThat(done().alerts().watchedByAlertForUpdate(alertId)).contains(new Watched(omega, full, alertId, T0));
+        assertThat(done().limits().watchedByAlertForUpdate(alertId)).contains(new Watched(omega, full, alertId, T0));
 
-        done().alerts().saveState(omega.id(), AlertState.INITIAL, null);
+        done().limits().saveState(omega.id(), AlertState.INITIAL, null);
 
         assertThat(watched(north.tank())).containsExactly(new Watched(omega, AlertState.INITIAL, null, T0));
-        assertThat(done().alerts().watchedByAlertForUpdate(alertId)).isEmpty();
+        assertThat(done().limits().watchedByAlertForUpdate(alertId)).isEmpty();
     }
 
     @Test
     default void the_memory_of_an_unknown_limit_cannot_be_saved() {
-        assertThatThrownBy(() -> done().alerts().saveState(4711, AlertState.INITIAL, null))
+        assertThatThrownBy(() -> done().limits().saveState(4711, AlertState.INITIAL, null))
                 .isInstanceOf(StoreException.class)
                 .hasMessageContaining("4711");
     }
@@ -190,18 +190,18 @@ interface LimitContract extends StoreUnderTest {
         for (Phase phase : Phase.values()) {
             AlertState state = new AlertState(phase, null, null, null);
 
-            done().alerts().saveState(omega.id(), state, null);
+            done().limits().saveState(omega.id(), state, null);
 
             assertThat(watched(tank)).extracting(Watched::state).containsExactly(state);
         }
     }
 
     private Limit save(Limit limit, Instant now) {
-        return done().alerts().saveLimit(limit, now);
+        return done().limits().saveLimit(limit, now);
     }
 
     private List<Watched> watched(Point point) {
-        return done().alerts().watchedForUpdate(List.of(point.id()));
+        return done().limits().watchedForUpdate(List.of(point.id()));
     }
 
     static Limit limit(Point point, String name, double threshold) {

@@ -25,7 +25,7 @@ interface OutboxContract extends StoreUnderTest {
     @Test
     default void a_message_comes_back_waiting_whatever_its_record_said() {
         Samples.Place north = Samples.place(store(), "north");
-        Limit omega = done().alerts().saveLimit(LimitContract.limit(north.tank(), "omega", 1), T0);
+        Limit omega = done().limits().saveLimit(LimitContract.limit(north.tank(), "omega", 1), T0);
         long alert = done().alerts().open(AlertContract.alert(north, omega, T0));
         Message given = new Message(
                 99,

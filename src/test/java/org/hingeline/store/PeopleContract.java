@@ -6,8 +6,8 @@ import static org.hingeline.store.Samples.T0;
 
 import org.hingeline.alert.Priority;
 import org.hingeline.hatchery.Site;
-import org.hingeline.monitor.PeopleBook.AccessToken;
-import org.hingeline.monitor.PeopleBook.GatewayKey;
+import org.hingeline.monitor.KeyBook.AccessToken;
+import org.hingeline.monitor.KeyBook.GatewayKey;
 import org.hingeline.monitor.PeopleBook.Membership;
 import org.hingeline.monitor.PeopleBook.Person;
 import org.hingeline.monitor.PeopleBook.PersonAtSite;
@@ -125,17 +125,16 @@ interface PeopleContract extends StoreUnderTest {
     @Test
     default void a_gateway_key_is_found_by_its_hash_until_it_is_revoked() {
         Site north = Samples.site(store(), "north");
-        long id = done().people().addGatewayKey(north.id(), "shed", "hash-1", T0);
+        long id = done().keys().addGatewayKey(north.id(), "shed", "hash-1", T0);
 
-        assertThat(seen().people().gatewayKey("hash-1"))
-                .contains(new GatewayKey(id, north.id(), "shed", T0, null, null));
+        assertThat(seen().keys().gatewayKey("hash-1")).contains(new GatewayKey(id, north.id(), "shed", T0, null, null));
 
-        done().people().gatewayHeard(id, T0.plusSeconds(5));
-        boolean revoked = done().people().revokeGatewayKey(north.id(), id, T0.plusSeconds(9));
+        done().keys().gatewayHeard(id, T0.plusSeconds(5));
+        boolean revoked = done().keys().revokeGatewayKey(north.id(), id, T0.plusSeconds(9));
 
         assertThat(revoked).isTrue();
-        assertThat(seen().people().gatewayKey("hash-1")).isEmpty();
-        assertThat(seen().people().gatewayKeys(north.id()))
+        assertThat(seen().keys().gatewayKey("hash-1")).isEmpty();
+        assertThat(seen().keys().gatewayKeys(north.id()))
                 .containsExactly(new GatewayKey(id, north.id(), "shed", T0, T0.plusSeconds(5), T0.plusSeconds(9)));
     }
 
@@ -143,15 +142,15 @@ interface PeopleContract extends StoreUnderTest {
     default void a_gateway_key_is_revoked_once_and_only_by_its_own_site() {
         Site north = Samples.site(store(), "north");
         Site south = Samples.site(store(), "south");
-        long id = done().people().addGatewayKey(north.id(), "shed", "hash-1", T0);
+        long id = done().keys().addGatewayKey(north.id(), "shed", "hash-1", T0);
 
-        assertThat(done().people().revokeGatewayKey(south.id(), id, T0)).isFalse();
-        assertThat(seen().people().gatewayKey("hash-1")).isPresent();
-        assertThat(seen().people().gatewayKeys(south.id())).isEmpty();
-        assertThat(done().people().revokeGatewayKey(north.id(), id, T0)).isTrue();
-        assertThat(done().people().revokeGatewayKey(north.id(), id, T0.plusSeconds(1)))
+        assertThat(done().keys().revokeGatewayKey(south.id(), id, T0)).isFalse();
+        assertThat(seen().keys().gatewayKey("hash-1")).isPresent();
+        assertThat(seen().keys().gatewayKeys(south.id())).isEmpty();
+        assertThat(done().keys().revokeGatewayKey(north.id(), id, T0)).isTrue();
+        assertThat(done().keys().revokeGatewayKey(north.id(), id, T0.plusSeconds(1)))
                 .isFalse();
-        assertThat(seen().people().gatewayKeys(north.id()))
+        assertThat(seen().keys().gatewayKeys(north.id()))
                 .extracting(GatewayKey::revokedAt)
                 .containsExactly(T0);
     }
@@ -160,31 +159,31 @@ interface PeopleContract extends StoreUnderTest {
     default void an_access_token_is_found_by_its_hash_until_it_is_revoked() {
         Site north = Samples.site(store(), "north");
         Site south = Samples.site(store(), "south");
-        long id = done().people().addAccessToken(north.id(), "export", Role.OPERATOR, "hash-1", T0);
+        long id = done().keys().addAccessToken(north.id(), "export", Role.OPERATOR, "hash-1", T0);
 
-        assertThat(seen().people().accessToken("hash-1"))
+        assertThat(seen().keys().accessToken("hash-1"))
                 .contains(new AccessToken(id, north.id(), "export", Role.OPERATOR, T0, null));
-        assertThat(done().people().revokeAccessToken(south.id(), id, T0)).isFalse();
-        assertThat(done().people().revokeAccessToken(north.id(), id, T0.plusSeconds(1)))
+        assertThat(done().keys().revokeAccessToken(south.id(), id, T0)).isFalse();
+        assertThat(done().keys().revokeAccessToken(north.id(), id, T0.plusSeconds(1)))
                 .isTrue();
-        assertThat(done().people().revokeAccessToken(north.id(), id, T0.plusSeconds(2)))
+        assertThat(done().keys().revokeAccessToken(north.id(), id, T0.plusSeconds(2)))
                 .isFalse();
-        assertThat(seen().people().accessToken("hash-1")).isEmpty();
-        assertThat(seen().people().accessTokens(north.id()))
+        assertThat(seen().keys().accessToken("hash-1")).isEmpty();
+        assertThat(seen().keys().accessTokens(north.id()))
                 .containsExactly(new AccessToken(id, north.id(), "export", Role.OPERATOR, T0, T0.plusSeconds(1)));
-        assertThat(seen().people().accessTokens(south.id())).isEmpty();
+        assertThat(seen().keys().accessTokens(south.id())).isEmpty();
     }
 
     @Test
     default void two_keys_never_share_a_hash() {
         Site north = Samples.site(store(), "north");
         Site south = Samples.site(store(), "south");
-        done().people().addGatewayKey(north.id(), "shed", "hash-1", T0);
+        done().keys().addGatewayKey(north.id(), "shed", "hash-1", T0);
 
-        assertThatThrownBy(() -> done().people().addGatewayKey(south.id(), "barn", "hash-1", T0))
+        assertThatThrownBy(() -> done().keys().addGatewayKey(south.id(), "barn", "hash-1", T0))
                 .isInstanceOf(RuntimeException.class);
 
-        assertThat(seen().people().gatewayKeys(south.id())).isEmpty();
+        assertThat(seen().keys().gatewayKeys(south.id())).isEmpty();
     }
 
     @Test

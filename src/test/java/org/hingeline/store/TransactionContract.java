@@ -17,9 +17,9 @@ import org.hingeline.alert.Limit;
 import org.hingeline.alert.Observation;
 import org.hingeline.alert.Phase;
 import org.hingeline.hatchery.Site;
-import org.hingeline.monitor.AlertBook.Watched;
 import org.hingeline.monitor.Books;
 import org.hingeline.monitor.JournalBook.Entry;
+import org.hingeline.monitor.LimitBook.Watched;
 import org.junit.jupiter.api.Test;
 
 interface TransactionContract extends StoreUnderTest {
@@ -83,18 +83,18 @@ interface TransactionContract extends StoreUnderTest {
     @Test
     default void no_change_of_a_watched_limit_is_lost_between_writers() throws Exception {
         Samples.Place north = Samples.place(store(), "north");
-        Limit limit = done().alerts().saveLimit(LimitContract.limit(north.tank(), "omega", 1), T0);
+        Limit limit = done().limits().saveLimit(LimitContract.limit(north.tank(), "omega", 1), T0);
 
         together(4, 10, books -> {
             Watched watched =
-                    books.alerts().watchedForUpdate(List.of(north.tank().id())).get(0);
+                    books.limits().watchedForUpdate(List.of(north.tank().id())).get(0);
             Observation latest = watched.state().latest();
             double count = latest == null ? 0 : latest.value();
             Observation next = new Observation(T0, count + 1, 0);
-            books.alerts().saveState(limit.id(), new AlertState(Phase.NORMAL, null, null, next), null);
+            books.limits().saveState(limit.id(), new AlertState(Phase.NORMAL, null, null, next), null);
         });
 
-        assertThat(done().alerts().watchedForUpdate(List.of(north.tank().id())))
+        assertThat(done().limits().watchedForUpdate(List.of(north.tank().id())))
                 .extracting(watched -> watched.state().latest().value())
                 .containsExactly(40.0);
     }
