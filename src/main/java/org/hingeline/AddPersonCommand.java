@@ -49,18 +49,23 @@ final class AddPersonCommand implements Runnable {
 
     @Option(
             names = "--known",
-            description = "somebody who signs in already gets a role at this site too; asks for no password")
+            description =
+                    "somebody who signs in already gets a role at this site too; asks for no password, and sets one"
+                            + " only if --password-file is given")
     private boolean known;
 
     @Override
     public void run() {
         Settings settings = config.read();
-        String password = known ? "" : passwordFile != null ? PasswordFile.read(passwordFile) : ask();
+        String password = passwordFile != null ? PasswordFile.read(passwordFile) : known ? "" : ask();
         try (Database database = Databases.open(settings)) {
             Site found = site(database, site);
             Accounts accounts = Service.accounts(settings, Hingeline.CLOCK, database, new SecureRandom());
             if (known) {
                 accounts.addToSite(found, name, role, "command line");
+                if (passwordFile != null) {
+                    accounts.setPassword(found, name, password, "command line");
+                }
             } else {
                 accounts.savePerson(
                         found, name, displayName == null ? name : displayName, password, role, "command line");

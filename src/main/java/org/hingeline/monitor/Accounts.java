@@ -144,16 +144,26 @@ public final class Accounts {
         Instant now = clock.instant();
         storage.writeOnly(books -> {
             Optional<Person> known = books.people().personByName(name);
-            if (known.isPresent()
-                    && !belongsOnlyTo(
-                            site, books.people().memberships(known.get().id()))) {
-                throw new FieldFaultsException("name", "name \"" + name + "\" is taken; choose another");
-            }
+            known.ifPresent(person -> checkIsOnlyOf(site, name, books.people().memberships(person.id())));
             long id = books.people().savePerson(name, displayName, hash, now);
             books.people().removeSessionsOf(id);
             books.people().saveMembership(id, site.id(), role);
             journal(books, now, site, who, "person-saved", name, "role " + role.code());
         });
+    }
+
+    /** A person of another site too is not for this site to change: their password opens that site as well. */
+    private static void checkIsOnlyOf(Site site, String name, List<Membership> memberships) {
+        if (memberships.stream().noneMatch(m -> m.site().id() == site.id())) {
+            throw new FieldFaultsException("name", "name \"" + name + "\" is taken; choose another");
+        }
+        if (memberships.size() > 1) {
+            throw new FieldFaultsException(
+                    "name",
+                    "\"" + name
+                            + "\" signs in at other sites too; only whoever runs the service can change their password"
+                            + " or role, with add-person --known");
+        }
     }
 
     /**
@@ -172,10 +182,25 @@ public final class Accounts {
         });
     }
 
-    /** A person of another site too is not for this site to change: their password opens that site as well. */
-    private static boolean belongsOnlyTo(Site site, List<Membership> memberships) {
-        return !memberships.isEmpty()
-                && memberships.stream().allMatch(m -> m.site().id() == site.id());
+    /**
+     * Gives somebody who signs in already another password, at all their sites; only for whoever runs the service.
+     *
+     * @throws FieldFaultsException when nobody has this name or the password cannot be taken
+     */
+    public void setPassword(Site site, String name, String password, String who) {
+        FieldFaults faults = new FieldFaults();
+        checkPassword(password, faults);
+        faults.throwIfAny();
+        String hash = passwords.hash(password);
+        Instant now = clock.instant();
+        storage.writeOnly(books -> {
+            Person known = books.people()
+                    .personByName(name)
+                    .orElseThrow(() -> new FieldFaultsException("name", "nobody signs in as \"" + name + "\""));
+            books.people().savePerson(name, known.displayName(), hash, now);
+            books.people().removeSessionsOf(known.id());
+            journal(books, now, site, who, "password-set", name, "");
+        });
     }
 
     private void checkPassword(String password, FieldFaults faults) {

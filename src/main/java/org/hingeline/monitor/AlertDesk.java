@@ -49,39 +49,48 @@ public final class AlertDesk {
             boolean tell,
             Instant now) {
         AlertState state = transition.state();
+        Observation latest = state.latest();
+        Instant valueAt = latest == null ? now : latest.at();
         return switch (transition.effect()) {
             case NOTHING, ACKNOWLEDGE -> alertId;
             case RAISE -> {
                 long id = books.alerts().open(newAlert(siteId, point, limit, state, now));
-                tell(tell, books, siteId, id, limit, MessageDesk.Kind.RAISED, now);
+                tell(tell, books, siteId, id, limit, MessageDesk.Kind.RAISED, valueAt, now);
                 yield id;
             }
             case RAISE_AGAIN -> {
                 long id = Objects.requireNonNull(alertId);
-                Observation latest = latest(state);
-                books.alerts().reopen(id, since(limit, state), now, latest.value(), latest.standardUncertainty());
-                tell(tell, books, siteId, id, limit, MessageDesk.Kind.RAISED_AGAIN, now);
+                Observation out = latest(state);
+                books.alerts().reopen(id, since(limit, state), now, out.value(), out.standardUncertainty());
+                tell(tell, books, siteId, id, limit, MessageDesk.Kind.RAISED_AGAIN, valueAt, now);
                 yield id;
             }
             case RETURN -> {
                 long id = Objects.requireNonNull(alertId);
                 books.alerts().returned(id, now);
-                tell(tell, books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, now);
+                tell(tell, books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, valueAt, now);
                 yield id;
             }
             case CLOSE -> {
                 long id = Objects.requireNonNull(alertId);
                 books.alerts().close(id, now);
-                tell(tell, books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, now);
+                tell(tell, books, siteId, id, limit, MessageDesk.Kind.BACK_TO_NORMAL, valueAt, now);
                 yield null;
             }
         };
     }
 
     private void tell(
-            boolean tell, Books books, long siteId, long id, Limit limit, MessageDesk.Kind kind, Instant now) {
+            boolean tell,
+            Books books,
+            long siteId,
+            long id,
+            Limit limit,
+            MessageDesk.Kind kind,
+            Instant valueAt,
+            Instant now) {
         if (tell) {
-            messages.alert(books, siteId, id, limit, kind, now);
+            messages.alert(books, siteId, id, limit, kind, valueAt, now);
         }
     }
 

@@ -48,15 +48,14 @@ public final class MessageDesk {
                 .orElse(message.subject());
     }
 
-    void alert(Books books, long siteId, long alertId, Limit limit, Kind kind, Instant now) {
+    /** @param valueAt time of the value that this tells of; one batch may bring several turns of one alert */
+    void alert(Books books, long siteId, long alertId, Limit limit, Kind kind, Instant valueAt, Instant now) {
         Alert alert = books.alerts().alert(siteId, alertId).orElseThrow();
         AlertNews news = news(books, siteId, alert, limit, now);
         AlertText text = text(news, kind);
-        // what was said before tells two messages of one kind and moment apart: both can stand in one batch of readings
-        int before = books.outbox().messagesOf(alertId).size();
         for (Subscriber subscriber : books.people().subscribers(siteId)) {
             if (subscriber.active() && alert.priority().atLeast(subscriber.minPriority())) {
-                books.outbox().add(message(siteId, alert, kind, text, subscriber, before, now));
+                books.outbox().add(message(siteId, alert, kind, text, subscriber, valueAt, now));
             }
         }
     }
@@ -81,9 +80,9 @@ public final class MessageDesk {
     }
 
     private OutboxBook.Message message(
-            long siteId, Alert alert, Kind kind, AlertText text, Subscriber subscriber, int before, Instant now) {
-        String key = "alert-" + alert.id() + "-" + kind.code + "-" + now.toEpochMilli() + "-" + before + "-"
-                + subscriber.id() + "-" + installation;
+            long siteId, Alert alert, Kind kind, AlertText text, Subscriber subscriber, Instant valueAt, Instant now) {
+        String key = "alert-" + alert.id() + "-" + kind.code + "-" + now.toEpochMilli() + "-" + valueAt.toEpochMilli()
+                + "-" + subscriber.id() + "-" + installation;
         return new OutboxBook.Message(
                 0,
                 siteId,

@@ -18,8 +18,13 @@ public interface ReadingBook {
     /** A row that was not taken, kept for review. */
     record RefusedRow(long siteId, String gateway, Instant receivedAt, int index, String row, String detail) {}
 
-    /** Readings of one sensor with from ≤ at ≤ to, oldest first. */
-    List<StoredReading> between(long sensorId, Instant from, Instant to);
+    /** Readings of one sensor with from ≤ at ≤ to, oldest first, at most so many. */
+    List<StoredReading> between(long sensorId, Instant from, Instant to, int most);
+
+    /** All readings of one sensor with from ≤ at ≤ to, oldest first. */
+    default List<StoredReading> between(long sensorId, Instant from, Instant to) {
+        return between(sensorId, from, to, Integer.MAX_VALUE);
+    }
 
     /** The newest usable reading of one sensor with from ≤ at &lt; before. */
     Optional<StoredReading> newestBefore(long sensorId, Instant from, Instant before);

@@ -5,6 +5,7 @@ import java.time.Instant;
 import java.time.InstantSource;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.LinkedList;
 import java.util.List;
 import java.util.Optional;
 import org.hingeline.alert.Limit;
@@ -18,7 +19,7 @@ import org.hingeline.monitor.ReadingBook.StoredReading;
 
 /** What the pages and the API show of the water: how each point stands now, and its history. */
 public final class StatusBoard {
-    /** States answered to one question for history. */
+    /** Rows answered to one question for history. */
     private static final int MOST_STATES = 10_000;
 
     private final Storage storage;
@@ -92,28 +93,60 @@ public final class StatusBoard {
      * @throws FieldFaultsException when that would be more than one answer can hold
      */
     public List<WaterState> history(Point point, Instant from, Instant to, Duration step) {
-        if (!step.isZero() && Duration.between(from, to).dividedBy(step) > MOST_STATES) {
-            throw new FieldFaultsException(
-                    "step",
-                    "step " + step + " makes more than " + MOST_STATES
-                            + " states; take a longer step or a shorter span");
-        }
+        requireFew(from, to, step);
         List<WaterState> states = storage.read(books -> step.isZero()
                 ? books.water().between(point.id(), from, to, MOST_STATES + 1)
                 : books.water().newestOfEach(point.id(), from, to, step));
         if (states.size() > MOST_STATES) {
-            throw new FieldFaultsException(
-                    "step", "the span holds more than " + MOST_STATES + " states; add step, for example step=PT10M");
+            throw tooMany("states");
         }
         return states;
     }
 
-    /** Readings of one quantity at a point, by sensor, oldest first. */
-    public List<SensorReadings> readings(Point point, Quantity quantity, Instant from, Instant to) {
+    /**
+     * Readings of one quantity at a point, by sensor, oldest first; of each step only the newest usable one.
+     *
+     * @param step zero for every reading, usable or not
+     * @throws FieldFaultsException when that would be more than one answer can hold
+     */
+    public List<SensorReadings> readings(Point point, Quantity quantity, Instant from, Instant to, Duration step) {
+        requireFew(from, to, step);
         return storage.read(books -> books.place().sensorsOf(point.id()).stream()
                 .filter(sensor -> sensor.quantity() == quantity)
-                .map(sensor -> new SensorReadings(sensor, books.readings().between(sensor.id(), from, to)))
+                .map(sensor -> new SensorReadings(sensor, readings(books, sensor, from, to, step)))
                 .toList());
+    }
+
+    private static List<StoredReading> readings(Books books, Sensor sensor, Instant from, Instant to, Duration step) {
+        if (step.isZero()) {
+            List<StoredReading> all = books.readings().between(sensor.id(), from, to, MOST_STATES + 1);
+            if (all.size() > MOST_STATES) {
+                throw tooMany("readings");
+            }
+            return all;
+        }
+        LinkedList<StoredReading> newest = new LinkedList<>();
+        Instant before = to.plusMillis(1);
+        Optional<StoredReading> next = books.readings().newestBefore(sensor.id(), from, before);
+        while (next.isPresent()) {
+            newest.addFirst(next.get());
+            long slot = Math.floorDiv(next.get().at().toEpochMilli(), step.toMillis());
+            next = books.readings().newestBefore(sensor.id(), from, Instant.ofEpochMilli(slot * step.toMillis()));
+        }
+        return newest;
+    }
+
+    private static void requireFew(Instant from, Instant to, Duration step) {
+        if (!step.isZero() && Duration.between(from, to).dividedBy(step) > MOST_STATES) {
+            throw new FieldFaultsException(
+                    "step",
+                    "step " + step + " makes more than " + MOST_STATES + " rows; take a longer step or a shorter span");
+        }
+    }
+
+    private static FieldFaultsException tooMany(String what) {
+        return new FieldFaultsException(
+                "step", "the span holds more than " + MOST_STATES + " " + what + "; add step, for example step=PT10M");
     }
 
     /** Readings of one sensor. */

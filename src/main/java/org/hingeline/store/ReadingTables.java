@@ -25,11 +25,11 @@ final class ReadingTables implements ReadingBook {
     }
 
     @Override
-    public List<StoredReading> between(long sensorId, Instant from, Instant to) {
+    public List<StoredReading> between(long sensorId, Instant from, Instant to, int most) {
         return Sql.list(handle, """
                 SELECT sensor_id, at, reading_value, flag FROM reading
-                WHERE sensor_id = ? AND at >= ? AND at <= ? ORDER BY sensor_id, at
-                """, ReadingTables::reading, sensorId, from, to);
+                WHERE sensor_id = ? AND at >= ? AND at <= ? ORDER BY sensor_id, at LIMIT ?
+                """, ReadingTables::reading, sensorId, from, to, most);
     }
 
     @Override
@@ -47,7 +47,7 @@ final class ReadingTables implements ReadingBook {
         return handle.createQuery("""
                         SELECT at FROM reading
                         WHERE sensor_id = :sensor AND at > :after AND at <= :to AND flag NOT IN (4, 9)
-                        ORDER BY at LIMIT 1
+                        ORDER BY sensor_id, at LIMIT 1
                         """)
                 .bind("sensor", sensorId)
                 .bind("after", after)

@@ -65,12 +65,14 @@ final class AlertPages {
                 point.code(),
                 point.name(),
                 Words.alert(alert, now, zone)
-                        + (alert.returnedAt() != null && closed == null ? "; back within the limit" : ""),
+                        + (alert.returnedAt() != null && closed == null
+                                ? "; back within the limit, listed until somebody acknowledges it"
+                                : ""),
                 alert.priority().code(),
                 Moment.of(alert.raisedAt(), now, zone),
                 PathPoints.acknowledged(alert, now, zone),
                 closed == null ? Moment.never() : Moment.of(closed, now, zone),
-                alert.action(),
+                alert.returnedAt() == null ? alert.action() : "",
                 board.messagesOf(alert).stream()
                         .map(message -> told(message, now, zone))
                         .toList());

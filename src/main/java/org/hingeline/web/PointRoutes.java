@@ -79,7 +79,7 @@ final class PointRoutes {
         Instant to = Times.query(ctx, "to", clock.instant());
         Instant from = Times.query(ctx, "from", to.minus(HISTORY));
         Times.requireOrder(from, to);
-        List<Map<String, Object>> rows = board.readings(status.point(), quantity, from, to).stream()
+        List<Map<String, Object>> rows = board.readings(status.point(), quantity, from, to, Times.step(ctx)).stream()
                 .flatMap(ofSensor -> ofSensor.readings().stream().map(reading -> {
                     Map<String, Object> json = new LinkedHashMap<>();
                     json.put("sensor", ofSensor.sensor().code());

@@ -101,24 +101,11 @@ final class StatusPages {
     }
 
     private List<Level> levels(PointStatus intake, Instant from, Instant now) {
-        return board.readings(intake.point(), Quantity.LEVEL, from, now).stream()
+        return board.readings(intake.point(), Quantity.LEVEL, from, now, STRIP_STEP).stream()
                 .findFirst()
-                .map(ofSensor -> thinned(ofSensor.readings().stream()
+                .map(ofSensor -> ofSensor.readings().stream()
                         .map(reading -> new Level(reading.at(), reading.value()))
-                        .toList()))
+                        .toList())
                 .orElse(List.of());
-    }
-
-    /** About one level in ten minutes is enough for a drawing this wide. */
-    private static List<Level> thinned(List<Level> all) {
-        List<Level> kept = new ArrayList<>();
-        Instant next = Instant.MIN;
-        for (Level level : all) {
-            if (!level.at().isBefore(next)) {
-                kept.add(level);
-                next = level.at().plus(STRIP_STEP);
-            }
-        }
-        return kept;
     }
 }

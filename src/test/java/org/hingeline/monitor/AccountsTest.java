@@ -94,15 +94,21 @@ class AccountsTest {
     }
 
     @Test
-    void a_person_of_two_sites_is_changed_by_neither_alone() {
+    void a_person_of_two_sites_is_changed_by_neither_alone_but_by_whoever_runs_the_service() {
         Site other = hatchery.otherSite();
-        hatchery.database.writeOnly(books -> books.people()
-                .saveMembership(books.people().personByName("ana").orElseThrow().id(), other.id(), Role.MANAGER));
+        accounts.addToSite(other, "ana", Role.MANAGER, "command line");
 
         assertThatThrownBy(() ->
                         accounts.savePerson(hatchery.site, "ana", "Ana", "stolen tide 19", Role.VIEWER, "manager"))
-                .isInstanceOf(FieldFaultsException.class);
-        welcome(PASSWORD);
+                .isInstanceOf(FieldFaultsException.class)
+                .hasMessageContaining("other sites too");
+        String token = welcome(PASSWORD).token();
+
+        accounts.setPassword(hatchery.site, "ana", "another tide 18", "command line");
+        assertThat(accounts.bySession(token)).isEmpty();
+        assertThat(accounts.signIn("ana", PASSWORD)).isEqualTo(new Wrong());
+        Caller caller = accounts.bySession(welcome("another tide 18").token()).orElseThrow();
+        assertThat(caller.siteCodes()).contains("cove", "other");
     }
 
     @Test

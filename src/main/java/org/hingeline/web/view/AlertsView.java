@@ -16,7 +16,7 @@ public record AlertsView(List<Entry> open, List<Entry> ended) {
      * @param raised when it began
      * @param acknowledged who took it on, when, and their note: "Ana Reis at 03:05: valve closed"; empty while nobody has
      * @param cleared when it ended; {@link Moment#never()} while open
-     * @param action what to do
+     * @param action what to do; empty once the water is back
      * @param told who was told what
      */
     public record Entry(

@@ -82,7 +82,7 @@ public record StatusView(@Nullable TideStrip strip, List<PathPoint> path) {
     }
 
     /** What is to be done now, most urgent first; the same at several points is said once. */
-    public List<ToDo> toDo() {
+    public List<ToDo> calls() {
         Map<String, List<PathPoint>> byAction = path.stream()
                 .filter(p -> !p.action().isEmpty())
                 .sorted(Comparator.comparingInt(PathPoint::urgency).reversed())

@@ -81,11 +81,11 @@ class ViewWordsTest {
         StatusView status = new StatusView(
                 null,
                 List.of(
-                        toDo("A", "Look.", 2),
-                        toDo("B", "Close the valve.", 3),
-                        toDo("C", "Look.", 2),
-                        toDo("D", "", 0)));
-        assertThat(status.toDo())
+                        callOf("A", "Look.", 2),
+                        callOf("B", "Close the valve.", 3),
+                        callOf("C", "Look.", 2),
+                        callOf("D", "", 0)));
+        assertThat(status.calls())
                 .extracting(
                         StatusView.ToDo::action,
                         todo -> todo.points().stream().map(PathPoint::name).toList())
@@ -194,7 +194,7 @@ class ViewWordsTest {
                 : point(name, Standing.valueOf(standing), "", "", true, 0);
     }
 
-    private static PathPoint toDo(String name, String action, int urgency) {
+    private static PathPoint callOf(String name, String action, int urgency) {
         return point(name, Standing.SHORT, "1.50", action, true, urgency);
     }
 
