@@ -29,8 +29,8 @@ final class DemoCommand implements Runnable {
     @Override
     public void run() {
         Settings settings = Settings.defaults().withPortAndData(port, data);
-        Service service = Service.start(settings, Hingeline.CLOCK);
-        try {
+        try (OrderlyEnd end = new OrderlyEnd()) {
+            Service service = end.closes(Service.start(settings, Hingeline.CLOCK));
             DemoAccess access = DemoAccess.of(service, data.resolve("demo-access.properties"));
             URI address = URI.create("http://127.0.0.1:" + service.port());
             DemoGateway gateway = new DemoGateway(
@@ -40,6 +40,7 @@ final class DemoCommand implements Runnable {
                     SEED,
                     Hingeline.CLOCK,
                     data.resolve("gateway-memory"));
+            end.closes(gateway);
             gateway.start();
             spec.commandLine()
                     .getOut()
@@ -60,10 +61,7 @@ final class DemoCommand implements Runnable {
                             access.gatewayKey(),
                             access.accessToken());
             spec.commandLine().getOut().flush();
-            ServeCommand.waitForEnd(gateway, service);
-        } catch (RuntimeException e) {
-            service.close();
-            throw e;
+            end.await();
         }
     }
 }

@@ -1,6 +1,5 @@
 package org.hingeline;
 
-import java.util.concurrent.CountDownLatch;
 import org.hingeline.config.Settings;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
@@ -17,43 +16,16 @@ final class ServeCommand implements Runnable {
     @Override
     public void run() {
         Settings settings = config.read();
-        Service service = Service.start(settings, Hingeline.CLOCK);
-        LOG.info("listening on {} port {}", settings.server().host(), service.port());
-        if (service.accounts().nobodyYet()) {
-            LOG.warn("Nobody can sign in yet. Stop the service and make a site and its first manager:\n"
-                    + "  java -jar hingeline.jar add-site --code bay --name \"Bay hatchery\" --zone Europe/Lisbon\n"
-                    + "  java -jar hingeline.jar add-person --site bay --name ana --role manager\n"
-                    + "then start it again. add-person asks for the password.");
-        }
-        waitForEnd(service);
-    }
-
-    /** Until SIGTERM or Ctrl-C; then closes in order before the process ends. */
-    static void waitForEnd(AutoCloseable... parts) {
-        CountDownLatch asked = new CountDownLatch(1);
-        CountDownLatch closed = new CountDownLatch(1);
-        Runtime.getRuntime()
-                .addShutdownHook(new Thread(
-                        () -> {
-                            asked.countDown();
-                            try {
-                                closed.await();
-                            } catch (InterruptedException e) {
-                                Thread.currentThread().interrupt();
-                            }
-                        },
-                        "shutdown"));
-        try {
-            asked.await();
-            LOG.info("stopping");
-            for (AutoCloseable part : parts) {
-                part.close();
+        try (OrderlyEnd end = new OrderlyEnd()) {
+            Service service = end.closes(Service.start(settings, Hingeline.CLOCK));
+            LOG.info("listening on {} port {}", settings.server().host(), service.port());
+            if (service.accounts().nobodyYet()) {
+                LOG.warn("Nobody can sign in yet. Stop the service and make a site and its first manager:\n"
+                        + "  java -jar hingeline.jar add-site --code bay --name \"Bay hatchery\" --zone Europe/Lisbon\n"
+                        + "  java -jar hingeline.jar add-person --site bay --name ana --role manager\n"
+                        + "then start it again. add-person asks for the password.");
             }
-            LOG.info("stopped");
-        } catch (Exception e) {
-            LOG.error("the service did not stop well", e);
-        } finally {
-            closed.countDown();
+            end.await();
         }
     }
 }

@@ -232,6 +232,7 @@ public final class KillRun {
     private void stopInOrder(Place place, ServiceProcess service) throws SQLException, IOException {
         service.address();
         service.stop();
+        service.troubles().forEach(line -> promises.surprise("log: " + line));
         orderlyStops++;
         if (!Files.exists(place.database().resolveSibling("clean-stop"))) {
             promises.surprise("no mark of an orderly end after a stop");

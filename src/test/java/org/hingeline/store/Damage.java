@@ -22,10 +22,10 @@ import org.h2.value.ValueBigint;
  * Does to a database file what a crash can do to it: changes a table or one of its indexes without the other. It goes
  * below SQL, to the engine's own structures, and leaves the change in the file.
  */
-final class Damage {
+public final class Damage {
 
     /** What is done to the first row that the index knows. */
-    enum Kind {
+    public enum Kind {
         /** The index loses it. */
         LOST_FROM_INDEX,
         /** The table loses it. */
@@ -62,7 +62,7 @@ final class Damage {
     }
 
     /** Damages the primary key of a table, which must be one of several columns. */
-    static void toPrimaryKey(Path folder, Kind kind, String table) throws SQLException {
+    public static void toPrimaryKey(Path folder, Kind kind, String table) throws SQLException {
         String name = indexesOf(folder, table).stream()
                 .filter(index -> index.startsWith("PRIMARY_KEY"))
                 .findFirst()
