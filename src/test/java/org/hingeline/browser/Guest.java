@@ -6,11 +6,12 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.function.BooleanSupplier;
+import java.util.function.Supplier;
 import java.util.stream.Collectors;
 import org.hingeline.RunningService;
 import org.openqa.selenium.By;
-import org.openqa.selenium.StaleElementReferenceException;
 import org.openqa.selenium.WebDriver;
+import org.openqa.selenium.WebDriverException;
 import org.openqa.selenium.WebElement;
 import org.openqa.selenium.logging.LogType;
 import org.openqa.selenium.support.ui.WebDriverWait;
@@ -67,7 +68,20 @@ final class Guest {
     }
 
     String text(String css) {
-        return element(css).getText().replaceAll("\\s+", " ");
+        return steadily(() -> element(css).getText()).replaceAll("\\s+", " ");
+    }
+
+    /** A live page may replace a part just while it is looked at; then it is looked at again. */
+    private static <T> T steadily(Supplier<T> look) {
+        for (int more = 5; ; more--) {
+            try {
+                return look.get();
+            } catch (WebDriverException e) {
+                if (more == 0) {
+                    throw e;
+                }
+            }
+        }
     }
 
     String html() {
@@ -101,12 +115,15 @@ final class Guest {
     }
 
     Guest pressIn(String css, String words) {
-        element(css).findElements(By.cssSelector("button, a, summary")).stream()
-                .filter(WebElement::isDisplayed)
-                .filter(e -> e.getText().strip().startsWith(words))
-                .findFirst()
-                .orElseThrow(() -> new AssertionError("nothing to press called " + words + " in: " + text(css)))
-                .click();
+        steadily(() -> {
+            element(css).findElements(By.cssSelector("button, a, summary")).stream()
+                    .filter(WebElement::isDisplayed)
+                    .filter(e -> e.getText().strip().startsWith(words))
+                    .findFirst()
+                    .orElseThrow(() -> new AssertionError("nothing to press called " + words + " in: " + text(css)))
+                    .click();
+            return true;
+        });
         return this;
     }
 
@@ -128,7 +145,7 @@ final class Guest {
 
     Guest until(String what, BooleanSupplier comes) {
         new WebDriverWait(driver, PATIENCE)
-                .ignoring(StaleElementReferenceException.class)
+                .ignoring(WebDriverException.class)
                 .withMessage(() -> what + " did not come; the page says: " + text())
                 .until(d -> comes.getAsBoolean());
         return this;
