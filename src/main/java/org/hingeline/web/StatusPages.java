@@ -17,6 +17,7 @@ import org.hingeline.monitor.PointStatus;
 import org.hingeline.monitor.StatusBoard;
 import org.hingeline.monitor.WaterNumbers;
 import org.hingeline.monitor.WaterState;
+import org.hingeline.web.view.PathPoint;
 import org.hingeline.web.view.Standing;
 import org.hingeline.web.view.StatusView;
 import org.hingeline.web.view.TideStrip;
@@ -55,9 +56,32 @@ final class StatusPages {
                         .findFirst()
                         .map(intake -> strip(intake, site.zone()))
                         .orElse(null),
-                points.stream()
-                        .map(status -> PathPoints.of(status, site.zone()))
-                        .toList());
+                path(points, site.zone()));
+    }
+
+    /** The points in order; one that is not fed by the line it hangs on says what feeds it. */
+    private static List<PathPoint> path(List<PointStatus> points, ZoneId zone) {
+        List<PathPoint> path = new ArrayList<>();
+        String line = "";
+        for (PointStatus status : points) {
+            PathPoint point = PathPoints.of(status, zone);
+            String feed = status.point().feedsFrom();
+            path.add(
+                    feed == null || feed.equals(line) ? point : point.withNote("Fed from " + name(points, feed) + "."));
+            if (point.place().onTheLine()) {
+                line = point.code();
+            }
+        }
+        return path;
+    }
+
+    private static String name(List<PointStatus> points, String code) {
+        return points.stream()
+                .map(status -> status.point())
+                .filter(point -> point.code().equals(code))
+                .map(point -> point.name())
+                .findFirst()
+                .orElse(code);
     }
 
     private TideStrip strip(PointStatus intake, ZoneId zone) {

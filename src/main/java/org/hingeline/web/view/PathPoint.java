@@ -1,6 +1,7 @@
 package org.hingeline.web.view;
 
 import java.util.List;
+import java.util.stream.Stream;
 
 /**
  * One point on the water's way, in words.
@@ -42,5 +43,26 @@ public record PathPoint(
     public PathPoint {
         notes = List.copyOf(notes);
         alerts = List.copyOf(alerts);
+    }
+
+    /** The same with one more note behind the others. */
+    public PathPoint withNote(String note) {
+        return new PathPoint(
+                code,
+                name,
+                place,
+                standing,
+                verdict,
+                omega,
+                plusMinus,
+                against,
+                measured,
+                Stream.concat(notes.stream(), Stream.of(note)).toList(),
+                action,
+                batch,
+                alerts,
+                dosable,
+                judged,
+                urgency);
     }
 }
