@@ -27,6 +27,9 @@ public final class Accounts {
         /** Name or password do not match. */
         record Wrong() implements SignIn {}
 
+        /** Too many attempts at once; this one was not looked at. */
+        record Busy() implements SignIn {}
+
         /** Too many failures; no attempt is looked at before this time. */
         record Locked(Instant until) implements SignIn {}
     }
@@ -59,27 +62,43 @@ public final class Accounts {
             }
         }
         // an unknown name takes as long as a wrong password, so that nobody can find out which names exist
-        boolean right = password.length() <= MAX_PASSWORD
-                && passwords.matches(password, found.map(Person::passwordHash).orElse(nobodysHash));
+        Optional<Boolean> right = password.length() > MAX_PASSWORD
+                ? Optional.of(false)
+                : passwords.matchesSoon(
+                        password, found.map(Person::passwordHash).orElse(nobodysHash));
+        if (right.isEmpty()) {
+            return new SignIn.Busy();
+        }
         if (found.isEmpty()) {
             return new SignIn.Wrong();
         }
-        return right ? welcome(found.get(), now) : refuse(found.get().id(), now);
+        return right.get() ? welcome(found.get().id(), now) : refuse(found.get().id(), now);
     }
 
-    private SignIn welcome(Person person, Instant now) {
+    private SignIn welcome(long personId, Instant now) {
         String token = secrets.make("");
         String csrf = secrets.make("");
-        storage.writeOnly(books -> {
-            books.people().saveSignInFailures(person.id(), 0, null);
-            books.people().addSession(Secrets.hash(token), person.id(), csrf, now, now.plus(rules.session()));
+        return storage.write(books -> {
+            Person person = books.people().lockPerson(personId).orElseThrow();
+            Instant until = person.lockedUntil();
+            if (until != null && until.isAfter(now)) {
+                return new SignIn.Locked(until);
+            }
+            books.people().saveSignInFailures(personId, 0, null);
+            books.people().addSession(Secrets.hash(token), personId, csrf, now, now.plus(rules.session()));
+            return new SignIn.Welcome(token, rules.session());
         });
-        return new SignIn.Welcome(token, rules.session());
     }
 
     private SignIn refuse(long personId, Instant now) {
         return storage.write(books -> {
-            int failures = books.people().person(personId).orElseThrow().failures() + 1;
+            // looked at again behind the hashing: attempts made at the same time must not undo a lock
+            Person person = books.people().lockPerson(personId).orElseThrow();
+            Instant standing = person.lockedUntil();
+            if (standing != null && standing.isAfter(now)) {
+                return new SignIn.Locked(standing);
+            }
+            int failures = person.failures() + 1;
             boolean lock = failures >= rules.lockAfterFailures();
             Instant until = lock ? now.plus(rules.lock()) : null;
             books.people().saveSignInFailures(personId, lock ? 0 : failures, until);

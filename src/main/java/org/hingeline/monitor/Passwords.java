@@ -4,6 +4,7 @@ import java.nio.charset.StandardCharsets;
 import java.security.MessageDigest;
 import java.security.SecureRandom;
 import java.util.Base64;
+import java.util.Optional;
 import java.util.concurrent.Semaphore;
 import org.bouncycastle.crypto.generators.Argon2BytesGenerator;
 import org.bouncycastle.crypto.params.Argon2Parameters;
@@ -21,7 +22,11 @@ public final class Passwords {
     /** Attempts hashed at the same time, so that a flood of sign-ins cannot take all memory and cores. */
     private static final int AT_ONCE = 2;
 
+    /** Attempts at the same time, hashed or waiting to be: fewer than the server has threads. */
+    private static final int WAITING = 12;
+
     private final SecureRandom random;
+    private final Semaphore waiting = new Semaphore(WAITING);
     private final Semaphore slots = new Semaphore(AT_ONCE, true);
 
     public Passwords(SecureRandom random) {
@@ -46,6 +51,22 @@ public final class Passwords {
         byte[] salt = Base64.getDecoder().decode(parts[4]);
         byte[] derived = derive(password, salt, Integer.parseInt(cost[1]), Integer.parseInt(cost[3]));
         return MessageDigest.isEqual(derived, Base64.getDecoder().decode(parts[5]));
+    }
+
+    /**
+     * The same, unless so many wait already that it would take long.
+     *
+     * @return empty when the password was not looked at
+     */
+    public Optional<Boolean> matchesSoon(String password, String hash) {
+        if (!waiting.tryAcquire()) {
+            return Optional.empty();
+        }
+        try {
+            return Optional.of(matches(password, hash));
+        } finally {
+            waiting.release();
+        }
     }
 
     private byte[] derive(String password, byte[] salt, int memoryKib, int passes) {

@@ -38,6 +38,9 @@ public interface PeopleBook {
 
     Optional<Person> person(long personId);
 
+    /** The same, kept from other nodes until the transaction ends. */
+    Optional<Person> lockPerson(long personId);
+
     List<PersonAtSite> peopleOf(long siteId);
 
     /** Adds a person or gives an existing one of that name the new display name and password. */

@@ -45,6 +45,14 @@ final class PeopleTables implements PeopleBook {
     }
 
     @Override
+    public Optional<Person> lockPerson(long personId) {
+        return handle.createQuery("SELECT * FROM person WHERE id = :id FOR UPDATE")
+                .bind("id", personId)
+                .map((row, context) -> person(row))
+                .findOne();
+    }
+
+    @Override
     public List<PersonAtSite> peopleOf(long siteId) {
         return handle.createQuery("""
                         SELECT p.*, m.role FROM person p JOIN membership m ON m.person_id = p.id

@@ -18,6 +18,7 @@ import org.jspecify.annotations.Nullable;
 final class SignInPages {
     private static final String FORM_COOKIE = "hingeline_sign_in";
     private static final Duration FORM_OPEN = Duration.ofHours(1);
+    private static final int MOST_BYTES = 16_384;
 
     private final Accounts accounts;
     private final PageMaker pages;
@@ -45,6 +46,7 @@ final class SignInPages {
     }
 
     private void signIn(Context ctx) {
+        requireSmall(ctx);
         String name = Optional.ofNullable(ctx.formParam("name")).orElse("").strip();
         String password = Optional.ofNullable(ctx.formParam("password")).orElse("");
         String next = next(ctx.formParam("next"));
@@ -72,8 +74,19 @@ final class SignInPages {
                             "",
                             "Too many failed attempts. Try again in " + minutes + " min (" + until + " UTC).",
                             next));
+        } else if (result instanceof SignIn.Busy) {
+            form(ctx, 503, new SignInView(name, "Too many people sign in just now. Try again in a moment.", "", next));
         } else {
             form(ctx, 401, new SignInView(name, "Name and password do not match.", "", next));
+        }
+    }
+
+    /** Anybody may send this form, so nobody's may be large. */
+    private static void requireSmall(Context ctx) {
+        long length = ctx.req().getContentLengthLong();
+        if (length < 0 || length > MOST_BYTES) {
+            throw new ProblemException(
+                    413, "Too large", "the sign-in form must say its length and have at most " + MOST_BYTES + " bytes");
         }
     }
 

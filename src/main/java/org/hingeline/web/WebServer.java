@@ -52,6 +52,7 @@ public final class WebServer implements AutoCloseable {
             serve(config, rules, registry);
             RoutesConfig routes = config.routes;
             routes.before(WebServer::harden);
+            routes.before(WebServer::refuseUploads);
             routes.beforeMatched(new Gatekeeper(services.accounts())::check);
             new ReadingRoutes(services.intake(), new Meters(registry), rules.maxRowsPerPost()).addTo(routes);
             new PointRoutes(services.board(), services.clock()).addTo(routes);
@@ -113,13 +114,17 @@ public final class WebServer implements AutoCloseable {
         ctx.header("Referrer-Policy", "same-origin");
     }
 
+    /** No page sends files; such a body would be kept on disk without a bound. */
+    private static void refuseUploads(Context ctx) {
+        String type = ctx.contentType();
+        if (type != null && type.toLowerCase(Locale.ROOT).startsWith("multipart/")) {
+            throw new ProblemException(415, "Unknown format", "multipart bodies are not taken here");
+        }
+    }
+
     private static void failures(RoutesConfig routes, PageMaker pages) {
         routes.exception(ProblemException.class, (e, ctx) -> tell(ctx, e.problem(), pages));
         routes.exception(FieldFaultsException.class, (e, ctx) -> tell(ctx, ofFields(e), pages));
-        routes.exception(IllegalArgumentException.class, (e, ctx) -> {
-            LOG.warn("{} {} was refused", ctx.method(), ctx.path(), e);
-            tell(ctx, Problem.of(422, "Cannot be taken", String.valueOf(e.getMessage())), pages);
-        });
         routes.exception(JacksonException.class, (e, ctx) -> tell(ctx, JsonFaults.problem(e), pages));
         routes.exception(
                 HttpResponseException.class,
