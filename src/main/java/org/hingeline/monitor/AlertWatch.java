@@ -22,6 +22,8 @@ import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.LimitBook.Watched;
 import org.hingeline.monitor.ReadingBook.StoredReading;
 import org.jspecify.annotations.Nullable;
+import org.slf4j.Logger;
+import org.slf4j.LoggerFactory;
 
 /**
  * Holds what became known against the limits, and lets time pass over them: runs the alert machine, keeps its memory,
@@ -34,6 +36,8 @@ public final class AlertWatch {
 
     /** Where the age of a value plays no part. */
     static final Duration NO_MATTER = Duration.ofDays(1);
+
+    private static final Logger LOG = LoggerFactory.getLogger(AlertWatch.class);
 
     private final AlertDesk desk;
     private final Attention attention = new Attention();
@@ -58,18 +62,31 @@ public final class AlertWatch {
     }
 
     /** Lets time pass over every limit: delays run out, points fall silent. To be called every few seconds. */
-    public void tick(Books books, Instant now) {
+    public void tick(Storage storage, Instant now) {
         Duration watching = attention.look(now);
-        Map<Long, List<Watched>> watched = books
-                .limits()
-                .watchedForUpdate(books.limits().pointsWithLimits())
-                .stream()
-                .collect(Collectors.groupingBy(w -> w.limit().pointId()));
-        watched.forEach((pointId, limits) -> {
-            Point point = books.place().pointById(pointId).orElseThrow();
-            boolean maySayItIsSilent = Attention.suffices(watching, point.maxGap());
-            run(new Run(books, point.siteId(), point, now), limits, limit -> List.of(), maySayItIsSilent);
-        });
+        RuntimeException failure = null;
+        for (long pointId : storage.read(books -> books.limits().pointsWithLimits())) {
+            try {
+                // a transaction each, so that trouble at one point leaves the others watched
+                storage.writeOnly(books -> tick(books, pointId, watching, now));
+            } catch (RuntimeException e) {
+                LOG.error("time could not pass over the limits of point {}", pointId, e);
+                failure = e;
+            }
+        }
+        if (failure != null) {
+            throw failure;
+        }
+    }
+
+    private void tick(Books books, long pointId, Duration watching, Instant now) {
+        books.place().lockPoints(List.of(pointId));
+        Point point = books.place().pointById(pointId).orElseThrow();
+        run(
+                new Run(books, point.siteId(), point, now),
+                books.limits().watchedForUpdate(List.of(pointId)),
+                limit -> List.of(),
+                Attention.suffices(watching, point.maxGap()));
     }
 
     private record Run(Books books, long siteId, Point point, Instant now) {}
@@ -199,7 +216,11 @@ public final class AlertWatch {
                 new Observation(
                         at,
                         numbers.omegaCalcite(),
-                        numbers.omegaCalcite() * numbers.omegaAragoniteUncertainty() / numbers.omegaAragonite());
+                        numbers.omegaAragonite() > 0
+                                ? numbers.omegaCalcite()
+                                        * numbers.omegaAragoniteUncertainty()
+                                        / numbers.omegaAragonite()
+                                : 0);
             case PH_TOTAL -> new Observation(at, numbers.phTotal(), numbers.phTotalUncertainty());
             default -> throw new IllegalArgumentException(quantity.code() + " is not part of a water state");
         };

@@ -56,6 +56,7 @@ public final class LimitDesk {
 
     /** As {@link #save}, inside a transaction that is already open. */
     Limit save(Books books, Point point, Limit limit, String who, Instant now) {
+        books.place().lockPoints(List.of(point.id()));
         Optional<Watched> known = watched(books, point, limit.name());
         String before = known.map(Watched::limit).map(LimitDesk::words).orElse("none");
         if (before.equals(words(limit))) {
@@ -93,6 +94,7 @@ public final class LimitDesk {
     }
 
     private static boolean retire(Books books, Point point, String name, String who, Instant now) {
+        books.place().lockPoints(List.of(point.id()));
         Optional<Watched> found = watched(books, point, name);
         if (found.isEmpty()) {
             return false;
