@@ -9,6 +9,7 @@ import java.util.ArrayList;
 import java.util.Base64;
 import java.util.List;
 import java.util.Optional;
+import java.util.regex.Pattern;
 import javax.net.ssl.SSLException;
 import org.eclipse.angus.mail.smtp.SMTPAddressFailedException;
 import org.eclipse.angus.mail.smtp.SMTPSendFailedException;
@@ -23,6 +24,7 @@ import org.jspecify.annotations.Nullable;
  */
 final class MailFailure {
     private static final int WORDS_MOST = 200;
+    private static final Pattern ENHANCED = Pattern.compile("\\b5\\.\\d{1,3}\\.\\d{1,3}\\b");
 
     private MailFailure() {}
 
@@ -33,6 +35,7 @@ final class MailFailure {
             String reason =
                     "the mail server does not take mail for this recipient: " + words(address.get(), server, password);
             return permanent(address.get().getReturnCode())
+                            && !aboutPolicy(address.get().getReturnCode(), reason)
                     ? new Outcome.Refused(reason)
                     : new Outcome.FailedForNow(reason);
         }
@@ -70,6 +73,16 @@ final class MailFailure {
                 .or(() -> find(chain, MessagingException.class))
                 .orElse(chain.get(0));
         return "the conversation with mail server " + server.where() + " failed: " + words(telling, server, password);
+    }
+
+    /**
+     * Whether the server refuses because of who sends and not because of who receives: "relaying denied", "authentication
+     * required" (enhanced codes 5.7.x of RFC 3463; 530, 535 and 554 where the server gives none). A person puts that
+     * right, and then the message is still wanted.
+     */
+    private static boolean aboutPolicy(int code, String words) {
+        boolean enhanced = ENHANCED.matcher(words).find();
+        return words.contains("5.7.") || !enhanced && (code == 530 || code == 535 || code == 554);
     }
 
     private static boolean permanent(int code) {

@@ -223,6 +223,19 @@ class EmailChannelTest {
     }
 
     @Test
+    void a_server_that_does_not_relay_for_us_is_for_somebody_to_put_right_and_fails_for_now() throws Exception {
+        startSecure();
+        for (RejectException refusal : List.of(
+                new RejectException(550, "5.7.1 relaying denied"),
+                new RejectException(554, "relay access denied"),
+                new RejectException(530, "authentication required"))) {
+            answersToRecipient.add(refusal);
+
+            assertThat(channel(PASSWORD).deliver(message("ines@example.org"))).isInstanceOf(Outcome.FailedForNow.class);
+        }
+    }
+
+    @Test
     void a_message_that_is_not_taken_is_refused_for_good() throws Exception {
         startSecure();
         answersToData.add(new RejectException(554, "5.7.1 looks like bulk mail"));
