@@ -17,6 +17,11 @@ final class ConfigOption {
                             + " else the defaults)")
     private @Nullable Path file;
 
+    /** The option as it was given, to be repeated in advice; empty when it was not. */
+    String given() {
+        return file == null ? "" : " --config " + file;
+    }
+
     Settings read() {
         Path usual = Path.of("config", "hingeline.yaml");
         if (file != null) {

@@ -48,16 +48,15 @@ final class OrderlyEnd implements AutoCloseable {
     /** Closes the parts and lets the process go. */
     @Override
     public void close() {
-        try {
-            LOG.info("stopping");
-            for (AutoCloseable part : parts) {
+        LOG.info("stopping");
+        for (AutoCloseable part : parts) {
+            try {
                 part.close();
+            } catch (Exception e) {
+                LOG.error("a part did not stop well", e);
             }
-            LOG.info("stopped");
-        } catch (Exception e) {
-            LOG.error("the service did not stop well", e);
-        } finally {
-            closed.countDown();
         }
+        LOG.info("stopped");
+        closed.countDown();
     }
 }

@@ -20,10 +20,12 @@ final class ServeCommand implements Runnable {
             Service service = end.closes(Service.start(settings, Hingeline.CLOCK));
             LOG.info("listening on {} port {}", settings.server().host(), service.port());
             if (service.accounts().nobodyYet()) {
-                LOG.warn("Nobody can sign in yet. Stop the service and make a site and its first manager:\n"
-                        + "  java -jar hingeline.jar add-site --code bay --name \"Bay hatchery\" --zone Europe/Lisbon\n"
-                        + "  java -jar hingeline.jar add-person --site bay --name ana --role manager\n"
-                        + "then start it again. add-person asks for the password.");
+                LOG.warn("""
+                        Nobody can sign in yet. Stop the service, make a site and its first manager, and start it again:
+                          java -jar hingeline.jar add-site{} --code bay --name "Bay hatchery" --zone Europe/Lisbon
+                          java -jar hingeline.jar add-person{} --site bay --name ana --role manager
+                        add-person asks for the password. (Where there is bin/hingeline, it stands for java -jar hingeline.jar.)\
+                        """, config.given(), config.given());
             }
             end.await();
         }

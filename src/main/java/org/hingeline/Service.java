@@ -121,7 +121,8 @@ final class Service implements AutoCloseable {
                 new Housekeeping(database, clock, watch, ageLimits),
                 nudge,
                 backups,
-                settings.backups().every());
+                settings.backups().every(),
+                clock);
         checks.add(timedWork);
         Services services = new Services(
                 clock,
@@ -141,18 +142,24 @@ final class Service implements AutoCloseable {
                 doses(settings, database, board, ageLimits),
                 place,
                 checks);
-        WebServer web = WebServer.start(
-                new WebServer.Rules(
-                        settings.server().host(),
-                        settings.server().port(),
-                        settings.server().maxBodyBytes(),
-                        settings.intake().maxRowsPerPost(),
-                        settings.server().cookiesOverTlsOnly()),
-                services,
-                secrets,
-                live,
-                registry);
-        return new Service(database, accounts, place, timedWork, web);
+        try {
+            WebServer web = WebServer.start(
+                    new WebServer.Rules(
+                            settings.server().host(),
+                            settings.server().port(),
+                            settings.server().maxBodyBytes(),
+                            settings.intake().maxRowsPerPost(),
+                            settings.server().cookiesOverTlsOnly()),
+                    services,
+                    secrets,
+                    live,
+                    registry);
+            return new Service(database, accounts, place, timedWork, web);
+        } catch (RuntimeException e) {
+            timedWork.close();
+            live.close();
+            throw e;
+        }
     }
 
     static Accounts accounts(Settings settings, Clock clock, Database database, SecureRandom random) {
@@ -233,8 +240,14 @@ final class Service implements AutoCloseable {
     /** In this order: no new requests, no new timed work, then the database. */
     @Override
     public void close() {
-        web.close();
-        timedWork.close();
-        database.close();
+        try {
+            web.close();
+        } finally {
+            try {
+                timedWork.close();
+            } finally {
+                database.close();
+            }
+        }
     }
 }

@@ -157,7 +157,7 @@ public final class SettingsReader {
 
     private static Settings.Dosing dosing(Section in) {
         double phTotalMax = in.number("phTotalMax", 8.4, 7.5, 9);
-        double omegaAragoniteMax = in.number("omegaAragoniteMax", 4.5, 1, 10);
+        double omegaAragoniteMax = in.number("omegaAragoniteMax", 4.5, 1, 7);
         double phPerHourMax = in.number("phPerHourMax", 0.15, 0.01, 1);
         double aerateToUatm = in.number("aerateToUatm", 420, 100, 2000);
         double stockGramsPerLitre = in.number("stockGramsPerLitre", 50, 1, 200);

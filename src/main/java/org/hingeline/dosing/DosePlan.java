@@ -1,6 +1,7 @@
 package org.hingeline.dosing;
 
 import java.util.List;
+import java.util.stream.Stream;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.Caution;
 import org.jspecify.annotations.Nullable;
@@ -63,6 +64,21 @@ public record DosePlan(
             throw new IllegalArgumentException("a plan has a mass and steps and no reasons, all else has reasons: "
                     + outcome + ", " + reasons + ", " + massG + ", " + steps);
         }
+    }
+
+    /** The same with one more caution, before the others. */
+    public DosePlan withCaution(Caution caution) {
+        return new DosePlan(
+                outcome,
+                reasons,
+                massG,
+                omegaAragoniteGain,
+                steps,
+                before,
+                after,
+                afterAeration,
+                remedies,
+                Stream.concat(Stream.of(caution), cautions.stream()).toList());
     }
 
     static DosePlan without(

@@ -1,5 +1,6 @@
 package org.hingeline.monitor;
 
+import java.time.Duration;
 import java.util.List;
 import java.util.Optional;
 import org.hingeline.dosing.Agent;
@@ -11,7 +12,9 @@ import org.hingeline.dosing.Receiver;
 import org.hingeline.dosing.Target;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Site;
+import org.hingeline.measure.Quantity;
 import org.hingeline.seawater.CarbonateSystem;
+import org.hingeline.seawater.Caution;
 import org.hingeline.seawater.Conditions;
 import org.hingeline.seawater.InputUncertainty;
 import org.hingeline.seawater.KnownPair;
@@ -91,7 +94,7 @@ public final class DoseDesk {
         if (water == null || target == null || agent == null || form == null || bounds == null || volumeL == null) {
             throw new IllegalStateException("a fault was not told");
         }
-        return DosePlanner.plan(new DoseRequest(
+        DosePlan plan = DosePlanner.plan(new DoseRequest(
                 water.result(),
                 water.uncertainty(),
                 water.notes(),
@@ -103,6 +106,27 @@ public final class DoseDesk {
                 bounds,
                 stock,
                 air * 1e-6));
+        return plan.outcome() == DosePlan.Outcome.PLAN
+                ? status.flatMap(DoseDesk::aboutAlkalinity)
+                        .map(plan::withCaution)
+                        .orElse(plan)
+                : plan;
+    }
+
+    /** The plan stands on an alkalinity that a dose or an exchange of water since then has changed. */
+    private static Optional<Caution> aboutAlkalinity(PointStatus status) {
+        WaterState state = status.newest();
+        return state == null
+                ? Optional.empty()
+                : state.inputs().stream()
+                        .filter(input -> input.quantity() == Quantity.TOTAL_ALKALINITY)
+                        .findFirst()
+                        .map(
+                                input -> new Caution(
+                                        "alkalinity-age",
+                                        "The alkalinity this stands on was measured "
+                                                + Wording.length(Duration.between(input.at(), status.now()))
+                                                + " ago. If anything was dosed or water was exchanged since, measure it again first."));
     }
 
     private static @Nullable Target target(DoseWish.@Nullable Target wish, FieldFaults faults) {

@@ -69,6 +69,9 @@ public final class EmbeddedDatabase implements Database {
                 return serving(connection, folder);
             } catch (SQLException | IOException | RuntimeException e) {
                 abandon(connection, e);
+                if (endedWell) {
+                    folder.layCleanStop(); // nothing was served, so the last end is still an orderly one
+                }
                 throw e;
             }
         } catch (IOException e) {

@@ -16,8 +16,8 @@ public final class PostgresDatabase implements Database {
     private static final int CONNECTIONS = 12;
     private static final int TRIES = 5;
 
-    /** Lost a race against another node: unique violation, serialisation failure, deadlock. */
-    private static final Set<String> RUN_AGAIN = Set.of("23505", "40001", "40P01");
+    /** Lost a race against another node: unique violation, serialisation failure, deadlock, lock not had in time. */
+    private static final Set<String> RUN_AGAIN = Set.of("23505", "40001", "40P01", "55P03");
 
     private final HikariDataSource pool;
     private final Jdbi jdbi;
@@ -40,6 +40,10 @@ public final class PostgresDatabase implements Database {
         config.setMaximumPoolSize(CONNECTIONS);
         config.setPoolName("postgresql");
         config.addDataSourceProperty("reWriteBatchedInserts", "true");
+        // a node that hangs or loses its power in the middle of a transaction must not hold the others for hours
+        config.addDataSourceProperty("tcpKeepAlive", "true");
+        config.addDataSourceProperty("socketTimeout", "60");
+        config.setConnectionInitSql("SET idle_in_transaction_session_timeout = '15s'; SET lock_timeout = '20s'");
         HikariDataSource pool = null;
         try {
             pool = new HikariDataSource(config);

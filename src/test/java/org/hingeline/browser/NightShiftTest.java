@@ -172,7 +172,7 @@ class NightShiftTest {
                 .contains("Mind this before weighing")
                 .contains("Causes serious eye irritation")
                 .containsPattern("between [\\d ]+\u00a0?k?g and [\\d ]+\u00a0?k?g")
-                .containsPattern("At once .* of stock then expect pH \\d\\.\\d\\d, Ω \\d\\.\\d\\d");
+                .containsPattern("At once .* of stock then expect pH \\d\\.\\d\\d \\(total scale\\), Ω \\d\\.\\d\\d");
         assertThat(plan.indexOf("First, without a chemical")).isLessThan(plan.indexOf("Step by step"));
         assertThat(plan.indexOf("Mind this")).isLessThan(plan.indexOf("Step by step"));
         assertThat(guest.text()).contains("A suggestion: a person confirms, a person doses.");

@@ -187,7 +187,7 @@ class SettingsReaderTest {
                 .hasMessageContaining("server.colour: no such setting")
                 .hasMessageContaining("mail.host: is missing")
                 .hasMessageContaining("mail.from: \"nobody\"")
-                .hasMessageContaining("dosing.omegaAragoniteMax: \"4\" is not accepted; give a number from 1 to 10")
+                .hasMessageContaining("dosing.omegaAragoniteMax: \"4\" is not accepted; give a number from 1 to 7")
                 .hasMessageContaining("extra: no such setting");
     }
 
