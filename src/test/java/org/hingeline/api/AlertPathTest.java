@@ -18,6 +18,7 @@ import java.util.concurrent.Executors;
 import java.util.concurrent.Future;
 import java.util.stream.Stream;
 import org.hingeline.RunningService;
+import org.hingeline.SettableClock;
 import org.hingeline.monitor.JournalBook;
 import org.hingeline.monitor.Role;
 import org.junit.jupiter.api.AfterEach;
@@ -105,7 +106,7 @@ class AlertPathTest {
         water("storage", FIT);
         assertThat(alerts("open", "omega-low")).isEmpty();
 
-        clock.forward(Duration.ofMinutes(1));
+        clock.pass(Duration.ofMinutes(1));
         Instant since = clock.instant();
         water("storage", LOW);
         List<JsonNode> open = alerts("open", "omega-low");
@@ -128,7 +129,7 @@ class AlertPathTest {
                 .anySatisfy(letter -> assertThat(letter).contains("ines@ilwen-narrows.example.org"));
 
         for (int i = 0; i < 3; i++) {
-            clock.forward(Duration.ofMinutes(1));
+            clock.pass(Duration.ofMinutes(1));
             water("storage", LOW - 0.02 * i);
         }
         assertThat(alerts("open", "omega-low")).as("no second one").isEqualTo(open);
@@ -138,7 +139,7 @@ class AlertPathTest {
         assertThat(taken.get("state").asString()).isEqualTo("acknowledged");
         assertThat(taken.get("note").asString()).isEqualTo("Valve closed.");
 
-        clock.forward(Duration.ofMinutes(1));
+        clock.pass(Duration.ofMinutes(1));
         water("storage", FIT);
         assertThat(alerts("open", "omega-low")).isEmpty();
         List<JsonNode> closed = alerts("closed", "omega-low");
@@ -159,7 +160,7 @@ class AlertPathTest {
     void water_that_came_back_by_itself_waits_for_somebody_to_say_so() {
         limit("storage", "omega-low");
         water("storage", LOW);
-        clock.forward(Duration.ofMinutes(1));
+        clock.pass(Duration.ofMinutes(1));
         water("storage", FIT);
         List<JsonNode> open = alerts("open", "omega-low");
         assertThat(open).hasSize(1);

@@ -12,6 +12,7 @@ import java.time.ZoneId;
 import java.util.ArrayList;
 import java.util.List;
 import org.hingeline.RunningService;
+import org.hingeline.SettableClock;
 import org.hingeline.hatchery.PointKind;
 import org.hingeline.hatchery.Site;
 import org.hingeline.measure.Quantity;

@@ -22,6 +22,7 @@ import java.util.Map;
 import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 import org.hingeline.RunningService;
+import org.hingeline.SettableClock;
 import org.hingeline.monitor.ReadingBook.RefusedRow;
 import org.hingeline.monitor.ReadingBook.StoredReading;
 import org.hingeline.monitor.Role;

@@ -8,6 +8,7 @@ import java.nio.file.Path;
 import java.time.Duration;
 import java.time.Instant;
 import org.hingeline.RunningService;
+import org.hingeline.SettableClock;
 import org.hingeline.monitor.Role;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
@@ -48,7 +49,7 @@ class DosePlanTest {
     /** So that the readings of one test are too old for the next; alkalinity may be three days old. */
     @BeforeEach
     void a_week_later() {
-        CLOCK.forward(Duration.ofDays(7));
+        CLOCK.pass(Duration.ofDays(7));
     }
 
     private JsonNode plan(String wish, int status) {
@@ -112,11 +113,11 @@ class DosePlanTest {
     @Test
     void is_refused_when_an_input_is_stale() {
         water(7.8);
-        CLOCK.forward(Duration.ofMinutes(15));
+        CLOCK.pass(Duration.ofMinutes(15));
         assertThat(plan(OF_A_POINT, 200).get("outcome").asString())
                 .as("pH may be 15 min old")
                 .isEqualTo("plan");
-        CLOCK.forward(Duration.ofMinutes(1));
+        CLOCK.pass(Duration.ofMinutes(1));
         JsonNode stale = plan(OF_A_POINT, 200);
         assertRefused(stale, "input-stale");
         assertThat(stale.at("/reasons/0/detail").asString()).contains("pH", "16 min old", "15 min");
@@ -128,7 +129,7 @@ class DosePlanTest {
     @Test
     void is_refused_when_a_newer_temperature_hides_no_stale_ph() {
         water(7.8);
-        CLOCK.forward(Duration.ofMinutes(20));
+        CLOCK.pass(Duration.ofMinutes(20));
         service.postReadings(Rows.batch(Rows.row("larval-3", "temperature", 22.1, CLOCK.instant())));
         assertRefused(plan(OF_A_POINT, 200), "input-stale");
     }

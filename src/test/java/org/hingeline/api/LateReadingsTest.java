@@ -12,6 +12,7 @@ import java.util.Collections;
 import java.util.List;
 import java.util.Random;
 import org.hingeline.RunningService;
+import org.hingeline.SettableClock;
 import org.hingeline.monitor.Role;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;

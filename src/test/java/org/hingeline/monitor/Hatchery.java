@@ -14,6 +14,7 @@ import java.time.ZoneOffset;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import org.hingeline.SettableClock;
 import org.hingeline.alert.Priority;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.PointKind;

@@ -1,4 +1,4 @@
-package org.hingeline.api;
+package org.hingeline;
 
 import java.time.Clock;
 import java.time.Duration;
@@ -8,18 +8,18 @@ import java.time.ZoneOffset;
 import java.util.concurrent.atomic.AtomicReference;
 
 /** A clock that stands still until it is set. */
-final class SettableClock extends Clock {
+public final class SettableClock extends Clock {
     private final AtomicReference<Instant> now;
 
-    SettableClock(Instant now) {
+    public SettableClock(Instant now) {
         this.now = new AtomicReference<>(now);
     }
 
-    void set(Instant to) {
+    public void set(Instant to) {
         now.set(to);
     }
 
-    void forward(Duration by) {
+    public void pass(Duration by) {
         now.updateAndGet(at -> at.plus(by));
     }
 
