@@ -1,3 +1,4 @@
+# shellcheck shell=bash disable=SC2034
 # Sourced by scripts that run a main class from src/test/java: build_test_classes compiles, and sets test_classes to
 # the class path. What Maven needs is taken from this machine if it is all here, otherwise fetched.
 build_test_classes() {
