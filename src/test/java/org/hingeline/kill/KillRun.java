@@ -1,10 +1,12 @@
 package org.hingeline.kill;
 
 import java.io.IOException;
+import java.io.InputStream;
 import java.net.URI;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
+import java.nio.file.attribute.FileTime;
 import java.sql.Connection;
 import java.sql.DriverManager;
 import java.sql.SQLException;
@@ -21,6 +23,7 @@ import java.util.Set;
 import java.util.concurrent.atomic.AtomicBoolean;
 import java.util.function.Consumer;
 import java.util.stream.Stream;
+import java.util.zip.ZipFile;
 
 /**
  * Loads the real service from every kind of writer at once, kills it at random moments, starts it again on the same
@@ -246,21 +249,26 @@ public final class KillRun {
                             + " picked = FALSE, picked_by = NULL WHERE task_name = 'back-up'");
             statement.execute("SHUTDOWN");
         }
+        for (Path zip : backups(place)) {
+            Files.setLastModifiedTime(zip, FileTime.from(Instant.now().minus(Duration.ofDays(1))));
+        }
+    }
+
+    private static List<Path> backups(Place place) throws IOException {
+        if (!Files.isDirectory(place.backups())) {
+            return List.of();
+        }
+        try (Stream<Path> files = Files.list(place.backups())) {
+            return files.filter(file -> file.toString().endsWith(".zip")).toList();
+        }
     }
 
     private void inspectNewBackups(Place place) throws IOException, SQLException {
-        if (!Files.isDirectory(place.backups())) {
-            return;
-        }
-        List<Path> zips;
-        try (Stream<Path> files = Files.list(place.backups())) {
-            zips = files.filter(file -> file.toString().endsWith(".zip")).toList();
-        }
-        for (Path zip : zips) {
+        for (Path zip : backups(place)) {
             if (backupsSeen.add(zip)) {
                 Path file = folder.resolve("backup.mv.db");
-                try (var content = new java.util.zip.ZipFile(zip.toFile());
-                        var in = content.getInputStream(content.getEntry("hingeline.mv.db"))) {
+                try (ZipFile content = new ZipFile(zip.toFile());
+                        InputStream in = content.getInputStream(content.getEntry("hingeline.mv.db"))) {
                     Files.copy(in, file, StandardCopyOption.REPLACE_EXISTING);
                 }
                 try (Inspection inspection = new Inspection(file, place.mail())) {

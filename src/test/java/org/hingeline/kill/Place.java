@@ -6,6 +6,7 @@ import java.net.http.HttpResponse;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.Clock;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Set;
 import org.hingeline.RunningService;
@@ -32,7 +33,7 @@ record Place(Path data, Path settings, List<String> gatewayKeys, String token, L
                 .filter(sensor -> NEEDED.contains(sensor.quantity()))
                 .map(sensor -> new Sensor(sensor.point(), sensor.code(), sensor.quantity()))
                 .toList();
-        List<String> keys = new java.util.ArrayList<>();
+        List<String> keys = new ArrayList<>();
         String token;
         try (RunningService service = RunningService.start(data, Clock.systemUTC())) {
             token = service.token(Role.OPERATOR);

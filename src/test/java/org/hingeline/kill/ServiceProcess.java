@@ -48,7 +48,8 @@ public final class ServiceProcess {
         String classes = Arrays.stream(System.getProperty("java.class.path").split(File.pathSeparator))
                 .filter(entry -> !entry.endsWith("test-classes") && !entry.endsWith("test-classes/"))
                 .collect(Collectors.joining(File.pathSeparator));
-        return List.of("-cp", classes, "org.hingeline.Hingeline");
+        // its lives are too short for the second compiler to pay
+        return List.of("-XX:TieredStopAtLevel=1", "-XX:-UsePerfData", "-cp", classes, "org.hingeline.Hingeline");
     }
 
     /**
