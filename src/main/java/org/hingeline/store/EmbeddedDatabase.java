@@ -115,9 +115,20 @@ public final class EmbeddedDatabase implements Database {
             throws SQLException, IOException {
         Migrations.run(folder.url(), DatabaseFolder.USER, DatabaseFolder.PASSWORD);
         WriteLane lane = new WriteLane(connection);
-        lane.transaction(same -> true); // a checkpoint behind the migrations
+        lane.transaction(EmbeddedDatabase::freeTimedWork); // with it a checkpoint behind the migrations
         folder.layMade();
         return new EmbeddedDatabase(folder, lane, readers(folder));
+    }
+
+    /**
+     * Timed work that the last owner had picked when it died is free again at once: this database has one owner, so
+     * nobody else can be at it.
+     */
+    private static int freeTimedWork(Connection connection) throws SQLException {
+        try (Statement statement = connection.createStatement()) {
+            return statement.executeUpdate(
+                    "UPDATE scheduled_tasks SET picked = FALSE, picked_by = NULL, last_heartbeat = NULL WHERE picked");
+        }
     }
 
     /** Lets the database go without writing anything more to it. */

@@ -43,6 +43,24 @@ class EmbeddedDatabaseTest {
     }
 
     @Test
+    void timed_work_picked_by_an_owner_that_died_is_free_at_the_next_start() throws Exception {
+        try (EmbeddedDatabase store = EmbeddedDatabase.open(folder)) {
+            RawSql.run(store, """
+                    INSERT INTO scheduled_tasks
+                        (task_name, task_instance, execution_time, picked, picked_by, last_heartbeat, version)
+                    VALUES ('watch-limits', 'recurring', TIMESTAMP WITH TIME ZONE '2026-05-14 03:20:00+00', TRUE, 'gone',
+                            TIMESTAMP WITH TIME ZONE '2026-05-14 03:20:00+00', 7)
+                    """);
+        }
+
+        try (EmbeddedDatabase store = EmbeddedDatabase.open(folder)) {
+            assertThat(RawSql.ask(store, "SELECT count(*) FROM scheduled_tasks WHERE picked"))
+                    .isEqualTo("0");
+            assertThat(RawSql.ask(store, "SELECT version FROM scheduled_tasks")).isEqualTo("7");
+        }
+    }
+
+    @Test
     void the_mark_of_an_orderly_end_is_laid_down_at_the_end_and_taken_away_at_the_start() {
         DatabaseFolder marks = new DatabaseFolder(folder);
         EmbeddedDatabase store = EmbeddedDatabase.open(folder);
