@@ -75,20 +75,20 @@ public record StatusView(@Nullable TideStrip strip, List<PathPoint> path) {
     }
 
     /** Something to do now, and the points at which. */
-    public record ToDo(String action, List<PathPoint> points) {
-        public ToDo {
+    public record Call(String action, List<PathPoint> points) {
+        public Call {
             points = List.copyOf(points);
         }
     }
 
     /** What is to be done now, most urgent first; the same at several points is said once. */
-    public List<ToDo> calls() {
+    public List<Call> calls() {
         Map<String, List<PathPoint>> byAction = path.stream()
                 .filter(p -> !p.action().isEmpty())
                 .sorted(Comparator.comparingInt(PathPoint::urgency).reversed())
                 .collect(Collectors.groupingBy(PathPoint::action, LinkedHashMap::new, Collectors.toList()));
         return byAction.entrySet().stream()
-                .map(e -> new ToDo(e.getKey(), e.getValue()))
+                .map(e -> new Call(e.getKey(), e.getValue()))
                 .toList();
     }
 

@@ -87,8 +87,8 @@ class ViewWordsTest {
                         callOf("D", "", 0)));
         assertThat(status.calls())
                 .extracting(
-                        StatusView.ToDo::action,
-                        todo -> todo.points().stream().map(PathPoint::name).toList())
+                        StatusView.Call::action,
+                        call -> call.points().stream().map(PathPoint::name).toList())
                 .containsExactly(
                         org.assertj.core.groups.Tuple.tuple("Close the valve.", List.of("B")),
                         org.assertj.core.groups.Tuple.tuple("Look.", List.of("A", "C")));
