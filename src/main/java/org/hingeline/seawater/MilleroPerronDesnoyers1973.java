@@ -7,7 +7,7 @@ package org.hingeline.seawater;
  * are quoted from memory and give the checks of UNESCO 44 in the reference data of the tests.
  *
  * <p>The equation is in IPTS-68; the ITS-90 temperature goes in as it is, which moves the value by less than 0.05
- * J/(kg K). TEOS-10 gives 0.5 J/(kg K) less to 4.3 more: a thousandth.
+ * J/(kg K). TEOS-10 differs by at most 4.6 J/(kg K), about a thousandth.
  */
 public final class MilleroPerronDesnoyers1973 {
     /** Where the fit holds. */

@@ -48,6 +48,7 @@ class SingleConstantsValidationTest {
             case "phFreeMinusTotal" -> PhScale.FREE.fromTotal(8, temperatureC, s) - 8;
             case "phTotalMinusSeawater" -> PhScale.SEAWATER.toTotal(8, temperatureC, s) - 8;
             case "phNbsMinusTotal" -> PhScale.NBS.fromTotal(8, temperatureC, s) - 8;
+            case "trisPh" -> TrisStandard.ph(temperatureC, s).orElseThrow();
             case "unionisedAmmoniaAtPh8.0" -> CleggWhitfield1995.unionisedShare(8.0, temperatureC, s);
             case "unionisedAmmoniaAtPh8.5" -> CleggWhitfield1995.unionisedShare(8.5, temperatureC, s);
             default -> throw new IllegalArgumentException("no such quantity: " + quantity);
