@@ -66,7 +66,7 @@ class ConductivitySalinityTest {
     @ValueSource(doubles = {-2, 0, 15, 30, 45})
     void rises_with_conductivity_all_the_way(double temperatureC) {
         double last = -1;
-        for (double c = 0.002; c < 60; c *= 1.003) {
+        for (double c = 0.003; c < 60; c *= 1.003) {
             Figure figure = ConductivitySalinity.salinity(c, temperatureC);
             if (figure instanceof Known known) {
                 assertThat(known.value()).as("%s mS/cm", c).isGreaterThan(last);
