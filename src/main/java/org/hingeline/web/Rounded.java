@@ -1,0 +1,43 @@
+package org.hingeline.web;
+
+import java.math.BigDecimal;
+import java.math.MathContext;
+
+/** A number with as many digits as its standard uncertainty leaves worth reading: two of those of the uncertainty. */
+record Rounded(String value, String plusMinus) {
+    private static final int MOST_DIGITS = 6;
+    private static final MathContext AS_TYPED = new MathContext(7);
+
+    /** @param uncertainty above 0; where it is 0 the value is exact and gets {@code digits} decimals */
+    static Rounded of(double value, double uncertainty, int digits) {
+        if (!(uncertainty > 0)) {
+            return new Rounded(Words.number(value, digits), "");
+        }
+        int worth = digits(uncertainty);
+        return new Rounded(Words.number(value, worth), Words.number(uncertainty, worth));
+    }
+
+    /** A small number alone, to two figures. */
+    static String small(double value) {
+        return value > 0 ? Words.number(value, digits(value)) : "0";
+    }
+
+    private static int digits(double value) {
+        int digits = 1 - (int) Math.floor(Math.log10(value));
+        return Math.min(MOST_DIGITS, Math.max(0, digits));
+    }
+
+    /** As a person would type it: seven figures at most, no thousands, no padding, no powers of ten. */
+    static String typed(double value) {
+        return plain(new BigDecimal(value).round(AS_TYPED));
+    }
+
+    /** The same with two figures. */
+    static String typedShort(double value) {
+        return plain(new BigDecimal(value).round(new MathContext(2)));
+    }
+
+    private static String plain(BigDecimal value) {
+        return value.signum() == 0 ? "0" : value.stripTrailingZeros().toPlainString();
+    }
+}
