@@ -2,6 +2,7 @@ package org.hingeline.web;
 
 import java.util.LinkedHashMap;
 import java.util.Map;
+import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 import org.hingeline.measure.Quantity;
 import org.hingeline.measure.UnitChoice;
@@ -19,6 +20,10 @@ final class CalculatorFaults {
             "pco2", Quantity.PCO2,
             "calcium", Quantity.CALCIUM,
             "ammonia", Quantity.AMMONIA);
+
+    private static final Map<String, String> UNIT_OF =
+            Map.of("phTemp", "temp", "warmTo", "temp", "blendTemp", "temp", "blendTa", "ta");
+    private static final Pattern LONG = Pattern.compile("\\d+\\.\\d{4,}");
 
     private CalculatorFaults() {}
 
@@ -91,13 +96,13 @@ final class CalculatorFaults {
         for (Map.Entry<String, String> word : WORDS.entrySet()) {
             detail = detail.replaceAll("(?<![\\w/])(?:blendWith/water/)?" + word.getKey() + "(?!\\w)", word.getValue());
         }
+        detail = LONG.matcher(detail).replaceAll(number -> Rounded.typed(Double.parseDouble(number.group())));
         String field = field(fault.field());
-        Quantity quantity = QUANTITIES.get(field);
-        if (quantity == null
-                || !Character.isDigit(detail.replaceFirst("^[-\u2212]", "").charAt(0))) {
+        Quantity quantity = QUANTITIES.get(UNIT_OF.getOrDefault(field, field));
+        if (quantity == null || !detail.matches("(?s)[-\u2212]?\\d.*")) {
             return Words.sentence(detail);
         }
-        UnitChoice unit = new CalculatorUnits(typed).choice(field, quantity);
+        UnitChoice unit = new CalculatorUnits(typed).choice(UNIT_OF.getOrDefault(field, field), quantity);
         String symbol = quantity.unit().symbol();
         return unit.ucum().equals(quantity.unit().ucum())
                 ? detail

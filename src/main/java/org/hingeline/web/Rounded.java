@@ -3,7 +3,10 @@ package org.hingeline.web;
 import java.math.BigDecimal;
 import java.math.MathContext;
 
-/** A number with as many digits as its standard uncertainty leaves worth reading: two of those of the uncertainty. */
+/**
+ * A number with as many digits as its standard uncertainty leaves worth reading: to the uncertainty's first figure, or its
+ * second where the first is 1 or 2.
+ */
 record Rounded(String value, String plusMinus) {
     private static final int MOST_DIGITS = 6;
     private static final MathContext AS_TYPED = new MathContext(7);
@@ -13,8 +16,13 @@ record Rounded(String value, String plusMinus) {
         if (!(uncertainty > 0)) {
             return new Rounded(Words.number(value, digits), "");
         }
-        int worth = digits(uncertainty);
+        int worth = worth(uncertainty);
         return new Rounded(Words.number(value, worth), Words.number(uncertainty, worth));
+    }
+
+    private static int worth(double uncertainty) {
+        double figures = uncertainty / Math.pow(10, Math.floor(Math.log10(uncertainty)));
+        return figures < 2.95 ? digits(uncertainty) : Math.max(0, digits(uncertainty) - 1);
     }
 
     /** A small number alone, to two figures. */

@@ -17,6 +17,7 @@ import java.util.stream.Collectors;
 import org.eclipse.jetty.util.thread.QueuedThreadPool;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.Secrets;
+import org.hingeline.monitor.WaterCalculator;
 import org.hingeline.web.Problem.FieldError;
 import org.hingeline.web.view.ErrorView;
 import org.slf4j.Logger;
@@ -65,6 +66,8 @@ public final class WebServer implements AutoCloseable {
             new PointPages(services.board(), services.limits(), pages).addTo(routes);
             new AlertPages(services.board(), services.alerts(), pages).addTo(routes);
             new DosePages(services.board(), services.doses(), pages).addTo(routes);
+            new CalculatorPages(services.board(), new WaterCalculator(), pages).addTo(routes);
+            new ElectrodePages(pages).addTo(routes);
             new MessagePages(services.board(), pages).addTo(routes);
             new SetupPages(services.place(), services.accounts(), pages).addTo(routes);
             live.addTo(routes);

@@ -143,6 +143,7 @@ class PagesTest {
                 List.of(),
                 List.of(hostile),
                 hostile,
+                hostile,
                 SAMPLES.point(true).limits(),
                 Form.empty(),
                 null);
@@ -222,6 +223,7 @@ class PagesTest {
                 List.of(),
                 List.of(),
                 List.of(),
+                "",
                 "",
                 List.of(),
                 Form.empty(),

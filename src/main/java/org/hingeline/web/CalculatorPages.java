@@ -1,0 +1,99 @@
+package org.hingeline.web;
+
+import io.javalin.config.RoutesConfig;
+import io.javalin.http.Context;
+import java.util.LinkedHashMap;
+import java.util.Map;
+import org.hingeline.monitor.FieldFaultsException;
+import org.hingeline.monitor.PointStatus;
+import org.hingeline.monitor.StatusBoard;
+import org.hingeline.monitor.WaterCalculator;
+import org.hingeline.monitor.WaterState;
+import org.hingeline.web.view.CalculatorView;
+import org.hingeline.web.view.CalculatorView.Source;
+import org.hingeline.web.view.CalculatorView.Worked;
+import org.hingeline.web.view.Form;
+import org.jspecify.annotations.Nullable;
+
+/**
+ * The calculator. Stores nothing: all that was typed stands in the address, so that a result can be kept and passed on.
+ * With {@code ?point=CODE} it takes up the water state of a point, with {@code &at=} one of the past.
+ */
+final class CalculatorPages {
+    /** Whoever sends the form sends this field, filled in or not. */
+    private static final String ALWAYS_SENT = "temp";
+
+    private static final int LONGEST_FIELD = 60;
+
+    private final StatusBoard board;
+    private final WaterCalculator calculator;
+    private final PageMaker pages;
+
+    CalculatorPages(StatusBoard board, WaterCalculator calculator, PageMaker pages) {
+        this.board = board;
+        this.calculator = calculator;
+        this.pages = pages;
+    }
+
+    void addTo(RoutesConfig routes) {
+        routes.get("/calculator", this::show, Gate.VIEWER);
+    }
+
+    private void show(Context ctx) {
+        Map<String, String> typed = typed(ctx);
+        boolean sent = typed.containsKey(ALWAYS_SENT);
+        String point = ctx.queryParam("point");
+        CalculatorSource source = point == null || point.isBlank() ? null : source(ctx, point);
+        Map<String, String> values = new LinkedHashMap<>();
+        if (source != null) {
+            values.putAll(source.form());
+        }
+        values.putAll(typed);
+        CalculatorForm form = new CalculatorForm(values);
+        Source shown = source == null ? null : source.shown(sent ? typed : null, PageMaker.zone(ctx));
+        if (!sent && (source == null || !source.complete())) {
+            answer(ctx, 200, Form.of(form.shown()), shown, null);
+            return;
+        }
+        try {
+            Worked worked = CalculatorResult.of(form, calculator.calculate(form.wish(), true));
+            answer(ctx, 200, Form.of(form.shown()), shown, worked);
+        } catch (FieldFaultsException e) {
+            answer(ctx, sent ? 422 : 200, new Form(form.shown(), form.errors(e)), shown, null);
+        }
+    }
+
+    private void answer(Context ctx, int status, Form form, @Nullable Source source, @Nullable Worked worked) {
+        pages.show(ctx, status, "calculator", "calculator", new CalculatorView(form, source, worked), "");
+    }
+
+    /** The fields sent, each once. */
+    static Map<String, String> typed(Context ctx) {
+        Map<String, String> typed = new LinkedHashMap<>();
+        ctx.queryParamMap().forEach((field, values) -> {
+            if (!values.isEmpty()) {
+                String value = values.get(0);
+                typed.put(field, value.length() > LONGEST_FIELD ? value.substring(0, LONGEST_FIELD) : value);
+            }
+        });
+        return typed;
+    }
+
+    private CalculatorSource source(Context ctx, String code) {
+        PointStatus point = board.point(Visit.of(ctx).site(), code)
+                .orElseThrow(() ->
+                        new ProblemException(404, "No such point", "point \"" + code + "\" is not known at this site"));
+        WaterState newest = point.newest();
+        WaterState state = ctx.queryParam("at") == null
+                ? newest
+                : board.stateAt(point.point(), Times.query(ctx, "at", point.now()))
+                        .orElse(null);
+        if (state == null) {
+            throw new ProblemException(
+                    404,
+                    "No such water state",
+                    "no water was known at " + point.point().name() + " then");
+        }
+        return new CalculatorSource(point, state, board.sensors(point.point()));
+    }
+}
