@@ -92,7 +92,7 @@ final class CalculatorFaults {
         if (field(fault.field()).equals(fault.field())) {
             return fault.detail();
         }
-        String detail = Forms.plainly(fault.detail());
+        String detail = Forms.plainly(fault.detail()).replaceAll("(?<![\\w.])-(?=\\d)", "\u2212");
         for (Map.Entry<String, String> word : WORDS.entrySet()) {
             detail = detail.replaceAll("(?<![\\w/])(?:blendWith/water/)?" + word.getKey() + "(?!\\w)", word.getValue());
         }

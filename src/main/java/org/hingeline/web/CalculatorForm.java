@@ -1,6 +1,5 @@
 package org.hingeline.web;
 
-import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -14,6 +13,7 @@ import org.hingeline.monitor.WaterWish;
 import org.hingeline.monitor.WaterWishBuilder;
 import org.hingeline.seawater.InputUncertainty;
 import org.hingeline.seawater.PhScale;
+import org.hingeline.web.view.CalculatorFields;
 import org.jspecify.annotations.Nullable;
 
 /** The calculator's form: what is typed, in the person's units, made into a wish in the units of the core. */
@@ -74,8 +74,10 @@ final class CalculatorForm {
 
     /** The quantities of the pair chosen, in the order of the picture's axes. */
     List<String> pair() {
-        List<String> pair = new ArrayList<>(List.of(typed.text("pair").split("-")));
-        return pair.size() == 2 && List.of("ph", "ta", "dic", "pco2").containsAll(pair) ? pair : List.of();
+        String chosen = typed.text("pair");
+        boolean offered =
+                CalculatorFields.pairs().stream().anyMatch(pair -> pair.value().equals(chosen));
+        return offered ? List.of(chosen.split("-")) : List.of();
     }
 
     /** What a treatment was asked with, as it was typed. */
@@ -87,9 +89,27 @@ final class CalculatorForm {
         return units.choice("temp", Quantity.TEMPERATURE).label();
     }
 
-    /** What is wrong, beside the fields of the form. */
-    Map<String, String> errors(FieldFaultsException e) {
-        return CalculatorFaults.beside(e, typed);
+    /**
+     * All that is wrong, beside the fields of the form.
+     *
+     * @param ofWish what the wish was refused for; null when it was not
+     */
+    Map<String, String> errors(@Nullable FieldFaultsException ofWish) {
+        Map<String, String> errors = new LinkedHashMap<>();
+        try {
+            faults.throwIfAny();
+        } catch (FieldFaultsException own) {
+            own.faults().forEach(fault -> errors.merge(fault.field(), fault.detail(), (a, b) -> a + "; " + b));
+        }
+        boolean ownFaults = !errors.isEmpty();
+        if (ofWish != null) {
+            CalculatorFaults.beside(ofWish, typed).forEach((field, detail) -> {
+                if (!ownFaults || !field.isEmpty()) {
+                    errors.putIfAbsent(field, detail);
+                }
+            });
+        }
+        return errors;
     }
 
     PhScale scale() {
@@ -107,11 +127,7 @@ final class CalculatorForm {
         return limit;
     }
 
-    /**
-     * What is to be worked out.
-     *
-     * @throws FieldFaultsException naming the form's fields
-     */
+    /** What is to be worked out; what cannot be read is absent from it, and told by {@link #errors}. */
     WaterWish wish() {
         List<String> pair = pair();
         if (pair.isEmpty()) {
@@ -119,7 +135,7 @@ final class CalculatorForm {
         }
         required("temp", "fill in the temperature of the water, for instance 18,5");
         required("salt", "fill in the salinity, for instance 33, or a conductivity with its unit");
-        pair.forEach(field -> required(field, "is missing: fill it in, or choose another two above"));
+        pair.forEach(field -> required(field, "it is empty. Fill it in, or choose another two above"));
         boolean ph = pair.contains("ph");
         Double salt = units.conductivity
                 ? units.canonical("salt", Quantity.CONDUCTIVITY, "42,9")
@@ -148,7 +164,6 @@ final class CalculatorForm {
                 .ammoniaMgL(units.canonical("ammonia", Quantity.AMMONIA, "0,5"))
                 .build();
         limit();
-        faults.throwIfAny();
         return wish;
     }
 
@@ -182,7 +197,7 @@ final class CalculatorForm {
         if (fields.stream().allMatch(typed::empty)) {
             return null;
         }
-        fields.forEach(field -> required(field, "is missing: a blend needs all five, or none"));
+        fields.forEach(field -> required(field, "it is empty; a blend needs all five, or none"));
         Double share = typed.number("blendShare", "30");
         Double temperature = typed.number("blendTemp", "12");
         Double salt = typed.number("blendSalt", "28");

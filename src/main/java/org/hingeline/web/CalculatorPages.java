@@ -4,11 +4,13 @@ import io.javalin.config.RoutesConfig;
 import io.javalin.http.Context;
 import java.util.LinkedHashMap;
 import java.util.Map;
+import org.hingeline.monitor.CalculatedWater;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.PointStatus;
 import org.hingeline.monitor.StatusBoard;
 import org.hingeline.monitor.WaterCalculator;
 import org.hingeline.monitor.WaterState;
+import org.hingeline.monitor.WaterWish;
 import org.hingeline.web.view.CalculatorView;
 import org.hingeline.web.view.CalculatorView.Source;
 import org.hingeline.web.view.CalculatorView.Worked;
@@ -55,11 +57,19 @@ final class CalculatorPages {
             answer(ctx, 200, Form.of(form.shown()), shown, null);
             return;
         }
+        CalculatedWater water = null;
+        FieldFaultsException refusal = null;
+        WaterWish wish = form.wish();
         try {
-            Worked worked = CalculatorResult.of(form, calculator.calculate(form.wish(), true));
-            answer(ctx, 200, Form.of(form.shown()), shown, worked);
+            water = calculator.calculate(wish, true);
         } catch (FieldFaultsException e) {
-            answer(ctx, sent ? 422 : 200, new Form(form.shown(), form.errors(e)), shown, null);
+            refusal = e;
+        }
+        Map<String, String> errors = form.errors(refusal);
+        if (water == null || !errors.isEmpty()) {
+            answer(ctx, sent ? 422 : 200, new Form(form.shown(), errors), shown, null);
+        } else {
+            answer(ctx, 200, Form.of(form.shown()), shown, CalculatorResult.of(form, water));
         }
     }
 

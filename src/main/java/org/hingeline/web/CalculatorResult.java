@@ -243,10 +243,10 @@ final class CalculatorResult {
                         new Line("share of the total", Rounded.small(ammonia.share() * 100), "", "%", ""),
                         new Line(
                                 "for comparison: US EPA 1989, salt water, as NH\u2083",
-                                Ammonia.EPA_1989_CHRONIC_MG_L + " over days, " + Ammonia.EPA_1989_ACUTE_MG_L
-                                        + " within the hour",
+                                Ammonia.EPA_1989_CHRONIC_MG_L + "\u00a0mg/L over days, " + Ammonia.EPA_1989_ACUTE_MG_L
+                                        + "\u00a0mg/L within the hour",
                                 "",
-                                "mg/L",
+                                "",
                                 ""));
     }
 

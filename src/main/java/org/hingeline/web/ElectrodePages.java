@@ -94,7 +94,7 @@ final class ElectrodePages {
 
     private static @Nullable Double required(Typed typed, String field, String example) {
         if (typed.empty(field)) {
-            typed.fault(field, "is missing; " + example + " would do");
+            typed.fault(field, "it is empty; " + example + " would be a value");
         }
         return typed.number(field, example);
     }

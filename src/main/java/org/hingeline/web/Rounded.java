@@ -8,12 +8,13 @@ import java.math.MathContext;
  * second where the first is 1 or 2.
  */
 record Rounded(String value, String plusMinus) {
+    private static final double NOTHING = 1e-9;
     private static final int MOST_DIGITS = 6;
     private static final MathContext AS_TYPED = new MathContext(7);
 
-    /** @param uncertainty above 0; where it is 0 the value is exact and gets {@code digits} decimals */
+    /** @param uncertainty where it is nothing beside the value, the value is exact and gets {@code digits} decimals */
     static Rounded of(double value, double uncertainty, int digits) {
-        if (!(uncertainty > 0)) {
+        if (!(uncertainty > NOTHING * Math.abs(value))) {
             return new Rounded(Words.number(value, digits), "");
         }
         int worth = worth(uncertainty);

@@ -39,7 +39,7 @@ public record OmegaPicture(
         Box box) {
     private static final int COLUMNS = 61;
     private static final int ROWS = 41;
-    private static final int TICKS = 5;
+    private static final int TICKS = 6;
     private static final double[] WIDER = {1, 1.6, 2.5};
 
     /** One axis: its name with the unit, and its round values. */
@@ -134,8 +134,8 @@ public record OmegaPicture(
                         value + Math.max(100, 0.6 * value) * wider);
             default ->
                 new Range(
-                        Math.max(1, value - Math.max(150, 0.18 * Math.abs(value)) * wider),
-                        Math.max(1, value) + Math.max(150, 0.18 * Math.abs(value)) * wider);
+                        Math.max(1, value - Math.max(120, 0.12 * Math.abs(value)) * wider),
+                        Math.max(1, value) + Math.max(120, 0.12 * Math.abs(value)) * wider);
         };
     }
 

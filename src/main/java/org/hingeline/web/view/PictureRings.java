@@ -11,7 +11,7 @@ import org.jspecify.annotations.Nullable;
 /** Which lines of equal Ω are drawn, and where their labels find room. */
 final class PictureRings {
     private static final double[] STEPS = {0.05, 0.1, 0.25, 0.5, 1, 2, 5, 10};
-    private static final int MOST = 6;
+    private static final int MOST = 7;
     private static final double MARGIN = 0.07;
     private static final double MARGIN_OF_WORDS = 0.24;
     /** Labels are wider than high: a step down counts for more than one across. */
