@@ -23,6 +23,9 @@ final class StateJson {
     private static final int DIGITS_OF_UNCERTAINTY = 4;
     private static final double MICRO = 1e6;
 
+    /** A share of the value that is nothing but the rounding of the arithmetic. */
+    private static final double DUST = 1e-14;
+
     private static final SerializableString TEMPERATURE = name("temperatureC");
     private static final SerializableString SALINITY = name("salinity");
     private static final SerializableString PH = name("phTotal");
@@ -79,7 +82,7 @@ final class StateJson {
 
     private void fields(CalculatedWater water) {
         quantities(water.state());
-        uncertainty(water.uncertainty());
+        uncertainty(water.state(), water.uncertainty());
         treated("warmed", water.warmed());
         treated("equilibrated", water.equilibrated());
         treated("blended", water.blended());
@@ -91,7 +94,7 @@ final class StateJson {
         if (treated != null) {
             json.writeObjectPropertyStart(name);
             quantities(treated.state());
-            uncertainty(treated.uncertainty());
+            uncertainty(treated.state(), treated.uncertainty());
             cautions(treated.cautions());
             json.writeEndObject();
         }
@@ -118,36 +121,37 @@ final class StateJson {
         json.writeNumber(Rounding.to(value, DIGITS));
     }
 
-    private void uncertainty(@Nullable StateUncertainty u) {
+    private void uncertainty(CarbonateState state, @Nullable StateUncertainty u) {
         if (u != null) {
             json.writeName(UNCERTAINTY);
             json.writeStartObject();
-            each(PH, u.phTotal(), 1);
-            each(ALKALINITY, u.totalAlkalinity(), MICRO);
-            each(DIC, u.dic(), MICRO);
-            each(PCO2, u.pco2Atm(), MICRO);
-            each(FCO2, u.fco2Atm(), MICRO);
-            each(CO2, u.co2(), MICRO);
-            each(BICARBONATE, u.bicarbonate(), MICRO);
-            each(CARBONATE, u.carbonate(), MICRO);
-            each(ARAGONITE, u.omegaAragonite(), 1);
-            each(CALCITE, u.omegaCalcite(), 1);
+            each(PH, state.phTotal(), u.phTotal(), 1);
+            each(ALKALINITY, state.totalAlkalinity(), u.totalAlkalinity(), MICRO);
+            each(DIC, state.dic(), u.dic(), MICRO);
+            each(PCO2, state.pco2Atm(), u.pco2Atm(), MICRO);
+            each(FCO2, state.fco2Atm(), u.fco2Atm(), MICRO);
+            each(CO2, state.co2(), u.co2(), MICRO);
+            each(BICARBONATE, state.bicarbonate(), u.bicarbonate(), MICRO);
+            each(CARBONATE, state.carbonate(), u.carbonate(), MICRO);
+            each(ARAGONITE, state.omegaAragonite(), u.omegaAragonite(), 1);
+            each(CALCITE, state.omegaCalcite(), u.omegaCalcite(), 1);
             json.writeEndObject();
         }
     }
 
-    private void each(SerializableString name, StandardUncertainty u, double factor) {
+    private void each(SerializableString name, double value, StandardUncertainty u, double factor) {
+        double dust = Math.abs(value) * DUST;
         json.writeName(name);
         json.writeStartObject();
-        share(TOTAL, u.total() * factor);
-        share(FROM_CONSTANTS, u.fromConstants() * factor);
-        share(FROM_INPUTS, u.fromInputs() * factor);
+        share(TOTAL, u.total(), dust, factor);
+        share(FROM_CONSTANTS, u.fromConstants(), dust, factor);
+        share(FROM_INPUTS, u.fromInputs(), dust, factor);
         json.writeEndObject();
     }
 
-    private void share(SerializableString name, double value) {
+    private void share(SerializableString name, double value, double dust, double factor) {
         json.writeName(name);
-        json.writeNumber(Rounding.to(value, DIGITS_OF_UNCERTAINTY));
+        json.writeNumber(value <= dust ? 0 : Rounding.to(value * factor, DIGITS_OF_UNCERTAINTY));
     }
 
     private void ammonia(@Nullable UnionisedAmmonia ammonia) {
