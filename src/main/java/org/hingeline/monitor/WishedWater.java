@@ -61,7 +61,8 @@ record WishedWater(
             faults.addImpossible(
                     reason,
                     "",
-                    "no state was found for this water (" + reason.code() + "): " + String.join(
+                    "no state was found for this water (" + reason.code() + "): "
+                            + String.join(
                                     " ",
                                     given(faults, "ph", wish.ph()),
                                     given(faults, "totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg()),

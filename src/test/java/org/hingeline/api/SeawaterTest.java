@@ -233,6 +233,7 @@ class SeawaterTest {
                                 .at("/standardUncertainty/omegaAragonite/total")
                                 .asDouble()
                         / omega)
+                .as("first order leaves out the curvature of a step of 0.05")
                 .isCloseTo(0.117, within(0.006));
         assertThat(state.at("/standardUncertainty").has("densityKgM3")).isFalse();
         assertThat(state(water + ",\"withUncertainty\":false", 0.02).has("standardUncertainty"))

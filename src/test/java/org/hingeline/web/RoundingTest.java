@@ -32,9 +32,7 @@ class RoundingTest {
             assertThat(Math.abs(rounded / value - 1))
                     .as("%s to %s", value, rounded)
                     .isLessThan(5.1e-10);
-            assertThat(new BigDecimal(rounded)
-                            .round(new MathContext(10))
-                            .doubleValue())
+            assertThat(new BigDecimal(rounded).round(new MathContext(10)).doubleValue())
                     .as("the double nearest to ten digits, for %s", value)
                     .isEqualTo(rounded);
         }
