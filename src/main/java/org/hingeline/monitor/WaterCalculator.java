@@ -191,7 +191,7 @@ public final class WaterCalculator {
             faults.add(
                     "ammoniaMgL",
                     "ammoniaMgL " + WaterFaults.plain(totalMgL) + " cannot be split at the water's phTotal "
-                            + Math.rint(ph * 100) / 100 + ": pH 2 to 12 is accepted");
+                            + Math.rint(ph * 100) / 100 + ": pH 2 to 13 is accepted");
             return null;
         }
         return new UnionisedAmmonia(

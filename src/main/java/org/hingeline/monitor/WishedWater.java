@@ -37,8 +37,8 @@ record WishedWater(
 
     private void tell(UnsolvableReason reason, WaterFaults faults) {
         if (reason == UnsolvableReason.INPUTS_CONTRADICT && known instanceof PhAndAlkalinity) {
-            String ph = given("ph", wish.ph());
-            String alkalinity = given("totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg());
+            String ph = given(faults, "ph", wish.ph());
+            String alkalinity = given(faults, "totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg());
             faults.addImpossible(
                     reason,
                     "ph",
@@ -49,8 +49,8 @@ record WishedWater(
                     "totalAlkalinityUmolKg",
                     alkalinity + " is too low for " + ph + ": a higher one is accepted");
         } else if (reason == UnsolvableReason.INPUTS_CONTRADICT && known instanceof DicAndPco2) {
-            String dic = given("dicUmolKg", wish.dicUmolKg());
-            String pco2 = given("pco2Uatm", wish.pco2Uatm());
+            String dic = given(faults, "dicUmolKg", wish.dicUmolKg());
+            String pco2 = given(faults, "pco2Uatm", wish.pco2Uatm());
             faults.addImpossible(
                     reason,
                     "dicUmolKg",
@@ -61,13 +61,17 @@ record WishedWater(
             faults.addImpossible(
                     reason,
                     "",
-                    "no state was found for this water (" + reason.code() + "): " + given("ph", wish.ph())
-                            + given(" totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg())
-                            + given(" dicUmolKg", wish.dicUmolKg()) + given(" pco2Uatm", wish.pco2Uatm()));
+                    "no state was found for this water (" + reason.code() + "): "
+                            + String.join(
+                                    " ",
+                                    given(faults, "ph", wish.ph()),
+                                    given(faults, "totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg()),
+                                    given(faults, "dicUmolKg", wish.dicUmolKg()),
+                                    given(faults, "pco2Uatm", wish.pco2Uatm())));
         }
     }
 
-    private static String given(String name, @Nullable Double value) {
-        return value == null ? "" : name + " " + WaterFaults.plain(value);
+    private static String given(WaterFaults faults, String name, @Nullable Double value) {
+        return value == null ? "" : faults.at(name) + " " + WaterFaults.plain(value);
     }
 }

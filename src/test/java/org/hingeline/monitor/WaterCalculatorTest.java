@@ -222,7 +222,14 @@ class WaterCalculatorTest {
         refuses(measured().warmToC(Double.NaN), "warmToC", "NaN");
         refuses(measured().equilibrateToUatm(0.0), "equilibrateToUatm", "0", "above 0 to 1000000 µatm");
         refuses(measured().ammoniaMgL(-1.0), "ammoniaMgL", "-1", "0 to 1000 mg/L");
-        refuses(water().ph(12.5).dicUmolKg(2000.0).ammoniaMgL(1.0), "ammoniaMgL", "12.5", "2 to 12");
+        refuses(
+                water().temperatureC(0.0)
+                        .totalAlkalinityUmolKg(100_000.0)
+                        .dicUmolKg(0.0)
+                        .ammoniaMgL(1.0),
+                "ammoniaMgL",
+                "phTotal 13.",
+                "2 to 13");
         refuses(measured().blendWith(new WaterWish.Blend(null, null)), "blendWith/water", "missing");
         refuses(measured().blendWith(new WaterWish.Blend(null, null)), "blendWith/massShare", "missing", "0 to 1");
         refuses(measured().blendWith(new WaterWish.Blend(measured().build(), 1.2)), "blendWith/massShare", "1.2");
