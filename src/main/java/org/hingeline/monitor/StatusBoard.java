@@ -63,11 +63,6 @@ public final class StatusBoard {
                 .reduce((earlier, later) -> later);
     }
 
-    /** The sensors in use at a point. */
-    public List<Sensor> sensors(Point point) {
-        return storage.read(books -> books.place().sensorsOf(point.id()));
-    }
-
     private static PointStatus status(Books books, Point point, List<Alert> alerts, List<Batch> batches, Instant now) {
         List<Limit> limits = books.limits().limits(point.id());
         return new PointStatus(

@@ -7,6 +7,7 @@ import java.util.Map;
 import org.hingeline.monitor.CalculatedWater;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.PointStatus;
+import org.hingeline.monitor.StateWishes;
 import org.hingeline.monitor.StatusBoard;
 import org.hingeline.monitor.WaterCalculator;
 import org.hingeline.monitor.WaterState;
@@ -28,11 +29,13 @@ final class CalculatorPages {
     private static final int LONGEST_FIELD = 60;
 
     private final StatusBoard board;
+    private final StateWishes states;
     private final WaterCalculator calculator;
     private final PageMaker pages;
 
-    CalculatorPages(StatusBoard board, WaterCalculator calculator, PageMaker pages) {
+    CalculatorPages(StatusBoard board, StateWishes states, WaterCalculator calculator, PageMaker pages) {
         this.board = board;
+        this.states = states;
         this.calculator = calculator;
         this.pages = pages;
     }
@@ -47,14 +50,15 @@ final class CalculatorPages {
         String point = ctx.queryParam("point");
         CalculatorSource source = point == null || point.isBlank() ? null : source(ctx, point);
         Map<String, String> values = new LinkedHashMap<>();
+        values.put("constants", states.rules().constants().wireName());
+        values.put("boron", states.rules().boron().wireName());
         if (source != null) {
             values.putAll(source.form());
         }
         values.putAll(typed);
         CalculatorForm form = new CalculatorForm(values);
-        Source shown = source == null ? null : source.shown(sent ? typed : null, PageMaker.zone(ctx));
         if (!sent && (source == null || !source.complete())) {
-            answer(ctx, 200, Form.of(form.shown()), shown, null);
+            answer(ctx, 200, Form.of(form.shown()), shown(ctx, source, null, null), null);
             return;
         }
         CalculatedWater water = null;
@@ -66,11 +70,21 @@ final class CalculatorPages {
             refusal = e;
         }
         Map<String, String> errors = form.errors(refusal);
+        Double omega = water == null ? null : (Double) water.state().omegaAragonite();
+        Source shown = shown(ctx, source, sent ? typed : null, omega);
         if (water == null || !errors.isEmpty()) {
             answer(ctx, sent ? 422 : 200, new Form(form.shown(), errors), shown, null);
         } else {
             answer(ctx, 200, Form.of(form.shown()), shown, CalculatorResult.of(form, water));
         }
+    }
+
+    private static @Nullable Source shown(
+            Context ctx,
+            @Nullable CalculatorSource source,
+            @Nullable Map<String, String> typed,
+            @Nullable Double omega) {
+        return source == null ? null : source.shown(typed, omega, PageMaker.zone(ctx));
     }
 
     private void answer(Context ctx, int status, Form form, @Nullable Source source, @Nullable Worked worked) {
@@ -104,6 +118,6 @@ final class CalculatorPages {
                     "No such water state",
                     "no water was known at " + point.point().name() + " then");
         }
-        return new CalculatorSource(point, state, board.sensors(point.point()));
+        return new CalculatorSource(point, state, states.of(state), states.orphans(state));
     }
 }

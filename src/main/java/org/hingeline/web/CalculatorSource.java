@@ -7,16 +7,15 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.Function;
-import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import org.hingeline.alert.Limit;
 import org.hingeline.alert.Side;
-import org.hingeline.hatchery.Sensor;
 import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.PointStatus;
+import org.hingeline.monitor.WaterNumbers;
 import org.hingeline.monitor.WaterState;
 import org.hingeline.monitor.WaterState.InputUsed;
-import org.hingeline.monitor.WaterState.Note;
+import org.hingeline.monitor.WaterWish;
 import org.hingeline.seawater.PhScale;
 import org.hingeline.web.view.CalculatorFields;
 import org.hingeline.web.view.CalculatorView.Origin;
@@ -28,14 +27,22 @@ import org.jspecify.annotations.Nullable;
 final class CalculatorSource {
     private static final Map<Quantity, String> FIELDS = fields();
 
+    private static final double WORTH_A_WORD = 1e-3;
+
     private final PointStatus point;
     private final WaterState state;
-    private final Map<String, Sensor> sensors;
+    private final WaterWish wish;
+    private final List<InputUsed> orphans;
 
-    CalculatorSource(PointStatus point, WaterState state, List<Sensor> sensors) {
+    /**
+     * @param wish what gives the state again
+     * @param orphans inputs whose sensors are not registered any more
+     */
+    CalculatorSource(PointStatus point, WaterState state, WaterWish wish, List<InputUsed> orphans) {
         this.point = point;
         this.state = state;
-        this.sensors = sensors.stream().collect(Collectors.toMap(Sensor::code, Function.identity()));
+        this.wish = wish;
+        this.orphans = List.copyOf(orphans);
     }
 
     private static Map<Quantity, String> fields() {
@@ -44,6 +51,7 @@ final class CalculatorSource {
         fields.put(Quantity.TEMPERATURE, "temp");
         fields.put(Quantity.SALINITY, "salt");
         fields.put(Quantity.TOTAL_ALKALINITY, "ta");
+        fields.put(Quantity.CALCIUM, "calcium");
         return fields;
     }
 
@@ -56,22 +64,43 @@ final class CalculatorSource {
     Map<String, String> form() {
         Map<String, String> form = new LinkedHashMap<>();
         form.put("pair", "ph-ta");
-        for (InputUsed input : state.inputs()) {
-            String field = FIELDS.get(input.quantity());
-            if (field == null) {
-                continue;
-            }
-            form.put(field, Rounded.typed(input.value()));
-            if (input.quantity() == Quantity.PH) {
-                form.put("phUnit", scale(input).wireName());
-            }
-            Sensor sensor = sensors.get(input.sensor());
-            if (sensor != null) {
-                form.put(field + "Pm", Rounded.typed(sensor.standardUncertainty()));
-            }
-        }
+        state.inputs().forEach(input -> put(form, FIELDS.get(input.quantity()), input.value()));
+        form.put("phUnit", scale().wireName());
+        FIELDS.forEach((quantity, field) -> {
+            Double plusMinus = plusMinus(quantity);
+            put(form, field + "Pm", plusMinus == null ? null : Rounded.typedPlusMinus(plusMinus));
+        });
+        put(form, "constants", wish.constants());
+        put(form, "boron", wish.boron());
         limit().ifPresent(limit -> form.put("limit", Rounded.typed(limit.threshold())));
         return form;
+    }
+
+    private static void put(Map<String, String> form, @Nullable String field, @Nullable Object value) {
+        if (field != null && value != null) {
+            form.put(field, value instanceof Double number ? Rounded.typed(number) : value.toString());
+        }
+    }
+
+    /** As it counts in the state. */
+    private @Nullable Double plusMinus(Quantity quantity) {
+        WaterWish.Uncertainty u = wish.uncertainty();
+        if (u == null) {
+            return null;
+        }
+        return switch (quantity) {
+            case PH -> u.ph();
+            case TEMPERATURE -> u.temperatureC();
+            case SALINITY -> u.salinity();
+            case TOTAL_ALKALINITY -> u.totalAlkalinityUmolKg();
+            case CALCIUM -> u.calciumMmolKg();
+            default -> null;
+        };
+    }
+
+    private PhScale scale() {
+        String name = wish.phScale();
+        return name == null ? PhScale.TOTAL : PhScale.fromWireName(name).orElse(PhScale.TOTAL);
     }
 
     private Optional<Limit> limit() {
@@ -80,14 +109,13 @@ final class CalculatorSource {
                 .max(Comparator.comparingDouble(Limit::threshold));
     }
 
-    private PhScale scale(InputUsed input) {
-        Sensor sensor = sensors.get(input.sensor());
-        PhScale scale = sensor == null ? null : sensor.phScale();
-        return scale == null ? PhScale.TOTAL : scale;
-    }
-
-    /** @param typed what a person has made of it; null when it is shown as it was */
-    Source shown(@Nullable Map<String, String> typed, ZoneId zone) {
+    /**
+     * The account of it.
+     *
+     * @param typed what a person has made of it; null when it is shown as it was
+     * @param omega what was worked out just now; null when nothing was
+     */
+    Source shown(@Nullable Map<String, String> typed, @Nullable Double omega, ZoneId zone) {
         return new Source(
                 point.point().code(),
                 point.point().name(),
@@ -96,27 +124,38 @@ final class CalculatorSource {
                 state.missing().stream()
                         .map(missing -> Words.missing(missing, state.at()))
                         .toList(),
-                state.cautions().stream()
-                        .map(Note::detail)
-                        .map(CalculatorResult::whole)
-                        .toList(),
+                notes(typed == null ? omega : null),
                 typed == null ? "" : changed(typed),
                 Optional.ofNullable(state.numbers())
                         .map(numbers -> Rounded.of(numbers.omegaAragonite(), numbers.omegaAragoniteUncertainty(), 2))
-                        .map(omega -> omega.value() + " \u00b1" + omega.plusMinus())
+                        .map(was -> was.value() + " \u00b1" + was.plusMinus())
                         .orElse(""));
     }
 
+    /** Those of the state, and that it would come out otherwise today. */
+    private List<String> notes(@Nullable Double omega) {
+        List<String> notes = new ArrayList<>();
+        state.cautions().forEach(note -> notes.add(CalculatorResult.whole(note.detail())));
+        WaterNumbers stored = state.numbers();
+        if (omega != null && stored != null && Math.abs(omega / stored.omegaAragonite() - 1) > WORTH_A_WORD) {
+            notes.add("At the time \u03a9 " + Words.number(stored.omegaAragonite(), 3)
+                    + " was computed; with the sensors as"
+                    + " they are registered and the constants as they are chosen now it is " + Words.number(omega, 3)
+                    + ".");
+        }
+        return notes;
+    }
+
     private Origin origin(InputUsed input, ZoneId zone) {
-        Sensor sensor = sensors.get(input.sensor());
+        Double plusMinus = plusMinus(input.quantity());
         return new Origin(
                 input.quantity().words(),
                 Rounded.typed(input.value()),
-                sensor == null ? "" : Rounded.typed(sensor.standardUncertainty()),
+                plusMinus == null ? "" : Rounded.typedShort(plusMinus),
                 input.quantity() == Quantity.PH
-                        ? CalculatorFields.scaleLabel(scale(input))
+                        ? CalculatorFields.scaleLabel(scale())
                         : input.quantity().unit().symbol(),
-                input.origin() + " " + input.sensor() + (sensor == null ? " (not registered any more)" : ""),
+                input.source() + (orphans.contains(input) ? " (not registered any more)" : ""),
                 Moment.of(input.at(), point.now(), zone),
                 input.age(state.at()).toSeconds() < 60
                         ? "fresh then"
@@ -132,24 +171,25 @@ final class CalculatorSource {
             changed.add("the pair");
         }
         FIELDS.forEach((quantity, field) -> {
-            boolean same = List.of(field, field + "Unit", field + "Pm").stream()
-                    .allMatch(name -> was.getOrDefault(name, "")
-                            .equals(typed.getOrDefault(name, was.getOrDefault(name, ""))
-                                    .strip()));
+            boolean same = Stream.of(field, field + "Unit", field + "Pm").noneMatch(name -> differs(typed, was, name));
             if (!same) {
                 changed.add(quantity.words());
             }
         });
-        for (String other : List.of("phTemp", "phosphate", "silicate", "calcium")) {
+        for (String other : List.of("phTemp", "phosphate", "silicate")) {
             if (!typed.getOrDefault(other, "").isBlank()) {
                 changed.add(other.equals("phTemp") ? "where pH was read" : other);
             }
         }
-        if (!typed.getOrDefault("constants", "lueker2000").equals("lueker2000")
-                || !typed.getOrDefault("boron", "lee2010").equals("lee2010")) {
+        if (differs(typed, was, "constants") || differs(typed, was, "boron")) {
             changed.add("the constants");
         }
         return changed.isEmpty() ? "" : "You changed " + listed(changed) + ".";
+    }
+
+    private static boolean differs(Map<String, String> typed, Map<String, String> was, String field) {
+        String before = was.getOrDefault(field, "");
+        return !typed.getOrDefault(field, before).strip().equals(before);
     }
 
     private static String listed(List<String> words) {

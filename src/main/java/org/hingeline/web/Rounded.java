@@ -41,6 +41,11 @@ record Rounded(String value, String plusMinus) {
         return plain(new BigDecimal(value).round(AS_TYPED));
     }
 
+    /** The same with four figures. */
+    static String typedPlusMinus(double value) {
+        return plain(new BigDecimal(value).round(new MathContext(4)));
+    }
+
     /** The same with two figures. */
     static String typedShort(double value) {
         return plain(new BigDecimal(value).round(new MathContext(2)));

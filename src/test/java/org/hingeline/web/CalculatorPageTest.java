@@ -48,8 +48,20 @@ class CalculatorPageTest {
                 site: {code: alder-slough, name: Alder Slough Clams, zone: America/Vancouver}
                 points:
                   - {code: pond, name: Nursery pond, kind: storage, position: 1}
+                sensors:
+                  - {point: pond, code: ph-p, quantity: ph, unit: "[pH]", phScale: nbs, standardUncertainty: 0.03}
+                  - {point: pond, code: temp-p, quantity: temperature, unit: "[degF]", standardUncertainty: 0.2}
+                  - {point: pond, code: cond-p, quantity: conductivity, unit: mS/cm, standardUncertainty: 0.2}
+                  - {point: pond, code: ta-p, quantity: totalAlkalinity, unit: meq/L, standardUncertainty: 12}
+                  - {point: pond, code: ca-p, quantity: calcium, unit: mmol/kg, standardUncertainty: 0.05}
                 """);
         stranger = service.token(other, Role.MANAGER);
+        String pond = row("pond", "temperature", 61.7, T0) + "," + row("pond", "conductivity", 33.3, T0) + ","
+                + row("pond", "ph", 8.1, T0) + "," + row("pond", "totalAlkalinity", 2.05, T0) + ","
+                + row("pond", "calcium", 9.1, T0);
+        assertThat(service.send("POST", "/api/v1/readings", service.gatewayKey(other), "{\"readings\":[" + pond + "]}")
+                        .body())
+                .contains("\"stored\":5");
         post("larval-3", 7.93, T0.minus(Duration.ofMinutes(40)));
         post("larval-3", 7.71, T0.minus(Duration.ofMinutes(5)));
         assertThat(service.postReadings("{\"readings\":[" + row("larval-4", "ph", 7.9, T0) + ","
@@ -311,6 +323,61 @@ class CalculatorPageTest {
                 .contains("Under the limit of 2.00, by more than its ±.")
                 .doesNotContain("You changed");
         assertThat(value(page, "limit")).isEqualTo("2");
+    }
+
+    @Test
+    void takes_up_a_salinity_from_conductivity_a_measured_calcium_and_nbs_buffers_as_the_state_did() throws Exception {
+        JsonNode stored = new JsonMapper()
+                .readTree(service.get("/api/v1/points/pond/water", stranger).body());
+
+        HttpResponse<String> answer = answer("/calculator?point=pond", stranger);
+
+        String words = words(answer.body());
+        assertThat(answer.statusCode()).as(words).isEqualTo(200);
+        for (String name :
+                new String[] {"omegaAragonite", "phTotal", "dicUmolKg", "salinity", "totalAlkalinityUmolKg"}) {
+            double value = stored.get(name).asDouble();
+            assertThat(digits(words, name)).as(name).isCloseTo(value, within(1e-6 * value));
+        }
+        double u = stored.get("standardUncertainty")
+                .get("omegaAragonite")
+                .get("total")
+                .asDouble();
+        assertThat(plusMinus(words, "omegaAragonite")).isCloseTo(u, within(1e-4 * u));
+        assertThat(words)
+                .contains("conductivity sensor cond-p")
+                .contains("NBS scale sensor ph-p")
+                .contains("calcium 9.1 ±0.05 mmol/kg sensor ca-p")
+                .doesNotContain("At the time Ω");
+        assertThat(value(answer.body(), "calcium")).isEqualTo("9.1");
+    }
+
+    @Test
+    void says_so_when_a_sensor_is_registered_otherwise_than_when_the_state_was_computed() {
+        String place = """
+                site: {code: alder-slough, name: Alder Slough Clams, zone: America/Vancouver}
+                points:
+                  - {code: sump, name: Sump, kind: storage, position: 2}
+                sensors:
+                  - {point: sump, code: ph-s, quantity: ph, unit: "[pH]", phScale: SCALE, standardUncertainty: 0.03}
+                  - {point: sump, code: temp-s, quantity: temperature, unit: Cel, standardUncertainty: 0.2}
+                  - {point: sump, code: sal-s, quantity: salinity, unit: "1", standardUncertainty: 0.2}
+                  - {point: sump, code: ta-s, quantity: totalAlkalinity, unit: umol/kg, standardUncertainty: 12}
+                """;
+        Site other = service.addPlace(place.replace("SCALE", "total"));
+        String rows = row("sump", "temperature", 17, T0) + "," + row("sump", "salinity", 28, T0) + ","
+                + row("sump", "totalAlkalinity", 2000, T0) + "," + row("sump", "ph", 8.0, T0);
+        service.send("POST", "/api/v1/readings", service.gatewayKey(other), "{\"readings\":[" + rows + "]}");
+        assertThat(words(answer("/calculator?point=sump", stranger).body()))
+                .contains("total scale sensor ph-s")
+                .doesNotContain("At the time Ω");
+
+        service.addPlace(place.replace("SCALE", "nbs"));
+
+        assertThat(words(answer("/calculator?point=sump", stranger).body()))
+                .contains("NBS scale sensor ph-s")
+                .containsPattern(
+                        "At the time Ω 2\\.\\d+ was computed; with the sensors as they are registered .* now it is 1\\.\\d+\\.");
     }
 
     @Test
