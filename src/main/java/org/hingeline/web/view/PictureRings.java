@@ -14,6 +14,8 @@ final class PictureRings {
     private static final int MOST = 7;
     private static final double MARGIN = 0.07;
     private static final double MARGIN_OF_WORDS = 0.24;
+    /** With less a value stands unlabelled: its neighbours tell it. */
+    private static final double LEAST_ROOM = 0.1;
     /** Labels are wider than high: a step down counts for more than one across. */
     private static final double DOWN_COUNTS = 1.6;
 
@@ -79,9 +81,9 @@ final class PictureRings {
             Spot place = line.stream()
                     .max(Comparator.comparingDouble(spot -> room(spot, margin)))
                     .orElseThrow();
-            boolean fits = room(place, margin) > 0.05;
+            boolean fits = room(place, margin) > LEAST_ROOM;
             if (fits) {
-                taken.add(new Taken(OmegaPicture.shareAcross(place), OmegaPicture.shareDown(place)));
+                take(OmegaPicture.shareAcross(place), OmegaPicture.shareDown(place), margin);
             }
             rings.add(new Ring(
                     css,
@@ -89,6 +91,15 @@ final class PictureRings {
                     fits ? label : "",
                     OmegaPicture.percent(OmegaPicture.shareAcross(place)),
                     OmegaPicture.percent(OmegaPicture.shareDown(place))));
+        }
+    }
+
+    /** A label of words is three times as wide as one of a number. */
+    private void take(double x, double y, double margin) {
+        taken.add(new Taken(x, y));
+        if (margin == MARGIN_OF_WORDS) {
+            taken.add(new Taken(x - MARGIN_OF_WORDS / 2, y));
+            taken.add(new Taken(x + MARGIN_OF_WORDS / 2, y));
         }
     }
 
