@@ -30,9 +30,6 @@ final class WishReader {
     static final Range TEMPERATURE_C = Range.of(-2, 45, " °C");
     static final Range PCO2_UATM = Range.above(0, 1_000_000, " µatm");
 
-    /** Gives a salinity about 0.1 together with the usual 0.1 °C. */
-    static final double CONDUCTIVITY_UNCERTAINTY_MS_CM = 0.1;
-
     private static final Range SALINITY = Range.of(0, 50, "");
     private static final Range CONDUCTIVITY_MS_CM = Range.of(0, 200, " mS/cm");
     private static final Range PH = Range.of(2, 13, "");
@@ -42,8 +39,6 @@ final class WishReader {
     private static final Range SILICATE_UMOL_KG = Range.of(0, 10_000, " µmol/kg");
     private static final Range CALCIUM_MMOL_KG = Range.of(0, 100, " mmol/kg");
     private static final String PAIR = "ph, totalAlkalinityUmolKg, dicUmolKg, pco2Uatm";
-    private static final WaterWish.Uncertainty USUAL =
-            new WaterWish.Uncertainty(null, null, null, null, null, null, null, null);
 
     /** A salinity with what is known of it. */
     private record Salinity(double value, double uncertainty, boolean fromConductivity, List<Caution> cautions) {
@@ -56,12 +51,12 @@ final class WishReader {
 
     private final WaterWish wish;
     private final WaterFaults faults;
-    private final WaterWish.Uncertainty uncertainty;
+    private final WishUncertainty uncertainty;
 
     WishReader(WaterWish wish, WaterFaults faults) {
         this.wish = wish;
         this.faults = faults;
-        this.uncertainty = wish.uncertainty() == null ? USUAL : wish.uncertainty();
+        this.uncertainty = new WishUncertainty(wish.uncertainty(), faults);
     }
 
     /**
@@ -74,7 +69,7 @@ final class WishReader {
         double temperatureC = required("temperatureC", wish.temperatureC());
         PhScale scale = scale();
         Double readAtC = readAtC();
-        InputUncertainty inputs = uncertainty(scale);
+        InputUncertainty inputs = uncertainty.inputs(scale);
         Salinity salinity = salinity(temperatureC, inputs);
         Conditions conditions = new Conditions(
                 temperatureC,
@@ -91,7 +86,7 @@ final class WishReader {
                         wish,
                         conditions,
                         known,
-                        withSalinity(inputs, salinity.uncertainty()),
+                        WishUncertainty.withSalinity(inputs, salinity.uncertainty()),
                         salinity.fromConductivity(),
                         salinity.cautions());
     }
@@ -128,17 +123,16 @@ final class WishReader {
                             + WaterFaults.plain(given) + " and " + WaterFaults.plain(conductivity));
             return Salinity.NONE;
         }
-        double ofConductivity = notNegative(
-                "conductivityMsCm", uncertainty.conductivityMsCm(), CONDUCTIVITY_UNCERTAINTY_MS_CM, 20, " mS/cm");
+        double ofConductivity = uncertainty.ofConductivityMsCm();
         if (conductivity != null) {
-            unusedUncertainty("salinity", uncertainty.salinity(), "conductivityMsCm");
+            uncertainty.refuseThatOfSalinity();
             double value = faults.number(
                     "conductivityMsCm", conductivity, CONDUCTIVITY_MS_CM, UnsolvableReason.SALINITY_NOT_COVERED);
             return Double.isNaN(value) || Double.isNaN(temperatureC)
                     ? Salinity.NONE
                     : ofConductivity(value, temperatureC, ofConductivity, inputs.temperatureC());
         }
-        unusedUncertainty("conductivityMsCm", uncertainty.conductivityMsCm(), "salinity");
+        uncertainty.refuseThatOfConductivity();
         if (given == null) {
             faults.add(
                     "salinity",
@@ -164,16 +158,6 @@ final class WishReader {
         double uncertain = ConductivitySalinity.uncertainty(conductivity, temperatureC, ofConductivity, ofTemperature)
                 .orElseThrow();
         return new Salinity(known.value(), uncertain, true, known.cautions());
-    }
-
-    private void unusedUncertainty(String name, @Nullable Double given, String measured) {
-        if (given != null) {
-            String field = "uncertainty/" + name;
-            faults.add(
-                    field,
-                    faults.at(field) + " " + WaterFaults.plain(given) + " is not used: the water is given by its "
-                            + measured + "; uncertainty/" + measured + " is accepted");
-        }
     }
 
     private PhScale scale() {
@@ -293,38 +277,5 @@ final class WishReader {
 
     private static String named(String name, @Nullable Double value) {
         return value == null ? "" : name + " " + WaterFaults.plain(value);
-    }
-
-    /** Those that were given, the usual ones for the rest; salinity as if it had been given. */
-    private InputUncertainty uncertainty(PhScale scale) {
-        InputUncertainty usual = InputUncertainty.DEFAULTS;
-        double usualPh = scale == PhScale.NBS ? InputUncertainty.PH_ON_NBS_BUFFERS : usual.ph();
-        return new InputUncertainty(
-                notNegative("ph", uncertainty.ph(), usualPh, 1, ""),
-                notNegative(
-                                "totalAlkalinityUmolKg",
-                                uncertainty.totalAlkalinityUmolKg(),
-                                usual.totalAlkalinity() * 1e6,
-                                10_000,
-                                " µmol/kg")
-                        / 1e6,
-                notNegative("dicUmolKg", uncertainty.dicUmolKg(), usual.dic() * 1e6, 10_000, " µmol/kg") / 1e6,
-                notNegative("pco2Uatm", uncertainty.pco2Uatm(), usual.pco2Atm() * 1e6, 100_000, " µatm") / 1e6,
-                notNegative("temperatureC", uncertainty.temperatureC(), usual.temperatureC(), 10, " °C"),
-                notNegative("salinity", uncertainty.salinity(), usual.salinity(), 10, ""),
-                notNegative("calciumMmolKg", uncertainty.calciumMmolKg(), usual.calcium() * 1e3, 10, " mmol/kg") / 1e3);
-    }
-
-    private double notNegative(String name, @Nullable Double value, double usual, double most, String unit) {
-        if (value == null) {
-            return usual;
-        }
-        double number = faults.number("uncertainty/" + name, value, Range.of(0, most, unit));
-        return Double.isNaN(number) ? usual : number;
-    }
-
-    private static InputUncertainty withSalinity(InputUncertainty u, double salinity) {
-        return new InputUncertainty(
-                u.ph(), u.totalAlkalinity(), u.dic(), u.pco2Atm(), u.temperatureC(), salinity, u.calcium());
     }
 }

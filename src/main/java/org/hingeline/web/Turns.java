@@ -20,16 +20,17 @@ final class Turns {
         this.longestWait = longestWait;
     }
 
-    /** @throws ProblemException 503 when there is no place in time */
-    void run(Runnable work) {
+    /** @return false when there was no place in time and nothing was done */
+    boolean run(Runnable work) {
         if (!places.tryAcquire() && !waited()) {
-            throw new ProblemException(503, "Busy", "other lists are being worked on; send it again in a few seconds");
+            return false;
         }
         try {
             work.run();
         } finally {
             places.release();
         }
+        return true;
     }
 
     private boolean waited() {
