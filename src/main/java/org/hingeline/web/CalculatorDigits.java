@@ -13,7 +13,6 @@ import org.hingeline.web.CalculatorResult.Part;
 /** All numbers of a water with all digits that are worth copying, under the names that the API has for them. */
 final class CalculatorDigits {
     private static final MathContext EIGHT = new MathContext(8);
-    private static final String ROW = "%-22s %12s %12s %12s %12s%n";
 
     private CalculatorDigits() {}
 
@@ -38,7 +37,7 @@ final class CalculatorDigits {
     }
 
     private static void row(StringBuilder text, String name, String value, String u, String constants, String inputs) {
-        text.append(String.format(Locale.ROOT, ROW, name, value, u, constants, inputs)
+        text.append(String.format(Locale.ROOT, "%-22s %12s %12s %12s %12s%n", name, value, u, constants, inputs)
                 .replaceAll(" +\\R", "\n"));
     }
 

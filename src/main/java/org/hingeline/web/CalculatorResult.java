@@ -195,10 +195,12 @@ final class CalculatorResult {
 
     /** The same in the unit that the person chose. */
     private String also(Part part) {
-        if (part == TA) {
-            return also(part, "ta", Quantity.TOTAL_ALKALINITY);
-        }
-        return part == DIC ? also(part, "dic", Quantity.DIC) : part == PCO2 ? also(part, "pco2", Quantity.PCO2) : "";
+        return switch (part.code()) {
+            case "totalAlkalinityUmolKg" -> also(part, "ta", Quantity.TOTAL_ALKALINITY);
+            case "dicUmolKg" -> also(part, "dic", Quantity.DIC);
+            case "pco2Uatm" -> also(part, "pco2", Quantity.PCO2);
+            default -> "";
+        };
     }
 
     private String also(Part part, String field, Quantity quantity) {
