@@ -21,7 +21,8 @@ import org.hingeline.hatchery.Codes;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.PointKind;
 import org.hingeline.measure.Quantity;
-import org.hingeline.measure.UnitConversion;
+import org.hingeline.measure.UnitChoice;
+import org.hingeline.measure.Units;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.LimitDesk;
 import org.hingeline.monitor.PlacePlan;
@@ -143,8 +144,8 @@ public final class PlaceFileReader {
                     ? in.text("unit")
                     : in.needed(
                             "unit",
-                            text -> UnitConversion.of(quantity, text).map(UnitConversion::ucum),
-                            "one of " + UnitConversion.acceptedFor(quantity));
+                            text -> Units.find(quantity, text).map(UnitChoice::ucum),
+                            "one of " + Units.codes(quantity));
             PhScale phScale = phScale(in, quantity);
             Double uncertainty = in.numberAbove("standardUncertainty", 0, 1e6);
             if (!in.has("standardUncertainty")) {

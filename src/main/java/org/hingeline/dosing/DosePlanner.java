@@ -89,7 +89,7 @@ public final class DosePlanner {
         private DosePlan plan(DosedWater water, double massG, double most, List<DoseStep> steps) {
             double added = water.alkalinityOf(massG);
             CarbonateState after = water.with(added);
-            DoseUncertainty uncertainty = new DoseUncertainty(water, added, request.uncertainty());
+            DoseUncertainty uncertainty = new DoseUncertainty(water.before(), after, request.uncertainty());
             double againstTarget = uncertainty.afterAgainst(request.target());
             List<Caution> cautions = new ArrayList<>(DoseCautions.of(request, water, massG, after));
             if (nearABound(uncertainty, after)) {

@@ -1,11 +1,10 @@
 package org.hingeline.dosing;
 
-import org.hingeline.seawater.CarbonateResult;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.CarbonateSystem;
+import org.hingeline.seawater.KnownPair;
 import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
-import org.hingeline.seawater.SeawaterConstants;
 
 /**
  * A body of water and what an agent makes of it, closed to the air: alkalinity and inorganic carbon add up, all else
@@ -13,7 +12,6 @@ import org.hingeline.seawater.SeawaterConstants;
  */
 final class DosedWater {
     private final CarbonateState before;
-    private final SeawaterConstants constants;
     private final Agent agent;
     private final double kilograms;
     private final double molPerGram;
@@ -21,7 +19,6 @@ final class DosedWater {
 
     DosedWater(CarbonateState before, DoseRequest request) {
         this.before = before;
-        this.constants = SeawaterConstants.of(before.conditions());
         this.agent = request.agent();
         this.kilograms = kilograms(before, request.receiver());
         this.molPerGram = request.assayPercent() / 100 / request.form().gramsPerMol();
@@ -49,29 +46,17 @@ final class DosedWater {
 
     /** The water with that much alkalinity added by the agent, mol/kg-seawater. */
     CarbonateState with(double alkalinity) {
-        return plus(constants, before, agent, alkalinity);
-    }
-
-    /** Another water with that much alkalinity added by the same agent. */
-    CarbonateState with(CarbonateState other, double alkalinity) {
-        return plus(SeawaterConstants.of(other.conditions()), other, agent, alkalinity);
-    }
-
-    private static CarbonateState plus(SeawaterConstants k, CarbonateState water, Agent agent, double alkalinity) {
         double carbon = alkalinity * agent.dicPerMol() / agent.alkalinityPerMol();
-        return CarbonateSystem.solve(
-                        k,
-                        water.conditions(),
-                        new AlkalinityAndDic(water.totalAlkalinity() + alkalinity, water.dic() + carbon))
-                .orElseThrow();
+        return solve(new AlkalinityAndDic(before.totalAlkalinity() + alkalinity, before.dic() + carbon));
     }
 
     /** The water with that much alkalinity added, then aerated. */
     CarbonateState aeratedWith(double alkalinity) {
-        CarbonateResult aerated = CarbonateSystem.solve(
-                constants,
-                before.conditions(),
-                new AlkalinityAndPco2(before.totalAlkalinity() + alkalinity, aerationPco2Atm));
-        return aerated.orElseThrow();
+        return solve(new AlkalinityAndPco2(before.totalAlkalinity() + alkalinity, aerationPco2Atm));
+    }
+
+    private CarbonateState solve(KnownPair known) {
+        return CarbonateSystem.solve(before.constants(), before.conditions(), known)
+                .orElseThrow();
     }
 }

@@ -3,7 +3,7 @@ package org.hingeline.dosing;
 import java.util.List;
 import org.hingeline.seawater.CarbonateResult.Solved;
 import org.hingeline.seawater.CarbonateState;
-import org.hingeline.seawater.CarbonateSystem;
+import org.hingeline.seawater.Treatment;
 
 /** What helps without a chemical. */
 final class Remedies {
@@ -12,7 +12,7 @@ final class Remedies {
     /** Aeration, when the water holds more CO2 than the air it would be aerated with. */
     static List<Remedy> of(CarbonateState before, Target target, double aerationPco2Atm) {
         if (!(before.pco2Atm() > aerationPco2Atm)
-                || !(CarbonateSystem.equilibrated(before, aerationPco2Atm) instanceof Solved solved)) {
+                || !(Treatment.equilibrated(before, aerationPco2Atm) instanceof Solved solved)) {
             return List.of();
         }
         CarbonateState aerated = solved.state();

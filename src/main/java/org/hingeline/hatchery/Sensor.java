@@ -1,14 +1,14 @@
 package org.hingeline.hatchery;
 
 import org.hingeline.measure.Quantity;
-import org.hingeline.measure.UnitConversion;
+import org.hingeline.measure.Units;
 import org.hingeline.seawater.PhScale;
 import org.jspecify.annotations.Nullable;
 
 /**
  * What measures one quantity at a point.
  *
- * @param unit UCUM code of the unit it reports in, used when a reading names none
+ * @param unit UCUM code of the unit it reports in, used when a reading names none; it may be one per litre
  * @param phScale the scale a pH sensor is calibrated on; required for pH, absent for all else
  * @param standardUncertainty of one value, in the quantity's canonical unit, above 0
  */
@@ -28,9 +28,9 @@ public record Sensor(
             throw new IllegalArgumentException(
                     "quantity \"" + quantity.code() + "\" is computed; a sensor measures " + Quantity.measuredCodes());
         }
-        if (UnitConversion.of(quantity, unit).isEmpty()) {
-            throw new IllegalArgumentException("unit \"" + unit + "\" of " + quantity.code() + " must be one of "
-                    + UnitConversion.acceptedFor(quantity));
+        if (Units.find(quantity, unit).isEmpty()) {
+            throw new IllegalArgumentException(
+                    "unit \"" + unit + "\" of " + quantity.code() + " must be one of " + Units.codes(quantity));
         }
         if ((quantity == Quantity.PH) != (phScale != null)) {
             throw new IllegalArgumentException(

@@ -1,6 +1,7 @@
 package org.hingeline.seawater;
 
 import java.util.Objects;
+import java.util.function.Function;
 
 /** What solving a water gives: its state, or why there is none. */
 public sealed interface CarbonateResult {
@@ -22,6 +23,11 @@ public sealed interface CarbonateResult {
             Objects.requireNonNull(reason, "reason");
             Objects.requireNonNull(detail, "detail");
         }
+    }
+
+    /** What follows from the state, or the same refusal. */
+    default CarbonateResult then(Function<CarbonateState, CarbonateResult> next) {
+        return this instanceof Solved solved ? next.apply(solved.state()) : this;
     }
 
     /**

@@ -8,6 +8,7 @@ import java.util.Objects;
  *
  * @param conditions temperature, salinity, nutrients and fits
  * @param known the two quantities it was solved from
+ * @param constants the constants it was solved with
  * @param phTotal pH, total scale
  * @param totalAlkalinity total alkalinity (Dickson 1981)
  * @param dic dissolved inorganic carbon
@@ -24,6 +25,7 @@ import java.util.Objects;
 public record CarbonateState(
         Conditions conditions,
         KnownPair known,
+        SeawaterConstants constants,
         double phTotal,
         double totalAlkalinity,
         double dic,
@@ -39,6 +41,27 @@ public record CarbonateState(
     public CarbonateState {
         Objects.requireNonNull(conditions, "conditions");
         Objects.requireNonNull(known, "known");
+        Objects.requireNonNull(constants, "constants");
         cautions = List.copyOf(cautions);
+    }
+
+    /** The same water, as what follows from that pair, with those cautions. */
+    CarbonateState asKnownFrom(KnownPair pair, List<Caution> carried) {
+        return new CarbonateState(
+                conditions,
+                pair,
+                constants,
+                phTotal,
+                totalAlkalinity,
+                dic,
+                co2,
+                bicarbonate,
+                carbonate,
+                fco2Atm,
+                pco2Atm,
+                omegaAragonite,
+                omegaCalcite,
+                densityKgM3,
+                carried);
     }
 }

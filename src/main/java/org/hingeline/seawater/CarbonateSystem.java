@@ -1,16 +1,22 @@
 package org.hingeline.seawater;
 
-import java.util.ArrayList;
-import java.util.List;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import org.hingeline.seawater.CarbonateResult.Solved;
 import org.hingeline.seawater.CarbonateResult.Unsolvable;
 import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
+import org.hingeline.seawater.KnownPair.DicAndPco2;
 import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
+import org.hingeline.seawater.KnownPair.PhAndDic;
+import org.hingeline.seawater.KnownPair.PhAndPco2;
 
-/** Solves the carbonate system of a water from two known quantities. */
+/**
+ * Solves the carbonate system of a water from two known quantities.
+ *
+ * <p>With pH, and for inorganic carbon with pCO2, the answer is a closed form; alkalinity with inorganic carbon or pCO2
+ * needs {@link HydrogenIonRoot}. A pH read at another temperature than the water's is taken where it was read
+ * ({@link PhReadElsewhere}).
+ */
 public final class CarbonateSystem {
     private CarbonateSystem() {}
 
@@ -30,84 +36,102 @@ public final class CarbonateSystem {
             throw new IllegalArgumentException("constants for " + constants.temperatureC + " °C, salinity "
                     + constants.salinity + " do not belong to " + conditions);
         }
-        Optional<Unsolvable> refusal = InputCheck.refusal(conditions, known);
-        if (refusal.isPresent()) {
-            return refusal.get();
+        Unsolvable refusal = InputCheck.refusal(conditions, known);
+        if (refusal != null) {
+            return refusal;
         }
+        KnownPh ph = known.ph();
+        return ph != null && ph.readAtC(conditions.temperatureC()) != conditions.temperatureC()
+                ? PhReadElsewhere.solve(constants, conditions, known, ph)
+                : here(constants, conditions, known);
+    }
+
+    /** With pH, if it is known, read at the water's own temperature, and every input judged before. */
+    static CarbonateResult here(SeawaterConstants k, Conditions conditions, KnownPair known) {
         if (known instanceof PhAndAlkalinity pair) {
-            return fromPh(constants, conditions, pair);
+            double h = hydrogenIon(k, pair.ph());
+            double ofCarbon = pair.totalAlkalinity() - Alkalinity.withoutCarbonate(k, conditions, h);
+            return ofCarbon < 0
+                    ? contradiction(pair)
+                    : solved(k, conditions, pair, h, pair.totalAlkalinity(), ofCarbon / Alkalinity.ofCarbon(k, h, 1));
         }
-        HydrogenIonRoot root = new HydrogenIonRoot(constants, conditions);
+        if (known instanceof PhAndDic pair) {
+            return solvedFromCarbon(k, conditions, pair, hydrogenIon(k, pair.ph()), pair.dic());
+        }
+        if (known instanceof PhAndPco2 pair) {
+            double h = hydrogenIon(k, pair.ph());
+            return solvedFromCarbon(k, conditions, pair, h, dicOf(k, h, k.co2(pair.pco2Atm())));
+        }
         if (known instanceof AlkalinityAndDic pair) {
-            OptionalDouble h = root.fromDic(pair.totalAlkalinity(), pair.dic());
-            return h.isEmpty() ? notConverged(pair) : solved(constants, conditions, known, h.getAsDouble(), pair.dic());
+            double h = HydrogenIonRoot.fromDic(k, conditions, pair.totalAlkalinity(), pair.dic());
+            return Double.isNaN(h)
+                    ? notConverged(pair)
+                    : solved(k, conditions, pair, h, pair.totalAlkalinity(), pair.dic());
         }
-        AlkalinityAndPco2 pair = (AlkalinityAndPco2) known;
-        double co2 = pair.pco2Atm() * constants.fugacityFactor * constants.k0;
-        OptionalDouble h = root.fromCo2(pair.totalAlkalinity(), co2);
-        return h.isEmpty()
-                ? notConverged(pair)
-                : solved(constants, conditions, known, h.getAsDouble(), dicOf(constants, h.getAsDouble(), co2));
-    }
-
-    /**
-     * The same water, closed to the air, at another temperature: alkalinity and inorganic carbon stay, pH and Ω move.
-     *
-     * @param state a solved water
-     * @param temperatureC the new temperature, °C
-     */
-    public static CarbonateResult atTemperature(CarbonateState state, double temperatureC) {
-        return solve(
-                state.conditions().withTemperatureC(temperatureC),
-                new AlkalinityAndDic(state.totalAlkalinity(), state.dic()));
-    }
-
-    /**
-     * The same water after aeration to a partial pressure of CO2: alkalinity stays, CO2 goes in or out.
-     *
-     * @param state a solved water
-     * @param pco2Atm partial pressure of CO2, atm
-     */
-    public static CarbonateResult equilibrated(CarbonateState state, double pco2Atm) {
-        return solve(state.conditions(), new AlkalinityAndPco2(state.totalAlkalinity(), pco2Atm));
-    }
-
-    private static CarbonateResult fromPh(SeawaterConstants k, Conditions conditions, PhAndAlkalinity pair) {
-        double h = Math.pow(10, -(pair.ph() + k.scales.offsetToTotal(pair.scale())));
-        Alkalinity alkalinity = new Alkalinity(k, conditions);
-        double ofCarbon = pair.totalAlkalinity() - alkalinity.withoutCarbonate(h);
-        if (ofCarbon < 0) {
-            return new Unsolvable(
-                    UnsolvableReason.INPUTS_CONTRADICT,
-                    "pH " + pair.ph() + " (" + pair.scale().wireName() + ") and alkalinity " + pair.totalAlkalinity()
-                            + " mol/kg contradict each other: borate, hydroxide and nutrients alone would exceed the"
-                            + " alkalinity");
+        if (known instanceof AlkalinityAndPco2 pair) {
+            double co2 = k.co2(pair.pco2Atm());
+            double h = HydrogenIonRoot.fromCo2(k, conditions, pair.totalAlkalinity(), co2);
+            return Double.isNaN(h)
+                    ? notConverged(pair)
+                    : solved(k, conditions, pair, h, pair.totalAlkalinity(), dicOf(k, h, co2));
         }
-        return solved(k, conditions, pair, h, ofCarbon / alkalinity.ofCarbon(h, 1));
+        DicAndPco2 pair = (DicAndPco2) known;
+        double ionised = pair.dic() / k.co2(pair.pco2Atm()) - 1;
+        return ionised > 0
+                ? solvedFromCarbon(k, conditions, pair, hydrogenIonOfIonised(k, ionised), pair.dic())
+                : contradiction(pair);
+    }
+
+    /** [H], total scale, of a pH read in water with these constants. */
+    static double hydrogenIon(SeawaterConstants k, KnownPh ph) {
+        return Math.exp(-(ph.value() + k.scales.offsetToTotal(ph.scale())) * SeawaterConstants.LN_10);
+    }
+
+    /** Where bicarbonate and carbonate together are that many times CO2: the root of r h² = K1 h + K1 K2. */
+    private static double hydrogenIonOfIonised(SeawaterConstants k, double r) {
+        return (k.k1 + Math.sqrt(k.k1 * (k.k1 + 4 * r * k.k2))) / (2 * r);
     }
 
     private static double dicOf(SeawaterConstants k, double h, double co2) {
         return co2 * (1 + k.k1 / h * (1 + k.k2 / h));
     }
 
-    private static Unsolvable notConverged(KnownPair pair) {
+    private static Unsolvable contradiction(PhAndAlkalinity pair) {
+        return new Unsolvable(
+                UnsolvableReason.INPUTS_CONTRADICT,
+                pair.ph() + " and alkalinity " + pair.totalAlkalinity()
+                        + " mol/kg contradict each other: borate, hydroxide and nutrients alone would exceed the"
+                        + " alkalinity");
+    }
+
+    private static Unsolvable contradiction(DicAndPco2 pair) {
+        return new Unsolvable(
+                UnsolvableReason.INPUTS_CONTRADICT,
+                "dissolved inorganic carbon " + pair.dic() + " mol/kg and pCO2 " + pair.pco2Atm()
+                        + " atm contradict each other: dissolved CO2 alone would exceed the inorganic carbon");
+    }
+
+    static Unsolvable notConverged(KnownPair pair) {
         return new Unsolvable(
                 UnsolvableReason.NOT_CONVERGED,
                 "no pH was found for " + pair + " within " + HydrogenIonRoot.MAX_STEPS + " steps");
     }
 
-    private static CarbonateResult solved(
+    private static Solved solvedFromCarbon(
             SeawaterConstants k, Conditions conditions, KnownPair known, double h, double dic) {
+        double alkalinity = Alkalinity.ofCarbon(k, h, dic) + Alkalinity.withoutCarbonate(k, conditions, h);
+        return solved(k, conditions, known, h, alkalinity, dic);
+    }
+
+    private static Solved solved(
+            SeawaterConstants k, Conditions conditions, KnownPair known, double h, double totalAlkalinity, double dic) {
         Speciation s = Speciation.of(k, conditions, h, dic);
-        List<Caution> cautions = new ArrayList<>(k.cautions(conditions));
-        if (known instanceof PhAndAlkalinity pair && pair.scale() == PhScale.NBS) {
-            cautions.add(Takahashi1982.CAUTION);
-        }
         return new Solved(new CarbonateState(
                 conditions,
                 known,
+                k,
                 -Math.log10(h),
-                known instanceof PhAndAlkalinity pair ? pair.totalAlkalinity() : s.totalAlkalinity(),
+                totalAlkalinity,
                 dic,
                 s.co2(),
                 s.bicarbonate(),
@@ -117,6 +141,6 @@ public final class CarbonateSystem {
                 s.omegaAragonite(),
                 s.omegaCalcite(),
                 k.densityKgM3,
-                cautions));
+                Cautions.of(k, conditions, known)));
     }
 }

@@ -1,27 +1,40 @@
 package org.hingeline.seawater;
 
-import java.util.Locale;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.Optional;
 
-/**
- * The salinity and temperature over which the authors of a published fit say it holds.
- *
- * @param fit what the fit gives and who published it, as it should read in a sentence
- * @param salinityMin lowest practical salinity
- * @param salinityMax highest practical salinity
- * @param temperatureMinC lowest temperature, °C
- * @param temperatureMaxC highest temperature, °C
- */
-public record FitRange(
-        String fit, double salinityMin, double salinityMax, double temperatureMinC, double temperatureMaxC) {
+/** The salinity and temperature over which the authors of a published fit say it holds. Immutable. */
+public final class FitRange {
     /** The code of the caution that this range gives. */
     public static final String CAUTION_CODE = "outside-fit-range";
 
-    public FitRange {
+    private static final MathContext FOUR_DIGITS = new MathContext(4);
+
+    private final double salinityMin;
+    private final double salinityMax;
+    private final double temperatureMinC;
+    private final double temperatureMaxC;
+    private final String words;
+
+    /**
+     * @param fit what the fit gives and who published it, as it should read in a sentence
+     * @param salinityMin lowest practical salinity
+     * @param salinityMax highest practical salinity
+     * @param temperatureMinC lowest temperature, °C
+     * @param temperatureMaxC highest temperature, °C
+     */
+    FitRange(String fit, double salinityMin, double salinityMax, double temperatureMinC, double temperatureMaxC) {
         if (!(salinityMin <= salinityMax) || !(temperatureMinC <= temperatureMaxC)) {
             throw new IllegalArgumentException("a range must not be empty: salinity " + salinityMin + " to "
                     + salinityMax + ", temperature " + temperatureMinC + " to " + temperatureMaxC + " °C");
         }
+        this.salinityMin = salinityMin;
+        this.salinityMax = salinityMax;
+        this.temperatureMinC = temperatureMinC;
+        this.temperatureMaxC = temperatureMaxC;
+        this.words = fit + " is published for salinity " + plain(salinityMin) + " to " + plain(salinityMax) + " and "
+                + plain(temperatureMinC) + " to " + plain(temperatureMaxC) + " °C; this water is at salinity ";
     }
 
     /** Whether the water lies inside, the ends included. */
@@ -34,26 +47,16 @@ public record FitRange(
 
     /** A caution naming the fit and its range when the water lies outside. */
     public Optional<Caution> caution(double temperatureC, double salinity) {
-        if (covers(temperatureC, salinity)) {
-            return Optional.empty();
-        }
-        return Optional.of(new Caution(
-                CAUTION_CODE,
-                String.format(
-                        Locale.ROOT,
-                        "%s is published for salinity %s to %s and %s to %s °C; this water is at salinity %s, %s °C.",
-                        fit,
-                        plain(salinityMin),
-                        plain(salinityMax),
-                        plain(temperatureMinC),
-                        plain(temperatureMaxC),
-                        plain(salinity),
-                        plain(temperatureC))));
+        return covers(temperatureC, salinity) ? Optional.empty() : Optional.of(outside(temperatureC, salinity));
+    }
+
+    Caution outside(double temperatureC, double salinity) {
+        return new Caution(CAUTION_CODE, words + plain(salinity) + ", " + plain(temperatureC) + " °C.");
     }
 
     private static String plain(double value) {
-        return value == Math.rint(value)
-                ? String.format(Locale.ROOT, "%.0f", value)
-                : String.format(Locale.ROOT, "%.4g", value);
+        return value == Math.rint(value) && Math.abs(value) < 1e15
+                ? Long.toString((long) value)
+                : new BigDecimal(value).round(FOUR_DIGITS).toPlainString();
     }
 }

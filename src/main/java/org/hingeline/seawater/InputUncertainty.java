@@ -12,11 +12,21 @@ package org.hingeline.seawater;
  * @param pco2Atm atm
  * @param temperatureC °C
  * @param salinity practical salinity
+ * @param calcium measured calcium, mol/kg-seawater
  */
 public record InputUncertainty(
-        double ph, double totalAlkalinity, double dic, double pco2Atm, double temperatureC, double salinity) {
-    /** pH 0.02, TA and DIC 10 µmol/kg, pCO2 10 µatm, 0.1 °C, salinity 0.1. */
-    public static final InputUncertainty DEFAULTS = new InputUncertainty(0.02, 10e-6, 10e-6, 10e-6, 0.1, 0.1);
+        double ph,
+        double totalAlkalinity,
+        double dic,
+        double pco2Atm,
+        double temperatureC,
+        double salinity,
+        double calcium) {
+    /**
+     * pH 0.02, TA and DIC 10 µmol/kg, pCO2 10 µatm, 0.1 °C, salinity 0.1; calcium 0.1 mmol/kg (about one per cent, common
+     * practice, no source).
+     */
+    public static final InputUncertainty DEFAULTS = new InputUncertainty(0.02, 10e-6, 10e-6, 10e-6, 0.1, 0.1, 0.1e-3);
 
     /** What a glass electrode on NBS buffers carries at least. */
     public static final double PH_ON_NBS_BUFFERS = 0.05;
@@ -28,18 +38,21 @@ public record InputUncertainty(
         require("pco2Atm", pco2Atm);
         require("temperatureC", temperatureC);
         require("salinity", salinity);
+        require("calcium", calcium);
     }
 
     /** For waters solved from pH and alkalinity. */
     public static InputUncertainty ofPhAndAlkalinity(
             double ph, double totalAlkalinity, double temperatureC, double salinity) {
-        return new InputUncertainty(ph, totalAlkalinity, DEFAULTS.dic, DEFAULTS.pco2Atm, temperatureC, salinity);
+        return new InputUncertainty(
+                ph, totalAlkalinity, DEFAULTS.dic, DEFAULTS.pco2Atm, temperatureC, salinity, DEFAULTS.calcium);
     }
 
     /** For waters solved from alkalinity and inorganic carbon. */
     public static InputUncertainty ofAlkalinityAndDic(
             double totalAlkalinity, double dic, double temperatureC, double salinity) {
-        return new InputUncertainty(DEFAULTS.ph, totalAlkalinity, dic, DEFAULTS.pco2Atm, temperatureC, salinity);
+        return new InputUncertainty(
+                DEFAULTS.ph, totalAlkalinity, dic, DEFAULTS.pco2Atm, temperatureC, salinity, DEFAULTS.calcium);
     }
 
     private static void require(String name, double value) {

@@ -1,8 +1,5 @@
 package org.hingeline.seawater;
 
-import java.util.ArrayList;
-import java.util.List;
-
 /**
  * Every constant and salt total of a water, evaluated once for a temperature, salinity, carbonic-acid fit and boron
  * ratio, to be used for as many waters of that kind as there are. Immutable.
@@ -105,28 +102,9 @@ public final class SeawaterConstants {
         return measured == null ? calciumFromSalinity : measured;
     }
 
-    /** A caution for each fit that takes part in the water and is used outside its published range. */
-    List<Caution> cautions(Conditions conditions) {
-        List<FitRange> taking = new ArrayList<>(List.of(
-                fit.range(),
-                Weiss1974.RANGE,
-                BoricAcid.RANGE,
-                WaterDissociation.RANGE,
-                Bisulfate.RANGE,
-                HydrogenFluoride.RANGE,
-                Mucci1983.RANGE,
-                MilleroPoisson1981.RANGE));
-        if (conditions.phosphate() > 0) {
-            taking.add(PhosphoricAcid.RANGE);
-        }
-        if (conditions.silicate() > 0) {
-            taking.add(SilicicAcid.RANGE);
-        }
-        List<Caution> cautions = new ArrayList<>();
-        for (FitRange range : taking) {
-            range.caution(temperatureC, salinity).ifPresent(cautions::add);
-        }
-        return cautions;
+    /** Dissolved CO2, mol/kg-seawater, in equilibrium with a partial pressure, atm. */
+    double co2(double pco2Atm) {
+        return pco2Atm * fugacityFactor * k0;
     }
 
     private static double tenTo(double exponent) {

@@ -2,11 +2,11 @@ package org.hingeline.seawater;
 
 /**
  * How each quantity of a water moves with ln [H], with inorganic carbon, and at fixed [H] and carbon with each constant,
- * temperature and salinity.
+ * temperature, salinity and measured calcium.
  *
- * <p>Slopes with [H], carbon and the constants are closed forms. Those with temperature and salinity pass through every
- * fit at once and are central differences of smooth functions over a step that leaves about ten correct digits; next to
- * salinity 0, where the fits go with its square root, the step is one-sided.
+ * <p>Slopes with [H], carbon, the constants and calcium are closed forms. Those with temperature and salinity pass
+ * through every fit at once and are central differences of smooth functions over a step that leaves about ten correct
+ * digits; next to salinity 0, where the fits go with its square root, the step is one-sided.
  */
 final class Sensitivity {
     // quantities, the rows
@@ -22,7 +22,7 @@ final class Sensitivity {
     static final int OMEGA_CALCITE = 9;
     static final int QUANTITIES = 10;
 
-    // what they move with: logarithms of the constants first, then temperature and salinity
+    // what they move with: logarithms of the constants first, then temperature, salinity and measured calcium
     private static final int K0 = 0;
     private static final int K1 = 1;
     private static final int K2 = 2;
@@ -34,7 +34,8 @@ final class Sensitivity {
     static final int CONSTANTS = 8;
     static final int TEMPERATURE = 8;
     static final int SALINITY = 9;
-    static final int PARAMETERS = 10;
+    static final int CALCIUM = 10;
+    static final int PARAMETERS = 11;
 
     private static final double STEP_C = 0.01;
     private static final double STEP_S = 0.01;
@@ -45,6 +46,10 @@ final class Sensitivity {
     final double[] withDic = new double[QUANTITIES];
     /** d quantity / d parameter at fixed [H] and DIC. */
     final double[][] with = new double[PARAMETERS][QUANTITIES];
+    /** d (what turns pH on the scale looked at into pH on the total scale) / d temperature. */
+    final double scaleWithTemperature;
+    /** The same / d salinity. */
+    final double scaleWithSalinity;
 
     private final SeawaterConstants k;
     private final Conditions conditions;
@@ -62,26 +67,23 @@ final class Sensitivity {
         withHydrogenIon(share);
         withCarbon(share);
         withConstants(share);
+        withCalcium();
+        SeawaterConstants cooler = k.near(k.temperatureC - STEP_C, k.salinity);
+        SeawaterConstants warmer = k.near(k.temperatureC + STEP_C, k.salinity);
+        difference(with[TEMPERATURE], cooler, warmer, 2 * STEP_C);
+        scaleWithTemperature = scaleStep(cooler, warmer, scale) / (2 * STEP_C);
         double below = k.salinity >= STEP_S ? STEP_S : 0;
-        difference(
-                with[TEMPERATURE],
-                k.near(k.temperatureC - STEP_C, k.salinity),
-                k.near(k.temperatureC + STEP_C, k.salinity),
-                2 * STEP_C,
-                scale);
-        difference(
-                with[SALINITY],
-                k.near(k.temperatureC, k.salinity - below),
-                k.near(k.temperatureC, k.salinity + STEP_S),
-                below + STEP_S,
-                scale);
+        SeawaterConstants fresher = k.near(k.temperatureC, k.salinity - below);
+        SeawaterConstants saltier = k.near(k.temperatureC, k.salinity + STEP_S);
+        difference(with[SALINITY], fresher, saltier, below + STEP_S);
+        scaleWithSalinity = scaleStep(fresher, saltier, scale) / (below + STEP_S);
     }
 
     private void withHydrogenIon(double[] share) {
-        Alkalinity alkalinity = new Alkalinity(k, conditions);
         double bound = 2 * share[0] + share[1];
         withLnH[PH] = -1 / SeawaterConstants.LN_10;
-        withLnH[TA] = alkalinity.slopeOfCarbon(s.h(), s.dic()) + alkalinity.slopeWithoutCarbonate(s.h());
+        withLnH[TA] =
+                Alkalinity.slopeOfCarbon(k, s.h(), s.dic()) + Alkalinity.slopeWithoutCarbonate(k, conditions, s.h());
         carbonSpecies(withLnH, 2 - bound, 1 - bound, -bound);
     }
 
@@ -124,12 +126,17 @@ final class Sensitivity {
         with[BORON][TA] = borate;
     }
 
-    private void difference(
-            double[] row, SeawaterConstants lower, SeawaterConstants upper, double step, PhScale scale) {
+    private void withCalcium() {
+        if (conditions.calcium() != null) {
+            with[CALCIUM][OMEGA_ARAGONITE] = s.carbonate() / k.kspAragonite;
+            with[CALCIUM][OMEGA_CALCITE] = s.carbonate() / k.kspCalcite;
+        }
+    }
+
+    private void difference(double[] row, SeawaterConstants lower, SeawaterConstants upper, double step) {
         Speciation a = Speciation.of(lower, conditions, s.h(), s.dic());
         Speciation b = Speciation.of(upper, conditions, s.h(), s.dic());
-        row[PH] = (lower.scales.offsetToTotal(scale) - upper.scales.offsetToTotal(scale)) / step;
-        row[TA] = (b.totalAlkalinity() - a.totalAlkalinity()) / step;
+        row[TA] = (alkalinity(upper) - alkalinity(lower)) / step;
         row[CO2] = (b.co2() - a.co2()) / step;
         row[BICARBONATE] = (b.bicarbonate() - a.bicarbonate()) / step;
         row[CARBONATE] = (b.carbonate() - a.carbonate()) / step;
@@ -137,5 +144,13 @@ final class Sensitivity {
         row[PCO2] = (b.pco2Atm() - a.pco2Atm()) / step;
         row[OMEGA_ARAGONITE] = (b.omegaAragonite() - a.omegaAragonite()) / step;
         row[OMEGA_CALCITE] = (b.omegaCalcite() - a.omegaCalcite()) / step;
+    }
+
+    private double alkalinity(SeawaterConstants near) {
+        return Alkalinity.ofCarbon(near, s.h(), s.dic()) + Alkalinity.withoutCarbonate(near, conditions, s.h());
+    }
+
+    private static double scaleStep(SeawaterConstants lower, SeawaterConstants upper, PhScale scale) {
+        return scale == PhScale.TOTAL ? 0 : upper.scales.offsetToTotal(scale) - lower.scales.offsetToTotal(scale);
     }
 }

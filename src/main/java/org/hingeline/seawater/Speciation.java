@@ -9,7 +9,6 @@ package org.hingeline.seawater;
 record Speciation(
         double h,
         double dic,
-        double totalAlkalinity,
         double co2,
         double bicarbonate,
         double carbonate,
@@ -22,13 +21,11 @@ record Speciation(
         double co2 = dic * h * h / d;
         double bicarbonate = dic * k.k1 * h / d;
         double carbonate = dic * k.k1 * k.k2 / d;
-        double totalAlkalinity = bicarbonate + 2 * carbonate + new Alkalinity(k, conditions).withoutCarbonate(h);
         double fco2 = co2 / k.k0;
         double solid = carbonate * k.calcium(conditions);
         return new Speciation(
                 h,
                 dic,
-                totalAlkalinity,
                 co2,
                 bicarbonate,
                 carbonate,

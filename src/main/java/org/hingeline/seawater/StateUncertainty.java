@@ -24,4 +24,24 @@ public record StateUncertainty(
         StandardUncertainty fco2Atm,
         StandardUncertainty pco2Atm,
         StandardUncertainty omegaAragonite,
-        StandardUncertainty omegaCalcite) {}
+        StandardUncertainty omegaCalcite) {
+
+    /** From the variances of both shares, in the order of {@link Sensitivity}. */
+    static StateUncertainty ofVariances(double[] fromConstants, double[] fromInputs) {
+        StandardUncertainty[] u = new StandardUncertainty[fromInputs.length];
+        for (int q = 0; q < u.length; q++) {
+            u[q] = StandardUncertainty.ofShares(Math.sqrt(fromConstants[q]), Math.sqrt(fromInputs[q]));
+        }
+        return new StateUncertainty(
+                u[Sensitivity.PH],
+                u[Sensitivity.TA],
+                u[Sensitivity.DIC],
+                u[Sensitivity.CO2],
+                u[Sensitivity.BICARBONATE],
+                u[Sensitivity.CARBONATE],
+                u[Sensitivity.FCO2],
+                u[Sensitivity.PCO2],
+                u[Sensitivity.OMEGA_ARAGONITE],
+                u[Sensitivity.OMEGA_CALCITE]);
+    }
+}

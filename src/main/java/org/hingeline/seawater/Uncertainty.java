@@ -1,39 +1,39 @@
 package org.hingeline.seawater;
 
+import java.util.ArrayList;
+import java.util.List;
 import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
+import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
+import org.hingeline.seawater.KnownPair.DicAndPco2;
 import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
+import org.hingeline.seawater.KnownPair.PhAndDic;
 
 /**
- * First-order propagation of the standard uncertainties of inputs and constants to every quantity of a solved water
- * (JCGM 100:2008, eq. 10, independent inputs).
+ * First-order propagation of the standard uncertainties of inputs and constants to every quantity of a solved water, and
+ * on to what that water becomes (JCGM 100:2008, eq. 10, independent inputs).
  *
  * <p>A water is fixed by ln [H] and inorganic carbon; the two known quantities are functions of these and of the
- * parameters (constants, temperature, salinity). Inverting that two-by-two system tells how [H] and carbon answer to
- * each input and parameter, and the chain rule carries it to all quantities: one way for every pair. It costs five
- * evaluations of the constants.
+ * parameters (constants, temperature, salinity, calcium). Inverting that two-by-two system tells how [H] and carbon
+ * answer to each independent {@link Cause}, and the chain rule carries it to all quantities: one way for every pair. A
+ * water that is warmed, aerated or blended inherits the causes of the one it was, with the moves of alkalinity and carbon
+ * that each makes; so what both have in common cancels when the two are compared.
  */
 public final class Uncertainty {
-    private static final double[] NO_DIRECT_SLOPE = new double[Sensitivity.QUANTITIES];
+    private final CarbonateState state;
+    private final List<Cause> causes;
+    private final List<double[]> moves;
 
-    private final Sensitivity slopes;
-    private final int first;
-    private final int second;
-    private final double determinant;
+    private Uncertainty(CarbonateState state, KnownSlopes slopes, List<Cause> causes) {
+        this.state = state;
+        this.causes = causes;
+        this.moves = new ArrayList<>(causes.size());
+        for (Cause cause : causes) {
+            moves.add(slopes.moved(cause));
+        }
+    }
 
-    private Uncertainty(CarbonateState state) {
-        KnownPair known = state.known();
-        PhScale scale = known instanceof PhAndAlkalinity pair ? pair.scale() : PhScale.TOTAL;
-        slopes = new Sensitivity(
-                SeawaterConstants.of(state.conditions()),
-                state.conditions(),
-                Math.pow(10, -state.phTotal()),
-                state.dic(),
-                scale);
-        first = known instanceof PhAndAlkalinity ? Sensitivity.PH : Sensitivity.TA;
-        second = known instanceof PhAndAlkalinity
-                ? Sensitivity.TA
-                : known instanceof AlkalinityAndDic ? Sensitivity.DIC : Sensitivity.PCO2;
-        determinant = slopes.withLnH[first] * slopes.withDic[second] - slopes.withLnH[second] * slopes.withDic[first];
+    private Uncertainty(CarbonateState state, List<Cause> causes) {
+        this(state, new KnownSlopes(state, sensitivity(state, PhScale.TOTAL)), causes);
     }
 
     /** With the uncertainties of the constants of {@link ConstantUncertainty#ORR_2018}. */
@@ -44,75 +44,163 @@ public final class Uncertainty {
     /**
      * The standard uncertainty of every quantity of a solved water.
      *
-     * @param state a water solved by {@link CarbonateSystem}
-     * @param inputs of what was measured
+     * @param state a water solved by {@link CarbonateSystem} from what was measured
+     * @param inputs of what was measured; a pH on NBS buffers counts with at least
+     *     {@link InputUncertainty#PH_ON_NBS_BUFFERS}
      * @param constants of the equilibrium constants and total boron
      */
     public static StateUncertainty of(CarbonateState state, InputUncertainty inputs, ConstantUncertainty constants) {
-        return new Uncertainty(state).propagate(inputs, constants.asLogarithms());
+        return ofMeasured(state, inputs, constants).ofState();
     }
 
-    private StateUncertainty propagate(InputUncertainty inputs, double[] ofConstants) {
-        double[] variance = new double[Sensitivity.QUANTITIES];
-        for (int p = 0; p < Sensitivity.CONSTANTS; p++) {
-            addParameter(variance, p, ofConstants[p]);
+    /** The same, to be followed on to what the water becomes. */
+    public static Uncertainty ofMeasured(CarbonateState state, InputUncertainty inputs, ConstantUncertainty constants) {
+        KnownPair known = state.known();
+        KnownPh ph = known.ph();
+        Sensitivity sensitivity = sensitivity(state, ph == null ? PhScale.TOTAL : ph.scale());
+        KnownSlopes slopes = new KnownSlopes(state, sensitivity);
+        double[] ofConstants = constants.asLogarithms();
+        List<Cause> causes = new ArrayList<>(ofConstants.length + 6);
+        for (int p = 0; p < ofConstants.length; p++) {
+            causes.add(Cause.constant(p, ofConstants[p]));
         }
-        double[] fromConstants = variance;
-        variance = new double[Sensitivity.QUANTITIES];
-        addInput(variance, inputOf(first, inputs), 0);
-        addInput(variance, 0, inputOf(second, inputs));
-        addParameter(variance, Sensitivity.TEMPERATURE, inputs.temperatureC());
-        addParameter(variance, Sensitivity.SALINITY, inputs.salinity());
-        return result(fromConstants, variance);
+        causes.add(Cause.input(0, 0, 0, first(known, inputs), 0));
+        causes.add(Cause.input(0, 0, 0, 0, second(known, inputs)));
+        causes.add(Cause.input(inputs.temperatureC(), 0, 0, 0, 0));
+        causes.add(Cause.input(0, inputs.salinity(), 0, 0, 0));
+        if (state.conditions().calcium() != null) {
+            causes.add(Cause.input(0, 0, inputs.calcium(), 0, 0));
+        }
+        if (slopes.withReadingTemperature != 0) {
+            // the thermometer at the electrode: the pH that the sample had where it was thought to be
+            causes.add(Cause.input(0, 0, 0, -slopes.withReadingTemperature * inputs.temperatureC(), 0));
+        }
+        return new Uncertainty(state, slopes, causes);
     }
 
-    private static double inputOf(int quantity, InputUncertainty inputs) {
-        return switch (quantity) {
-            case Sensitivity.PH -> inputs.ph();
-            case Sensitivity.TA -> inputs.totalAlkalinity();
-            case Sensitivity.DIC -> inputs.dic();
-            case Sensitivity.PCO2 -> inputs.pco2Atm();
-            default -> throw new IllegalArgumentException("no input is quantity " + quantity);
-        };
+    /**
+     * Of what the water became when it was warmed, cooled, aerated or dosed: a state solved from alkalinity and inorganic
+     * carbon, or from alkalinity and a given pCO2. What was set (another temperature, the pCO2, a dose) counts as exact.
+     *
+     * @throws IllegalArgumentException when the state was solved from another pair
+     */
+    public Uncertainty carriedTo(CarbonateState to) {
+        boolean closed = to.known() instanceof AlkalinityAndDic;
+        if (!closed && !(to.known() instanceof AlkalinityAndPco2)) {
+            throw new IllegalArgumentException("not a water that another became: " + to.known());
+        }
+        boolean sameTemperature =
+                state.conditions().temperatureC() == to.conditions().temperatureC();
+        List<Cause> carried = new ArrayList<>(causes.size());
+        for (int i = 0; i < causes.size(); i++) {
+            Cause cause = causes.get(i);
+            double[] move = moves.get(i);
+            carried.add(new Cause(
+                    cause.constant(),
+                    cause.ofConstant(),
+                    sameTemperature ? cause.temperatureC() : 0,
+                    cause.salinity(),
+                    cause.calcium(),
+                    move[Sensitivity.TA],
+                    closed ? move[Sensitivity.DIC] : 0));
+        }
+        return new Uncertainty(to, carried);
     }
 
-    /** The known quantities move by these amounts, the parameters stay. */
-    private void addInput(double[] variance, double moveOfFirst, double moveOfSecond) {
-        add(variance, moveOfFirst, moveOfSecond, NO_DIRECT_SLOPE, 1);
+    /**
+     * Of a blend of this water and another, measured independently; the constants are the same for both.
+     *
+     * @param other of the other water
+     * @param shareOfOther its share of the mass, 0 to 1
+     * @param blend the state of the blend
+     */
+    public Uncertainty blendedWith(Uncertainty other, double shareOfOther, CarbonateState blend) {
+        double heat = Blend.heatShareOfOther(state.conditions(), other.state.conditions(), shareOfOther);
+        List<Cause> blended = new ArrayList<>(causes.size() + other.causes.size());
+        for (int i = 0; i < causes.size(); i++) {
+            Cause own = partOf(i, 1 - shareOfOther, 1 - heat);
+            blended.add(own.common() ? own.with(other.partOf(i, shareOfOther, heat)) : own);
+        }
+        for (int i = 0; i < other.causes.size(); i++) {
+            if (!other.causes.get(i).common()) {
+                blended.add(other.partOf(i, shareOfOther, heat));
+            }
+        }
+        return new Uncertainty(blend, blended);
     }
 
-    /** A parameter moves, and [H] and carbon with it so that the known quantities stay. */
-    private void addParameter(double[] variance, int parameter, double amount) {
-        double[] direct = slopes.with[parameter];
-        add(variance, -direct[first], -direct[second], direct, amount);
+    /** What a cause does to a blend that this water is a share of, by mass and by heat. */
+    private Cause partOf(int i, double share, double heatShare) {
+        Cause cause = causes.get(i);
+        double[] move = moves.get(i);
+        return new Cause(
+                cause.constant(),
+                cause.ofConstant(),
+                heatShare * cause.temperatureC(),
+                share * cause.salinity(),
+                share * cause.calcium(),
+                share * move[Sensitivity.TA],
+                share * move[Sensitivity.DIC]);
     }
 
-    private void add(double[] variance, double moveOfFirst, double moveOfSecond, double[] direct, double amount) {
-        double lnH = (moveOfFirst * slopes.withDic[second] - moveOfSecond * slopes.withDic[first]) / determinant;
-        double dic = (moveOfSecond * slopes.withLnH[first] - moveOfFirst * slopes.withLnH[second]) / determinant;
+    /** Of every quantity of the state. */
+    public StateUncertainty ofState() {
+        double[] fromConstants = new double[Sensitivity.QUANTITIES];
+        double[] fromInputs = new double[Sensitivity.QUANTITIES];
+        for (int i = 0; i < moves.size(); i++) {
+            addSquares(causes.get(i).common() ? fromConstants : fromInputs, moves.get(i));
+        }
+        return StateUncertainty.ofVariances(fromConstants, fromInputs);
+    }
+
+    /**
+     * Of the difference between this state and one that it was carried to, cause by cause: what both share cancels.
+     *
+     * @throws IllegalArgumentException when the other does not stem from this one
+     */
+    public StateUncertainty ofChangeTo(Uncertainty later) {
+        if (later.causes.size() != causes.size()) {
+            throw new IllegalArgumentException("the later water does not stem from this one");
+        }
+        double[] fromConstants = new double[Sensitivity.QUANTITIES];
+        double[] fromInputs = new double[Sensitivity.QUANTITIES];
+        for (int i = 0; i < moves.size(); i++) {
+            double[] change = later.moves.get(i).clone();
+            for (int q = 0; q < change.length; q++) {
+                change[q] -= moves.get(i)[q];
+            }
+            addSquares(causes.get(i).common() ? fromConstants : fromInputs, change);
+        }
+        return StateUncertainty.ofVariances(fromConstants, fromInputs);
+    }
+
+    private static void addSquares(double[] variance, double[] move) {
         for (int q = 0; q < variance.length; q++) {
-            // the direct slope of pH is that of the step between scales, no part of the total-scale pH
-            double own = q == Sensitivity.PH ? 0 : direct[q];
-            double move = (own + slopes.withLnH[q] * lnH + slopes.withDic[q] * dic) * amount;
-            variance[q] += move * move;
+            variance[q] += move[q] * move[q];
         }
     }
 
-    private static StateUncertainty result(double[] fromConstants, double[] fromInputs) {
-        StandardUncertainty[] u = new StandardUncertainty[fromInputs.length];
-        for (int q = 0; q < u.length; q++) {
-            u[q] = StandardUncertainty.ofShares(Math.sqrt(fromConstants[q]), Math.sqrt(fromInputs[q]));
+    private static Sensitivity sensitivity(CarbonateState state, PhScale scale) {
+        return new Sensitivity(
+                state.constants(),
+                state.conditions(),
+                Math.exp(-state.phTotal() * SeawaterConstants.LN_10),
+                state.dic(),
+                scale);
+    }
+
+    private static double first(KnownPair known, InputUncertainty inputs) {
+        KnownPh ph = known.ph();
+        if (ph == null) {
+            return known instanceof DicAndPco2 ? inputs.dic() : inputs.totalAlkalinity();
         }
-        return new StateUncertainty(
-                u[Sensitivity.PH],
-                u[Sensitivity.TA],
-                u[Sensitivity.DIC],
-                u[Sensitivity.CO2],
-                u[Sensitivity.BICARBONATE],
-                u[Sensitivity.CARBONATE],
-                u[Sensitivity.FCO2],
-                u[Sensitivity.PCO2],
-                u[Sensitivity.OMEGA_ARAGONITE],
-                u[Sensitivity.OMEGA_CALCITE]);
+        return ph.scale() == PhScale.NBS ? Math.max(inputs.ph(), InputUncertainty.PH_ON_NBS_BUFFERS) : inputs.ph();
+    }
+
+    private static double second(KnownPair known, InputUncertainty inputs) {
+        if (known instanceof PhAndAlkalinity) {
+            return inputs.totalAlkalinity();
+        }
+        return known instanceof PhAndDic || known instanceof AlkalinityAndDic ? inputs.dic() : inputs.pco2Atm();
     }
 }

@@ -8,7 +8,7 @@ public enum UnsolvableReason {
     SALINITY_NOT_COVERED("salinity-not-covered"),
     /** Phosphate, silicate or calcium is not a number, negative or beyond any natural water. */
     COMPOSITION_OUT_OF_RANGE("composition-out-of-range"),
-    /** The pH is not a number or outside 2 to 12. */
+    /** The pH is not a number or outside 2 to 13. */
     PH_OUT_OF_RANGE("ph-out-of-range"),
     /** The alkalinity is not a number or outside −0.01 to 0.1 mol/kg. */
     ALKALINITY_OUT_OF_RANGE("alkalinity-out-of-range"),

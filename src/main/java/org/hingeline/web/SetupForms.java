@@ -9,7 +9,8 @@ import org.hingeline.alert.Priority;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.PointKind;
 import org.hingeline.measure.Quantity;
-import org.hingeline.measure.UnitConversion;
+import org.hingeline.measure.UnitChoice;
+import org.hingeline.measure.Units;
 import org.hingeline.monitor.FieldFaults;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.PlacePlan;
@@ -73,9 +74,10 @@ final class SetupForms {
 
     /** The form asks for it in the sensor's own unit. */
     private static double canonical(Quantity quantity, String unit, double uncertainty) {
-        return UnitConversion.of(quantity, unit)
+        return Units.find(quantity, unit)
                 .orElseThrow(() -> new FieldFaultsException(
-                        "unit", "\u201c" + unit + "\u201d is not one of " + UnitConversion.acceptedFor(quantity)))
+                        "unit", "\u201c" + unit + "\u201d is not one of " + Units.codes(quantity)))
+                .conversion(UnitChoice.TYPICAL_DENSITY_KG_M3)
                 .uncertaintyToCanonical(uncertainty);
     }
 

@@ -8,6 +8,9 @@ import java.util.Locale;
 import org.hingeline.alert.Priority;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Site;
+import org.hingeline.measure.Quantity;
+import org.hingeline.measure.UnitChoice;
+import org.hingeline.measure.Units;
 import org.hingeline.monitor.Accounts;
 import org.hingeline.monitor.PeopleBook.Subscriber;
 import org.hingeline.monitor.PlaceDesk;
@@ -53,7 +56,7 @@ final class SetupRows {
                             .orElse("");
                     return new Row(
                             s.code(),
-                            s.quantity().words() + " at " + point + unit(s.unit())
+                            s.quantity().words() + " at " + point + unit(s.quantity(), s.unit())
                                     + (scale == null ? "" : ", " + scale.wireName() + " scale") + ", \u00b1"
                                     + Words.plain(s.standardUncertainty()),
                             "",
@@ -63,8 +66,11 @@ final class SetupRows {
     }
 
     /** Unless it is a bare number, as of pH and salinity. */
-    private static String unit(String unit) {
-        return unit.equals("1") || unit.equals("[pH]") ? "" : ", in " + unit;
+    private static String unit(Quantity quantity, String unit) {
+        boolean bare = unit.equals("1") || unit.equals("[pH]");
+        return bare
+                ? ""
+                : ", in " + Units.find(quantity, unit).map(UnitChoice::label).orElse(unit);
     }
 
     List<Row> keyRows(Site site) {

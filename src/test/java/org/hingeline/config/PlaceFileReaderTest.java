@@ -100,7 +100,7 @@ class PlaceFileReaderTest {
                         "points[1].feedsFrom: \"inlet\" is not accepted; give the code of another point of this file",
                         "points[2].feedsFrom: \"tank\" is not accepted; give the code of another point of this file",
                         "sensors[0].point: \"tonk\" is not accepted; give one of intake, tank",
-                        "sensors[0].unit: \"Cel\" is not accepted; give one of [pH], 1",
+                        "sensors[0].unit: \"Cel\" is not accepted; give one of [pH]",
                         "sensors[0].phScale: is missing; give total, seawater, free or nbs: the scale the pH sensor is"
                                 + " calibrated on",
                         "sensors[0].standardUncertainty: 0 is not accepted; give a number above 0, at most 1000000",

@@ -90,7 +90,7 @@ class DosePlannerTest {
     void sure_inputs_leave_the_constants_in_the_range_of_the_mass_only() {
         DoseRequest sure = new DoseRequest(
                 Waters.measured(),
-                new InputUncertainty(0, 0, 0, 0, 0, 0),
+                new InputUncertainty(0, 0, 0, 0, 0, 0, 0),
                 List.of(),
                 TO_THREE.receiver(),
                 TO_THREE.target(),

@@ -56,7 +56,7 @@ class RecordsTest {
                 "omegaAragonite",
                 "computed",
                 "ph, temperature");
-        refused(() -> sensor(Quantity.TEMPERATURE, "[pH]", null, 0.1), "\"[pH]\"", "temperature", "Cel, K, [degF]");
+        refused(() -> sensor(Quantity.TEMPERATURE, "[pH]", null, 0.1), "\"[pH]\"", "temperature", "Cel, [degF], K");
     }
 
     @Test

@@ -13,19 +13,19 @@ class DerivedWatersTest {
 
     @Test
     void warming_a_closed_water_lowers_ph_and_raises_pco2_and_omega_and_keeps_carbon() {
-        CarbonateState warm = CarbonateSystem.atTemperature(cool, 24).orElseThrow();
+        CarbonateState warm = Treatment.atTemperature(cool, 24).orElseThrow();
         assertThat(warm.dic()).isEqualTo(cool.dic());
         assertThat(warm.totalAlkalinity()).isCloseTo(cool.totalAlkalinity(), within(1e-13));
         assertThat(warm.phTotal()).isLessThan(cool.phTotal());
         assertThat(warm.pco2Atm()).isGreaterThan(cool.pco2Atm());
         assertThat(warm.omegaAragonite()).isGreaterThan(cool.omegaAragonite());
-        CarbonateState back = CarbonateSystem.atTemperature(warm, 12).orElseThrow();
+        CarbonateState back = Treatment.atTemperature(warm, 12).orElseThrow();
         assertThat(back.phTotal()).isCloseTo(cool.phTotal(), within(1e-10));
     }
 
     @Test
     void aeration_reaches_the_pco2_asked_for_and_keeps_alkalinity() {
-        CarbonateState aerated = CarbonateSystem.equilibrated(cool, 420e-6).orElseThrow();
+        CarbonateState aerated = Treatment.equilibrated(cool, 420e-6).orElseThrow();
         assertThat(aerated.pco2Atm()).isCloseTo(420e-6, within(1e-15));
         assertThat(aerated.totalAlkalinity()).isCloseTo(cool.totalAlkalinity(), within(1e-13));
     }

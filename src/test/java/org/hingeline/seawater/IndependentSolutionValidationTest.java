@@ -37,7 +37,7 @@ class IndependentSolutionValidationTest {
         Grid.forEach(PHOSPHATE, SILICATE, (conditions, pair) -> {
             CarbonateResult result = CarbonateSystem.solve(conditions, pair);
             IndependentWater water = independent(conditions);
-            BigDecimal h = IndependentWater.hydrogenIon(pair.ph());
+            BigDecimal h = IndependentWater.hydrogenIon(pair.ph().value());
             BigDecimal dic = water.dic(h, pair.totalAlkalinity());
             if (dic.signum() < 0) {
                 assertThat(result).isInstanceOf(CarbonateResult.Unsolvable.class);

@@ -32,7 +32,7 @@ class RefusalAndCautionTest {
     static Stream<Arguments> badPairs() {
         return Stream.of(
                 Arguments.of(new PhAndAlkalinity(Double.NaN, 2300e-6), UnsolvableReason.PH_OUT_OF_RANGE, Double.NaN),
-                Arguments.of(new PhAndAlkalinity(12.5, 2300e-6), UnsolvableReason.PH_OUT_OF_RANGE, 12.5),
+                Arguments.of(new PhAndAlkalinity(13.5, 2300e-6), UnsolvableReason.PH_OUT_OF_RANGE, 13.5),
                 Arguments.of(new PhAndAlkalinity(8, 2300), UnsolvableReason.ALKALINITY_OUT_OF_RANGE, 2300.0),
                 Arguments.of(new PhAndAlkalinity(8, Double.NaN), UnsolvableReason.ALKALINITY_OUT_OF_RANGE, Double.NaN),
                 Arguments.of(new AlkalinityAndDic(2300e-6, -1e-9), UnsolvableReason.DIC_OUT_OF_RANGE, -1e-9),

@@ -44,9 +44,11 @@ class SingleConstantsValidationTest {
             case "pK1.millero2006.seawaterScale" -> Millero2006.pK1(t, s);
             case "pK2.millero2006.seawaterScale" -> Millero2006.pK2(t, s);
             case "densityKgM3" -> k.densityKgM3();
+            case "heatCapacity" -> MilleroPerronDesnoyers1973.heatCapacity(temperatureC, s);
             case "phFreeMinusTotal" -> PhScale.FREE.fromTotal(8, temperatureC, s) - 8;
             case "phTotalMinusSeawater" -> PhScale.SEAWATER.toTotal(8, temperatureC, s) - 8;
             case "phNbsMinusTotal" -> PhScale.NBS.fromTotal(8, temperatureC, s) - 8;
+            case "trisPh" -> TrisStandard.ph(temperatureC, s).orElseThrow();
             case "unionisedAmmoniaAtPh8.0" -> CleggWhitfield1995.unionisedShare(8.0, temperatureC, s);
             case "unionisedAmmoniaAtPh8.5" -> CleggWhitfield1995.unionisedShare(8.5, temperatureC, s);
             default -> throw new IllegalArgumentException("no such quantity: " + quantity);

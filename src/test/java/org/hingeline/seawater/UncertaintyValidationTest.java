@@ -16,6 +16,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 /** First-order propagation against published shares, against stepping and against chance. */
 class UncertaintyValidationTest {
     private static final Conditions WATER = Conditions.of(22, 30);
+    private static final InputUncertainty NOTHING = only(0, 0, 0, 0, 0, 0);
     private static final PhAndAlkalinity PAIR = new PhAndAlkalinity(7.9, 2078e-6);
 
     @ParameterizedTest
@@ -55,7 +56,8 @@ class UncertaintyValidationTest {
             double[] off = new double[Perturbed.CONSTANTS];
             // down in pK is up in K; Ksp goes down so that each step raises Ω, as the others do
             off[i] = i == Perturbed.KSP ? -1 : 1;
-            constants = Math.hypot(constants, Perturbed.omegaAragonite(WATER, PAIR.ph(), 2078e-6, off) - omega);
+            constants = Math.hypot(
+                    constants, Perturbed.omegaAragonite(WATER, PAIR.ph().value(), 2078e-6, off) - omega);
         }
         double inputs = 0;
         inputs = Math.hypot(inputs, omega(22, 30, 7.9 + u.ph(), 2078e-6) - omega);
@@ -137,6 +139,16 @@ class UncertaintyValidationTest {
     }
 
     @Test
+    void a_ph_on_nbs_buffers_carries_what_such_buffers_carry_however_little_is_claimed() {
+        CarbonateState nbs = CarbonateSystem.solve(WATER, new PhAndAlkalinity(8.03, PhScale.NBS, 2078e-6))
+                .orElseThrow();
+        assertThat(fromInputs(Uncertainty.of(nbs, only(0.01, 0, 0, 0, 0, 0)), "phTotal"))
+                .isCloseTo(0.05, within(1e-12));
+        assertThat(fromInputs(Uncertainty.of(nbs, only(0.08, 0, 0, 0, 0, 0)), "phTotal"))
+                .isCloseTo(0.08, within(1e-12));
+    }
+
+    @Test
     void the_other_pairs_move_as_the_solver_does() {
         slopesAreThoseOfTheSolver(WATER, (a, b) -> new AlkalinityAndPco2(2078e-6 + a * 1e-4, 600e-6 + b * 1e-4));
         slopesAreThoseOfTheSolver(
@@ -175,7 +187,9 @@ class UncertaintyValidationTest {
     }
 
     private static void same(String q, CarbonateState state, InputUncertainty u, double slope) {
-        double expected = Math.abs(slope);
+        // what a pH on NBS buffers carries at least is there whatever else moves
+        double carried = u.ph() == 0 ? fromInputs(Uncertainty.of(state, NOTHING), q) : 0;
+        double expected = Math.hypot(slope, carried);
         assertThat(fromInputs(Uncertainty.of(state, u), q))
                 .as("%s of %s with %s", q, state.known(), u)
                 .isCloseTo(expected, within(1e-5 * expected + 1e-7));
@@ -186,7 +200,7 @@ class UncertaintyValidationTest {
     }
 
     private static InputUncertainty only(double ph, double ta, double dic, double pco2, double t, double s) {
-        return new InputUncertainty(ph, ta, dic, pco2, t, s);
+        return new InputUncertainty(ph, ta, dic, pco2, t, s, 0);
     }
 
     private static double quantity(Conditions c, KnownPair pair, String name) {

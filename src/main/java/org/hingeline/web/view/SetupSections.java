@@ -41,7 +41,7 @@ public final class SetupSections {
                         text("code", "Code", "as gateways send it: ph-3"),
                         select("point", "Point", points),
                         select("quantity", "Quantity", QUANTITIES),
-                        optional("unit", "Unit", "UCUM, as Cel, umol/kg, [pH]; empty for the usual one"),
+                        optional("unit", "Unit", "UCUM, as Cel, umol/kg, meq/L, [pH]; empty for the usual one"),
                         select("phScale", "pH scale", PH_SCALES),
                         number(
                                 "standardUncertainty",
