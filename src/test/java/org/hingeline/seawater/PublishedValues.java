@@ -5,12 +5,16 @@ import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
 import org.hingeline.dosing.Agent;
+import org.hingeline.measure.Quantity;
+import org.hingeline.measure.UnitChoice;
+import org.hingeline.measure.UnitConversion;
+import org.hingeline.measure.Units;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
 import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
 
 /** Every value from elsewhere that this package is held against, table by table. */
 final class PublishedValues {
-    private static final Map<String, String> SOURCES = sources();
+    private static final Map<String, Source> SOURCES = sources();
 
     private PublishedValues() {}
 
@@ -25,6 +29,13 @@ final class PublishedValues {
         read(all, "dosing-sodium-carbonate", PublishedValues::sodiumCarbonate);
         read(all, "dosed-waters", PublishedValues::dosedWater);
         read(all, "dosing-agents", PublishedValues::dosingAgent);
+        read(all, "salinity-check-values", PublishedValues::salinity);
+        read(all, "unit-relations", PublishedValues::unitRelation);
+        read(all, "units", PublishedValues::unit);
+        read(all, "teos10-density", PublishedValues::teos10Density);
+        read(all, "teos10-density", PublishedValues::teos10HeatCapacity);
+        read(all, "teos10-salinity", PublishedValues::teos10Salinity);
+        read(all, "teos10-conductivity", PublishedValues::teos10Conductivity);
         return all;
     }
 
@@ -38,18 +49,20 @@ final class PublishedValues {
     private static void read(List<PublishedValue> all, String table, Reading reading) {
         for (Map<String, String> row : ReferenceTable.read(table).rows()) {
             Value v = reading.of(row);
-            String source = SOURCES.get(table + "," + row.getOrDefault("source", "R"));
+            Source source = SOURCES.get(table + "," + row.getOrDefault("source", "R"));
             if (source == null) {
                 throw new IllegalArgumentException("no source for " + row + " in table " + table);
             }
-            all.add(new PublishedValue(table, source, v.what, v.published, v.tolerance, v.ours));
+            all.add(new PublishedValue(table, source.name, source.words, v.what, v.published, v.tolerance, v.ours));
         }
     }
 
-    private static Map<String, String> sources() {
-        Map<String, String> sources = new TreeMap<>();
+    private record Source(String name, String words) {}
+
+    private static Map<String, Source> sources() {
+        Map<String, Source> sources = new TreeMap<>();
         for (Map<String, String> row : ReferenceTable.read("sources").rows()) {
-            sources.put(row.get("file") + "," + row.get("code"), row.get("source"));
+            sources.put(row.get("file") + "," + row.get("code"), new Source(row.get("name"), row.get("source")));
         }
         return sources;
     }
@@ -187,5 +200,82 @@ final class PublishedValues {
 
     private static double grams(Agent agent, String form) {
         return agent.form(form).orElseThrow().gramsPerMol();
+    }
+
+    private static Value salinity(Map<String, String> row) {
+        return new Value(
+                "salinity of R " + row.get("ratio") + ", " + row.get("temperature68C") + " °C, "
+                        + row.get("pressureDbar") + " dbar",
+                row.get("salinity"),
+                number(row, "tolerance"),
+                PracticalSalinity1978.salinity(
+                        number(row, "ratio"), number(row, "temperature68C"), number(row, "pressureDbar")));
+    }
+
+    private static Value unitRelation(Map<String, String> row) {
+        double density = 1025;
+        double canonical = alkalinity(row.get("from")).conversion(density).toCanonical(1);
+        return value(
+                row,
+                "1 " + row.get("from") + " in " + row.get("to"),
+                alkalinity(row.get("to")).conversion(density).fromCanonical(canonical));
+    }
+
+    private static UnitChoice alkalinity(String unit) {
+        return Units.find(Quantity.TOTAL_ALKALINITY, unit).orElseThrow();
+    }
+
+    private static Value unit(Map<String, String> row) {
+        Quantity quantity = Quantity.ofCode(row.get("quantity")).orElseThrow();
+        UnitChoice choice = Units.find(quantity, row.get("unit")).orElseThrow();
+        String density = row.get("densityKgM3");
+        UnitConversion conversion =
+                density.isEmpty() ? choice.conversion() : choice.conversion(Double.parseDouble(density));
+        double canonical = number(row, "canonical");
+        return new Value(
+                row.get("quantity") + ", " + row.get("value") + " " + row.get("unit") + " in "
+                        + quantity.unit().ucum() + (density.isEmpty() ? "" : " at " + density + " kg/m³"),
+                row.get("canonical"),
+                number(row, "relativeTolerance") * Math.max(1, Math.abs(canonical)),
+                conversion.toCanonical(number(row, "value")));
+    }
+
+    private static Value teos10Density(Map<String, String> row) {
+        double s = number(row, "salinity");
+        return new Value(
+                "densityKgM3, S " + row.get("salinity") + ", " + row.get("temperatureC") + " °C",
+                row.get("densityKgM3"),
+                (s > 40 ? 4 : 3) * Teos10ValidationTest.DENSITY_STANDARD_ERROR,
+                MilleroPoisson1981.densityKgM3(number(row, "temperatureC"), s));
+    }
+
+    private static Value teos10HeatCapacity(Map<String, String> row) {
+        return new Value(
+                "heatCapacity, S " + row.get("salinity") + ", " + row.get("temperatureC") + " °C",
+                row.get("heatCapacity"),
+                Teos10ValidationTest.HEAT_CAPACITY.value,
+                MilleroPerronDesnoyers1973.heatCapacity(number(row, "temperatureC"), number(row, "salinity")));
+    }
+
+    private static Value teos10Salinity(Map<String, String> row) {
+        return new Value(
+                "salinity, " + row.get("conductivityMsCm") + " mS/cm, " + row.get("temperatureC") + " °C",
+                row.get("salinity"),
+                Teos10ValidationTest.SAME_EQUATION.value,
+                ConductivitySalinity.salinity(
+                                number(row, "conductivityMsCm"),
+                                number(row, "temperatureC"),
+                                number(row, "pressureDbar"))
+                        .orElseThrow());
+    }
+
+    private static Value teos10Conductivity(Map<String, String> row) {
+        return new Value(
+                "conductivity in mS/cm, S " + row.get("salinity") + ", " + row.get("temperatureC") + " °C",
+                row.get("conductivityMsCm"),
+                Teos10ValidationTest.SAME_EQUATION.value,
+                ConductivitySalinity.conductivity(
+                                number(row, "salinity"), number(row, "temperatureC"), number(row, "pressureDbar"))
+                        .orElseThrow());
     }
 }

@@ -56,6 +56,7 @@ public final class SeawaterBench {
         Line outside = Line.constants(Waters.OUTSIDE);
         lines.add(outside);
         lines.add(Line.state(outside, Waters.OUTSIDE, Pair.PH_TA, Double.NaN));
+        lines.add(Line.state(outside, Waters.OUTSIDE, Pair.TA_DIC, Double.NaN));
         return lines;
     }
 
