@@ -30,7 +30,7 @@ public final class Ammonia {
     /**
      * The share of total ammonia that is un-ionised.
      *
-     * @param phTotal pH, total scale, 2 to 12
+     * @param phTotal pH, total scale, 2 to 13
      * @param temperatureC temperature, °C (ITS-90), −2 to 45
      * @param salinity practical salinity, 0 to 50
      * @return 0 to 1, or a refusal

@@ -7,8 +7,6 @@ import java.util.Optional;
 /** The refusals and cautions that the methods giving a {@link Figure} share. */
 final class FigureCheck {
     static final String PH_CODE = UnsolvableReason.PH_OUT_OF_RANGE.code();
-    private static final double PH_MIN = 2;
-    private static final double PH_MAX = 12;
 
     private FigureCheck() {}
 
@@ -29,7 +27,7 @@ final class FigureCheck {
     }
 
     static Optional<Figure.Refused> ph(double ph) {
-        return within(PH_CODE, "pH", ph, PH_MIN, PH_MAX, "");
+        return within(PH_CODE, "pH", ph, InputCheck.PH_MIN, InputCheck.PH_MAX, "");
     }
 
     /** Cautions of the fits that do not cover the water. */

@@ -31,7 +31,7 @@ public final class TrisStandard {
     /**
      * How far a sensor standing in the standard reads from it: positive when the sensor reads too high.
      *
-     * @param reading what the sensor shows, pH 2 to 12
+     * @param reading what the sensor shows, pH 2 to 13
      * @param scale the scale of the reading; one on NBS buffers carries a caution
      * @param temperatureC temperature of the standard, °C (ITS-90)
      * @param salinity practical salinity of the standard

@@ -37,7 +37,7 @@ class TrisStandardTest {
     @ParameterizedTest
     @CsvSource({
         "NaN, 25, 35, ph-out-of-range",
-        "12.5, 25, 35, ph-out-of-range",
+        "13.5, 25, 35, ph-out-of-range",
         "8, NaN, 35, temperature-not-covered",
         "8, 60, 35, temperature-not-covered",
         "8, 25, -1, salinity-not-covered",
