@@ -1,9 +1,5 @@
 package org.hingeline.seawater;
 
-import org.hingeline.seawater.KnownPair.DicAndPco2;
-import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
-import org.hingeline.seawater.KnownPair.PhAndDic;
-
 /**
  * How the two known quantities of a water move with ln [H], inorganic carbon and everything else: the two-by-two system
  * that, inverted, tells how [H] and carbon answer.
@@ -30,7 +26,7 @@ final class KnownSlopes {
         KnownPh ph = known.ph();
         double waterC = state.conditions().temperatureC();
         if (ph == null) {
-            first = plain(known instanceof DicAndPco2 ? Sensitivity.DIC : Sensitivity.TA);
+            first = plain(Origin.firstOf(known));
             withReadingTemperature = 0;
         } else if (ph.readAtC(waterC) == waterC) {
             double[] with = new double[Sensitivity.PARAMETERS];
@@ -48,16 +44,17 @@ final class KnownSlopes {
                     + there.with[Sensitivity.TEMPERATURE][Sensitivity.TA]
                             / (there.withLnH[Sensitivity.TA] * SeawaterConstants.LN_10);
         }
-        second = plain(
-                known instanceof PhAndAlkalinity
-                        ? Sensitivity.TA
-                        : known instanceof PhAndDic || known instanceof KnownPair.AlkalinityAndDic
-                                ? Sensitivity.DIC
-                                : Sensitivity.PCO2);
+        second = plain(Origin.secondOf(known));
         determinant = first.withLnH * second.withDic - first.withDic * second.withLnH;
     }
 
-    private Row plain(int quantity) {
+    private Row plain(Origin known) {
+        int quantity = switch (known) {
+            case TOTAL_ALKALINITY -> Sensitivity.TA;
+            case DIC -> Sensitivity.DIC;
+            case PCO2 -> Sensitivity.PCO2;
+            default -> throw new IllegalArgumentException(known + " is no quantity with a row of its own");
+        };
         double[] with = new double[Sensitivity.PARAMETERS];
         for (int p = 0; p < with.length; p++) {
             with[p] = slopes.with[p][quantity];

@@ -1,12 +1,11 @@
 package org.hingeline.seawater;
 
 import java.util.ArrayList;
+import java.util.EnumMap;
 import java.util.List;
+import java.util.Map;
 import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
-import org.hingeline.seawater.KnownPair.DicAndPco2;
-import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
-import org.hingeline.seawater.KnownPair.PhAndDic;
 
 /**
  * First-order propagation of the standard uncertainties of inputs and constants to every quantity of a solved water, and
@@ -64,16 +63,17 @@ public final class Uncertainty {
         for (int p = 0; p < ofConstants.length; p++) {
             causes.add(Cause.constant(p, ofConstants[p]));
         }
-        causes.add(Cause.input(0, 0, 0, first(known, inputs), 0));
-        causes.add(Cause.input(0, 0, 0, 0, second(known, inputs)));
-        causes.add(Cause.input(inputs.temperatureC(), 0, 0, 0, 0));
-        causes.add(Cause.input(0, inputs.salinity(), 0, 0, 0));
+        causes.add(Cause.input(Origin.firstOf(known), 0, 0, 0, first(known, inputs), 0));
+        causes.add(Cause.input(Origin.secondOf(known), 0, 0, 0, 0, second(known, inputs)));
+        causes.add(Cause.input(Origin.TEMPERATURE, inputs.temperatureC(), 0, 0, 0, 0));
+        causes.add(Cause.input(Origin.SALINITY, 0, inputs.salinity(), 0, 0, 0));
         if (state.conditions().calcium() != null) {
-            causes.add(Cause.input(0, 0, inputs.calcium(), 0, 0));
+            causes.add(Cause.input(Origin.CALCIUM, 0, 0, inputs.calcium(), 0, 0));
         }
         if (slopes.withReadingTemperature != 0) {
             // the thermometer at the electrode: the pH that the sample had where it was thought to be
-            causes.add(Cause.input(0, 0, 0, -slopes.withReadingTemperature * inputs.temperatureC(), 0));
+            causes.add(Cause.input(
+                    Origin.TEMPERATURE_AT_PH, 0, 0, 0, -slopes.withReadingTemperature * inputs.temperatureC(), 0));
         }
         return new Uncertainty(state, slopes, causes);
     }
@@ -96,6 +96,7 @@ public final class Uncertainty {
             Cause cause = causes.get(i);
             double[] move = moves.get(i);
             carried.add(new Cause(
+                    cause.origin(),
                     cause.constant(),
                     cause.ofConstant(),
                     sameTemperature ? cause.temperatureC() : 0,
@@ -134,6 +135,7 @@ public final class Uncertainty {
         Cause cause = causes.get(i);
         double[] move = moves.get(i);
         return new Cause(
+                cause.origin(),
                 cause.constant(),
                 cause.ofConstant(),
                 heatShare * cause.temperatureC(),
@@ -151,6 +153,15 @@ public final class Uncertainty {
             addSquares(causes.get(i).common() ? fromConstants : fromInputs, moves.get(i));
         }
         return StateUncertainty.ofVariances(fromConstants, fromInputs);
+    }
+
+    /** The standard uncertainty of Ω of aragonite that each origin alone would give; together, in quadrature, the total. */
+    public Map<Origin, Double> ofOmegaAragoniteByOrigin() {
+        Map<Origin, Double> shares = new EnumMap<>(Origin.class);
+        for (int i = 0; i < moves.size(); i++) {
+            shares.merge(causes.get(i).origin(), Math.abs(moves.get(i)[Sensitivity.OMEGA_ARAGONITE]), Math::hypot);
+        }
+        return shares;
     }
 
     /**
@@ -190,17 +201,22 @@ public final class Uncertainty {
     }
 
     private static double first(KnownPair known, InputUncertainty inputs) {
+        double stated = of(Origin.firstOf(known), inputs);
         KnownPh ph = known.ph();
-        if (ph == null) {
-            return known instanceof DicAndPco2 ? inputs.dic() : inputs.totalAlkalinity();
-        }
-        return ph.scale() == PhScale.NBS ? Math.max(inputs.ph(), InputUncertainty.PH_ON_NBS_BUFFERS) : inputs.ph();
+        return ph != null && ph.scale() == PhScale.NBS ? Math.max(stated, InputUncertainty.PH_ON_NBS_BUFFERS) : stated;
     }
 
     private static double second(KnownPair known, InputUncertainty inputs) {
-        if (known instanceof PhAndAlkalinity) {
-            return inputs.totalAlkalinity();
-        }
-        return known instanceof PhAndDic || known instanceof AlkalinityAndDic ? inputs.dic() : inputs.pco2Atm();
+        return of(Origin.secondOf(known), inputs);
+    }
+
+    private static double of(Origin known, InputUncertainty inputs) {
+        return switch (known) {
+            case PH -> inputs.ph();
+            case TOTAL_ALKALINITY -> inputs.totalAlkalinity();
+            case DIC -> inputs.dic();
+            case PCO2 -> inputs.pco2Atm();
+            default -> throw new IllegalArgumentException(known + " is no known quantity");
+        };
     }
 }

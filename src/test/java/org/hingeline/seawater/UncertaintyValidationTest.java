@@ -3,6 +3,7 @@ package org.hingeline.seawater;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.Map;
 import java.util.Random;
 import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
@@ -136,6 +137,22 @@ class UncertaintyValidationTest {
     void every_scale_moves_as_the_solver_does(PhScale scale) {
         double ph = scale.fromTotal(7.9, 22, 30);
         slopesAreThoseOfTheSolver(WATER, (a, b) -> new PhAndAlkalinity(ph + a, scale, 2078e-6 + b * 1e-4));
+    }
+
+    @Test
+    void each_origin_has_the_share_computed_elsewhere() {
+        CarbonateState state = CarbonateSystem.solve(WATER, PAIR).orElseThrow();
+        Map<Origin, Double> shares = Uncertainty.ofMeasured(
+                        state, InputUncertainty.ofPhAndAlkalinity(0.02, 17e-6, 0.1, 0.1), ConstantUncertainty.ORR_2018)
+                .ofOmegaAragoniteByOrigin();
+        // percent of 1.9454, to the printed digit; first order for the constants and pH, as in uncertainty.csv
+        assertThat(100 * shares.get(Origin.CONSTANTS) / state.omegaAragonite()).isCloseTo(5.5, within(0.05));
+        assertThat(100 * shares.get(Origin.PH) / state.omegaAragonite()).isCloseTo(3.9, within(0.05));
+        assertThat(100 * shares.get(Origin.TOTAL_ALKALINITY) / state.omegaAragonite())
+                .isCloseTo(0.84, within(0.005));
+        assertThat(100 * shares.get(Origin.TEMPERATURE) / state.omegaAragonite())
+                .isCloseTo(0.37, within(0.005));
+        assertThat(100 * shares.get(Origin.SALINITY) / state.omegaAragonite()).isCloseTo(0.17, within(0.005));
     }
 
     @Test
