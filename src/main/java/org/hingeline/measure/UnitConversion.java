@@ -1,7 +1,5 @@
 package org.hingeline.measure;
 
-import java.util.Optional;
-
 /**
  * From a unit people and gateways use to the canonical one and back: {@code canonical = factor * value + offset}.
  *
@@ -16,20 +14,6 @@ public record UnitConversion(String ucum, double factor, double offset) {
         if (!(Double.isFinite(factor) && factor > 0 && Double.isFinite(offset))) {
             throw new IllegalArgumentException("conversion of " + ucum + ": factor " + factor + ", offset " + offset);
         }
-    }
-
-    /**
-     * The conversion for a quantity given in a unit that needs nothing but the value.
-     *
-     * @return empty when the quantity is not accepted in that unit, or only with a density
-     */
-    public static Optional<UnitConversion> of(Quantity quantity, String ucum) {
-        return Units.find(quantity, ucum).filter(choice -> !choice.perLitre()).map(UnitChoice::conversion);
-    }
-
-    /** The UCUM codes accepted for a quantity, as one comma-separated list for error texts. */
-    public static String acceptedFor(Quantity quantity) {
-        return Units.codes(quantity);
     }
 
     /** The value in the canonical unit. */

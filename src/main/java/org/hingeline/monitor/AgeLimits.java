@@ -13,6 +13,10 @@ public record AgeLimits(Map<Quantity, Duration> longest) {
     public static final List<Quantity> NEEDED =
             List.of(Quantity.PH, Quantity.TEMPERATURE, Quantity.SALINITY, Quantity.TOTAL_ALKALINITY);
 
+    /** Whatever a reading of can change a water state: salinity may come from conductivity. */
+    public static final List<Quantity> ENTERING = List.of(
+            Quantity.PH, Quantity.TEMPERATURE, Quantity.SALINITY, Quantity.TOTAL_ALKALINITY, Quantity.CONDUCTIVITY);
+
     public AgeLimits {
         longest = Map.copyOf(longest);
         for (Quantity quantity : NEEDED) {
@@ -23,7 +27,11 @@ public record AgeLimits(Map<Quantity, Duration> longest) {
         }
     }
 
+    /** The limit of a quantity; that of conductivity is that of the salinity it gives. */
     public Duration of(Quantity quantity) {
+        if (quantity == Quantity.CONDUCTIVITY) {
+            return of(Quantity.SALINITY);
+        }
         return Objects.requireNonNull(longest.get(quantity), () -> quantity.code() + " has no age limit");
     }
 

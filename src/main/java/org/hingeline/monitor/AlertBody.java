@@ -143,7 +143,7 @@ final class AlertBody {
                 + Wording.withUnit(
                         Wording.number(input.value(), quantity == Quantity.PH ? 3 : Wording.decimals(quantity)),
                         quantity.unit())
-                + scale + ", " + input.origin() + " " + input.sensor() + " at " + time(input.at()) + ", "
+                + scale + ", " + input.source() + " at " + time(input.at()) + ", "
                 + Wording.length(Duration.between(input.at(), news.now())) + " ago"
                 + (input.flag() == Flag.SUSPECT ? ", SUSPECT" : ""));
     }

@@ -5,14 +5,18 @@ import java.time.Instant;
 import java.time.OffsetDateTime;
 import java.time.format.DateTimeParseException;
 import java.time.temporal.ChronoUnit;
+import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.TreeMap;
 import java.util.stream.Collectors;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Sensor;
 import org.hingeline.measure.Quantity;
-import org.hingeline.measure.UnitConversion;
+import org.hingeline.measure.UnitChoice;
+import org.hingeline.measure.Units;
+import org.hingeline.monitor.LitreReadings.PerLitre;
 import org.hingeline.monitor.ReadingBook.StoredReading;
 import org.hingeline.quality.GrossRange;
 import org.jspecify.annotations.Nullable;
@@ -23,6 +27,12 @@ final class ReadingCheck {
     private static final Instant EARLIEST = Instant.parse("2000-01-01T00:00:00Z");
 
     private static final int SHOWN = 12;
+
+    /** A row in canonical units; {@code unit} is the one it came in. */
+    record Row(IncomingReading incoming, StoredReading reading, UnitChoice unit) {}
+
+    /** The rows that can be stored as they are, those that wait for a density, and why the others are refused, by index. */
+    record Sorted(List<Row> rows, List<PerLitre> perLitre, Map<Integer, String> refused) {}
 
     private final Map<String, Point> points;
     private final Map<Long, List<Sensor>> sensors;
@@ -37,8 +47,20 @@ final class ReadingCheck {
         this.tolerance = futureTolerance;
     }
 
-    /** The reading in canonical units, its time cut to whole milliseconds. */
-    StoredReading check(IncomingReading row) throws RowRefusedException {
+    /** Judges every row; times are cut to whole milliseconds. */
+    Sorted sort(List<IncomingReading> batch) {
+        Sorted sorted = new Sorted(new ArrayList<>(batch.size()), new ArrayList<>(), new TreeMap<>());
+        for (IncomingReading incoming : batch) {
+            try {
+                check(incoming, sorted);
+            } catch (RowRefusedException e) {
+                sorted.refused().put(incoming.index(), e.getMessage());
+            }
+        }
+        return sorted;
+    }
+
+    private void check(IncomingReading row, Sorted sorted) throws RowRefusedException {
         String fault = row.fault();
         if (fault != null) {
             throw new RowRefusedException(fault);
@@ -55,10 +77,10 @@ final class ReadingCheck {
                 .orElseThrow(() -> new RowRefusedException(
                         "quantity " + Texts.quoted(code) + " cannot be posted; accepted: " + Quantity.measuredCodes()));
         Sensor sensor = sensorOf(point, quantity, row.sensor());
-        String unit = row.unit() == null ? sensor.unit() : row.unit();
-        UnitConversion conversion = UnitConversion.of(quantity, unit)
-                .orElseThrow(() -> new RowRefusedException("unit " + Texts.quoted(unit) + " is not accepted for " + code
-                        + "; accepted: " + UnitConversion.acceptedFor(quantity)));
+        String named = row.unit() == null ? sensor.unit() : row.unit();
+        UnitChoice unit = Units.find(quantity, named)
+                .orElseThrow(() -> new RowRefusedException("unit " + Texts.quoted(named) + " is not accepted for "
+                        + code + "; accepted: " + Units.codes(quantity)));
         Double value = row.value();
         if (value == null || !Double.isFinite(value)) {
             throw new RowRefusedException(
@@ -66,13 +88,24 @@ final class ReadingCheck {
                             ? "value is missing; a finite number is needed"
                             : "value " + value + " is not a finite number");
         }
-        double canonical = conversion.toCanonical(value);
-        if (!Double.isFinite(canonical)) {
-            throw new RowRefusedException("value " + value + " " + unit + " is too large to be a number in "
-                    + quantity.unit().ucum());
+        Instant at = time(required("at", row.at()));
+        if (unit.perLitre()) {
+            sorted.perLitre().add(new PerLitre(row, point, sensor, at, value, unit));
+        } else {
+            sorted.rows().add(row(row, sensor, at, unit.conversion().toCanonical(value), unit));
         }
-        return new StoredReading(
-                sensor.id(), time(required("at", row.at())), canonical, GrossRange.test(quantity, canonical));
+    }
+
+    /** A row once its value is in the canonical unit. */
+    static Row row(IncomingReading incoming, Sensor sensor, Instant at, double canonical, UnitChoice unit)
+            throws RowRefusedException {
+        Quantity quantity = sensor.quantity();
+        if (!Double.isFinite(canonical)) {
+            throw new RowRefusedException("value " + incoming.value() + " " + unit.ucum()
+                    + " is too large to be a number in " + quantity.unit().ucum());
+        }
+        return new Row(
+                incoming, new StoredReading(sensor.id(), at, canonical, GrossRange.test(quantity, canonical)), unit);
     }
 
     private Sensor sensorOf(Point point, Quantity quantity, @Nullable String code) throws RowRefusedException {

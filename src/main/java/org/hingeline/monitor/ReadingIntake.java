@@ -18,6 +18,7 @@ import org.hingeline.hatchery.Sensor;
 import org.hingeline.monitor.KeyBook.GatewayKey;
 import org.hingeline.monitor.ReadingBook.RefusedRow;
 import org.hingeline.monitor.ReadingBook.StoredReading;
+import org.hingeline.monitor.ReadingCheck.Row;
 
 /**
  * Takes in readings. Readings, water states, alerts and messages of a batch are one transaction; when {@link #take}
@@ -41,7 +42,7 @@ public final class ReadingIntake {
     /** How rows are taken. */
     public record Rules(Duration futureTolerance, int rowsPerTransaction) {}
 
-    private record Row(IncomingReading incoming, StoredReading reading) {}
+    private static final double DENSITY_LEEWAY = 0.002;
 
     private static final class Tally {
         final List<StoredReading> fresh = new ArrayList<>();
@@ -53,6 +54,7 @@ public final class ReadingIntake {
     private final InstantSource clock;
     private final Rules rules;
     private final WaterLedger ledger;
+    private final LitreReadings litres;
     private final AlertWatch watch;
     private final Signals signals;
 
@@ -62,6 +64,7 @@ public final class ReadingIntake {
         this.clock = clock;
         this.rules = rules;
         this.ledger = new WaterLedger(ageLimits);
+        this.litres = new LitreReadings(ageLimits);
         this.watch = watch;
         this.signals = signals;
     }
@@ -73,14 +76,12 @@ public final class ReadingIntake {
                 books.place().sensors(gateway.siteId()),
                 now,
                 rules.futureTolerance()));
-        Map<Integer, String> refused = new TreeMap<>();
-        List<Row> rows = new ArrayList<>(batch.size());
-        for (IncomingReading incoming : batch) {
-            try {
-                rows.add(new Row(incoming, check.check(incoming)));
-            } catch (RowRefusedException e) {
-                refused.put(incoming.index(), e.getMessage());
-            }
+        ReadingCheck.Sorted sorted = check.sort(batch);
+        Map<Integer, String> refused = sorted.refused();
+        List<Row> rows = sorted.rows();
+        if (!sorted.perLitre().isEmpty()) {
+            List<StoredReading> others = rows.stream().map(Row::reading).toList();
+            rows.addAll(storage.read(books -> litres.convert(books, sorted.perLitre(), others, refused)));
         }
         rows.sort(Comparator.comparing(row -> row.reading().at()));
         int stored = 0;
@@ -136,7 +137,7 @@ public final class ReadingIntake {
                 Double standing = known.putIfAbsent(reading.at(), reading.value());
                 if (standing == null) {
                     tally.fresh.add(reading);
-                } else if (standing == reading.value()) {
+                } else if (same(standing, row)) {
                     tally.duplicates++;
                 } else {
                     tally.refused.put(
@@ -146,6 +147,16 @@ public final class ReadingIntake {
                 }
             }
         });
+    }
+
+    /**
+     * Whether a value is the standing one again. One per litre, sent again after a late temperature has come, may have
+     * found another density: 5 °C or 2 of salinity make 0.15 %. The last digit of a titration is more than that.
+     */
+    private static boolean same(double standing, Row row) {
+        double value = row.reading().value();
+        return standing == value
+                || (row.unit().perLitre() && Math.abs(value - standing) <= DENSITY_LEEWAY * Math.abs(standing));
     }
 
     private void assess(Books books, long siteId, Map<Long, Sensor> sensors, List<StoredReading> fresh, Instant now) {

@@ -3,14 +3,11 @@ package org.hingeline.monitor;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
-import java.util.EnumMap;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import org.hingeline.hatchery.Sensor;
 import org.hingeline.measure.Quantity;
-import org.hingeline.monitor.PointInputs.Candidate;
 import org.hingeline.monitor.WaterState.InputUsed;
 import org.hingeline.monitor.WaterState.MissingInput;
 import org.hingeline.monitor.WaterState.Note;
@@ -20,6 +17,8 @@ import org.hingeline.seawater.CarbonateResult.Unsolvable;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.CarbonateSystem;
 import org.hingeline.seawater.Conditions;
+import org.hingeline.seawater.ConductivitySalinity;
+import org.hingeline.seawater.Figure;
 import org.hingeline.seawater.InputUncertainty;
 import org.hingeline.seawater.KnownPair;
 import org.hingeline.seawater.PhScale;
@@ -29,33 +28,34 @@ import org.hingeline.seawater.Uncertainty;
 /** From the freshest inputs at a moment to the water state, with the account of what was used and what was missing. */
 final class WaterAssessor {
     private final AgeLimits ageLimits;
+    private final InputChoice choice;
 
     WaterAssessor(AgeLimits ageLimits) {
         this.ageLimits = ageLimits;
+        this.choice = new InputChoice(ageLimits);
     }
 
     WaterState assess(long pointId, Instant at, PointInputs inputs) {
-        Map<Quantity, Candidate> found = new EnumMap<>(Quantity.class);
+        Map<String, Sensor> sensors = new HashMap<>();
         List<InputUsed> used = new ArrayList<>(AgeLimits.NEEDED.size());
         List<MissingInput> missing = new ArrayList<>();
+        List<Note> notes = new ArrayList<>();
         for (Quantity quantity : AgeLimits.NEEDED) {
-            Duration allowed = ageLimits.of(quantity);
-            Duration remembered = remembered(allowed);
-            Optional<Candidate> freshest = inputs.freshest(quantity, at)
-                    .filter(c -> Duration.between(c.reading().at(), at).compareTo(remembered) <= 0);
-            if (freshest.isPresent()
-                    && Duration.between(freshest.get().reading().at(), at).compareTo(allowed) <= 0) {
-                found.put(quantity, freshest.get());
-                used.add(inputUsed(quantity, freshest.get()));
+            InputChoice.Picked picked = choice.pick(quantity, at, inputs);
+            notes.addAll(picked.notes());
+            InputUsed input = picked.used();
+            Sensor sensor = picked.sensor();
+            if (input != null && sensor != null) {
+                used.add(input);
+                sensors.put(sensor.code(), sensor);
             } else {
-                missing.add(new MissingInput(
-                        quantity, freshest.map(c -> c.reading().at()).orElse(null), allowed));
+                missing.add(new MissingInput(quantity, picked.newestAt(), ageLimits.of(quantity)));
             }
         }
         if (!missing.isEmpty()) {
-            return new WaterState(pointId, at, used, missing, null, List.of());
+            return new WaterState(pointId, at, used, missing, null, notes);
         }
-        return compute(pointId, at, used, found);
+        return compute(new WaterState(pointId, at, used, List.of(), null, notes), sensors);
     }
 
     /** How far back a state looks: twice the allowed age, so that it can say how old a value it did not use was. */
@@ -63,22 +63,9 @@ final class WaterAssessor {
         return allowedAge.multipliedBy(2);
     }
 
-    private static InputUsed inputUsed(Quantity quantity, Candidate candidate) {
-        return new InputUsed(
-                quantity,
-                candidate.reading().value(),
-                candidate.reading().at(),
-                "sensor",
-                candidate.sensor().code(),
-                candidate.reading().flag());
-    }
-
-    private static WaterState compute(long pointId, Instant at, List<InputUsed> used, Map<Quantity, Candidate> found) {
-        Map<String, Sensor> sensors = new HashMap<>();
-        found.values().forEach(c -> sensors.put(c.sensor().code(), c.sensor()));
-        WaterState bare = new WaterState(pointId, at, used, List.of(), null, List.of());
+    private static WaterState compute(WaterState bare, Map<String, Sensor> sensors) {
         Inputs inputs = Inputs.of(bare, sensors);
-        List<Note> cautions = new ArrayList<>();
+        List<Note> cautions = new ArrayList<>(bare.cautions());
         if (bare.suspect()) {
             cautions.add(
                     new Note("suspect-input", "an input is marked suspect, and so is everything computed from it"));
@@ -86,12 +73,13 @@ final class WaterAssessor {
         CarbonateResult result = inputs.solve();
         if (result instanceof Unsolvable refusal) {
             cautions.add(new Note(refusal.reason().code(), refusal.detail()));
-            return new WaterState(pointId, at, used, List.of(), null, cautions);
+            return new WaterState(bare.pointId(), bare.at(), bare.inputs(), List.of(), null, cautions);
         }
         CarbonateState state = ((Solved) result).state();
         state.cautions().forEach(caution -> cautions.add(new Note(caution.code(), caution.detail())));
         StateUncertainty uncertainty = Uncertainty.of(state, inputs.uncertainty());
-        return new WaterState(pointId, at, used, List.of(), numbers(state, uncertainty), cautions);
+        return new WaterState(
+                bare.pointId(), bare.at(), bare.inputs(), List.of(), numbers(state, uncertainty), cautions);
     }
 
     /** The inputs of a complete state with what is known of their sensors. */
@@ -126,7 +114,30 @@ final class WaterAssessor {
                                     : registered,
                             sensor(alkalinity, sensors).standardUncertainty() * 1e-6,
                             sensor(temperature, sensors).standardUncertainty(),
-                            sensor(salinity, sensors).standardUncertainty()));
+                            salinityUncertainty(salinity, temperature, sensors)));
+        }
+
+        /**
+         * Of a salinity from conductivity, what the uncertainties of conductivity and temperature make of it. Taken at
+         * the temperature of the state: between that and the temperature of the conductivity the sensitivities hardly
+         * differ.
+         */
+        private static double salinityUncertainty(
+                InputUsed salinity, InputUsed temperature, Map<String, Sensor> sensors) {
+            double registered = sensor(salinity, sensors).standardUncertainty();
+            if (!salinity.origin().equals(InputUsed.FROM_CONDUCTIVITY)) {
+                return registered;
+            }
+            if (ConductivitySalinity.conductivity(salinity.value(), temperature.value()) instanceof Figure.Known known
+                    && ConductivitySalinity.uncertainty(
+                                    known.value(),
+                                    temperature.value(),
+                                    registered,
+                                    sensor(temperature, sensors).standardUncertainty())
+                            instanceof Figure.Known uncertainty) {
+                return uncertainty.value();
+            }
+            return InputUncertainty.DEFAULTS.salinity();
         }
 
         CarbonateResult solve() {

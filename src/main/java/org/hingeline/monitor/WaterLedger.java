@@ -1,6 +1,5 @@
 package org.hingeline.monitor;
 
-import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
 import java.util.EnumMap;
@@ -25,10 +24,12 @@ final class WaterLedger {
 
     private final AgeLimits ageLimits;
     private final WaterAssessor assessor;
+    private final InputLoader loader;
 
     WaterLedger(AgeLimits ageLimits) {
         this.ageLimits = ageLimits;
         this.assessor = new WaterAssessor(ageLimits);
+        this.loader = new InputLoader(ageLimits);
     }
 
     /**
@@ -41,7 +42,7 @@ final class WaterLedger {
      */
     List<WaterState> assess(Books books, long pointId, List<Sensor> sensors, List<StoredReading> fresh) {
         List<Sensor> entering = sensors.stream()
-                .filter(sensor -> AgeLimits.NEEDED.contains(sensor.quantity()))
+                .filter(sensor -> AgeLimits.ENTERING.contains(sensor.quantity()))
                 .toList();
         Map<Long, Quantity> quantities = entering.stream().collect(Collectors.toMap(Sensor::id, Sensor::quantity));
         NavigableSet<Instant> times = new TreeSet<>();
@@ -83,21 +84,32 @@ final class WaterLedger {
 
     /**
      * Up to when states can differ because of fresh readings: until each quantity is read again, or its last fresh value
-     * is too old even to be named as missing.
+     * is too old even to be named as missing. A temperature also speaks through the conductivities that are read while it
+     * is the newest, for as long as the last of these does.
      */
     private Instant reach(Books books, List<Sensor> entering, Map<Quantity, Instant> latest, Instant none) {
         Instant reach = none;
         for (Map.Entry<Quantity, Instant> entry : latest.entrySet()) {
-            Instant last = entry.getValue();
-            Instant end = last.plus(WaterAssessor.remembered(ageLimits.of(entry.getKey())));
-            for (Sensor sensor : entering) {
-                if (sensor.quantity() == entry.getKey()) {
-                    end = books.readings().firstAfter(sensor.id(), last, end).orElse(end);
-                }
+            Quantity quantity = entry.getKey();
+            Instant end = untilReadAgain(books, entering, quantity, entry.getValue());
+            boolean throughConductivity = quantity == Quantity.TEMPERATURE
+                    && entering.stream().anyMatch(sensor -> sensor.quantity() == Quantity.CONDUCTIVITY);
+            if (throughConductivity) {
+                end = untilReadAgain(books, entering, Quantity.CONDUCTIVITY, end);
             }
             reach = end.isAfter(reach) ? end : reach;
         }
         return reach;
+    }
+
+    private Instant untilReadAgain(Books books, List<Sensor> entering, Quantity quantity, Instant last) {
+        Instant end = last.plus(WaterAssessor.remembered(ageLimits.of(quantity)));
+        for (Sensor sensor : entering) {
+            if (sensor.quantity() == quantity) {
+                end = books.readings().firstAfter(sensor.id(), last, end).orElse(end);
+            }
+        }
+        return end;
     }
 
     /**
@@ -130,26 +142,11 @@ final class WaterLedger {
     private List<WaterState> compute(Books books, long pointId, List<Sensor> sensors, NavigableSet<Instant> times) {
         List<WaterState> states = new ArrayList<>(times.size());
         for (NavigableSet<Instant> spell : Spells.of(times)) {
-            PointInputs inputs = inputs(books, sensors, spell.first(), spell.last());
+            PointInputs inputs = loader.load(books, sensors, spell.first(), spell.last());
             for (Instant at : spell) {
                 states.add(assessor.assess(pointId, at, inputs));
             }
         }
         return states;
-    }
-
-    private PointInputs inputs(Books books, List<Sensor> sensors, Instant first, Instant last) {
-        PointInputs inputs = new PointInputs();
-        for (Sensor sensor : sensors) {
-            if (!AgeLimits.NEEDED.contains(sensor.quantity())) {
-                continue;
-            }
-            Duration back = WaterAssessor.remembered(ageLimits.of(sensor.quantity()));
-            books.readings()
-                    .newestBefore(sensor.id(), first.minus(back), first)
-                    .ifPresent(reading -> inputs.add(sensor, reading));
-            books.readings().between(sensor.id(), first, last).forEach(reading -> inputs.add(sensor, reading));
-        }
-        return inputs;
     }
 }

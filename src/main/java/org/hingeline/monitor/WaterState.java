@@ -31,10 +31,22 @@ public record WaterState(
      * An input of the state.
      *
      * @param value canonical unit; pH on the sensor's own scale
-     * @param at when it was measured
-     * @param origin how it came: {@code sensor}
+     * @param at when it was measured; of a salinity from conductivity, when the conductivity was
+     * @param origin how it came: {@link #FROM_SENSOR} or {@link #FROM_CONDUCTIVITY}
+     * @param sensor the sensor that measured it, or the conductivity
      */
     public record InputUsed(Quantity quantity, double value, Instant at, String origin, String sensor, Flag flag) {
+        /** Read by a sensor of the quantity itself. */
+        public static final String FROM_SENSOR = "sensor";
+
+        /** A salinity computed from conductivity and temperature. */
+        public static final String FROM_CONDUCTIVITY = "conductivity";
+
+        /** Where it came from, in words: "sensor ph-3", "conductivity sensor c-3". */
+        public String source() {
+            return (origin.equals(FROM_SENSOR) ? origin : origin + " sensor") + " " + sensor;
+        }
+
         public Duration age(Instant stateAt) {
             return Duration.between(at, stateAt);
         }

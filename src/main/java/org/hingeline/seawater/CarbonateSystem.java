@@ -87,6 +87,12 @@ public final class CarbonateSystem {
         return Math.exp(-(ph.value() + k.scales.offsetToTotal(ph.scale())) * SeawaterConstants.LN_10);
     }
 
+    /** A pH that was given is answered as it was given, to the last digit. */
+    private static double phTotal(SeawaterConstants k, KnownPair known, double h) {
+        KnownPh ph = known.ph();
+        return ph == null ? -Math.log10(h) : ph.value() + k.scales.offsetToTotal(ph.scale());
+    }
+
     /** Where bicarbonate and carbonate together are that many times CO2: the root of r h² = K1 h + K1 K2. */
     private static double hydrogenIonOfIonised(SeawaterConstants k, double r) {
         return (k.k1 + Math.sqrt(k.k1 * (k.k1 + 4 * r * k.k2))) / (2 * r);
@@ -130,7 +136,7 @@ public final class CarbonateSystem {
                 conditions,
                 known,
                 k,
-                -Math.log10(h),
+                phTotal(k, known, h),
                 totalAlkalinity,
                 dic,
                 s.co2(),

@@ -15,6 +15,7 @@ import org.hingeline.dosing.DosePlan;
 import org.hingeline.dosing.DoseStep;
 import org.hingeline.dosing.Remedy;
 import org.hingeline.measure.Quantity;
+import org.hingeline.measure.VolumeUnit;
 import org.hingeline.monitor.DoseDesk;
 import org.hingeline.monitor.DoseWish;
 import org.hingeline.monitor.FieldFaults;
@@ -61,11 +62,12 @@ final class DosePages {
     private void plan(Context ctx) {
         PointStatus point = PointRoutes.found(board, ctx);
         try {
-            DosePlan plan = doses.plan(Visit.of(ctx).site(), wish(ctx, point));
+            DoseWish wish = wish(ctx, point);
+            DosePlan plan = doses.plan(Visit.of(ctx).site(), wish);
             Map<String, String> values = new LinkedHashMap<>();
             ctx.formParamMap().forEach((field, sent) -> values.put(field, sent.isEmpty() ? "" : sent.get(0)));
             values.remove(Gatekeeper.CSRF_FIELD);
-            show(ctx, 200, point, Form.of(values), result(plan, values.getOrDefault("hydration", "")));
+            show(ctx, 200, point, Form.of(values), result(plan, wish, new DoseAmounts(volumeUnit(ctx))));
         } catch (FieldFaultsException e) {
             show(ctx, 422, point, Forms.refused(ctx, withFormNames(e)), null);
         }
@@ -74,12 +76,23 @@ final class DosePages {
     /** The use case names the fields of its own request; the form has them under shorter names. */
     private static FieldFaultsException withFormNames(FieldFaultsException e) {
         return new FieldFaultsException(e.faults().stream()
-                .map(fault -> new FieldFaults.Fault(
-                        fault.field().startsWith("target")
-                                ? "targetOmega"
-                                : fault.field().substring(fault.field().lastIndexOf('/') + 1),
-                        fault.detail()))
+                .map(fault -> new FieldFaults.Fault(formName(fault.field()), fault.detail()))
                 .toList());
+    }
+
+    private static String formName(String field) {
+        if (field.startsWith("target")) {
+            return "targetOmega";
+        }
+        String last = field.substring(field.lastIndexOf('/') + 1);
+        return last.equals("volumeL") ? "volume" : last;
+    }
+
+    /** Litres where the form says nothing. */
+    private static VolumeUnit volumeUnit(Context ctx) {
+        String ucum = Forms.text(ctx, "volumeUnit");
+        return VolumeUnit.ofUcum(ucum.isEmpty() ? VolumeUnit.LITRE.ucum() : ucum)
+                .orElseThrow(() -> new FieldFaultsException("volumeUnit", "choose L, m\u00b3 or US gal"));
     }
 
     private void show(Context ctx, int status, PointStatus point, Form form, @Nullable Result result) {
@@ -95,10 +108,11 @@ final class DosePages {
 
     private static DoseWish wish(Context ctx, PointStatus point) {
         FieldFaults faults = new FieldFaults();
+        Double volume = Forms.number(ctx, "volume", faults);
         DoseWish wish = new DoseWish(
                 point.point().code(),
                 null,
-                Forms.number(ctx, "volumeL", faults),
+                volume == null ? null : volumeUnit(ctx).toLitres(volume),
                 new DoseWish.Target(Forms.number(ctx, "targetOmega", faults), null, null),
                 new DoseWish.Agent(
                         null,
@@ -126,8 +140,10 @@ final class DosePages {
                 Words.plain(Math.round(
                                 limit.map(l -> l.threshold() + ABOVE_LIMIT).orElse(TARGET_WITHOUT_LIMIT) * 100)
                         / 100.0),
-                "volumeL",
+                "volume",
                 volumeL == null ? "" : Words.plain(volumeL),
+                "volumeUnit",
+                VolumeUnit.LITRE.ucum(),
                 "assayPercent",
                 "99",
                 "stockGramsPerLitre",
@@ -154,15 +170,15 @@ final class DosePages {
                 .orElse("the water is not known well enough.");
     }
 
-    private static Result result(DosePlan plan, String hydration) {
+    private static Result result(DosePlan plan, DoseWish wish, DoseAmounts amounts) {
         Amount mass = plan.massG();
         return new Result(
                 Outcome.valueOf(plan.outcome().name()),
-                sentence(plan, hydration),
-                mass == null ? "" : grams(mass.value()),
-                mass == null ? "" : grams(mass.low()),
-                mass == null ? "" : grams(mass.high()),
-                plan.steps().stream().map(DosePages::step).toList(),
+                sentence(plan, wish, amounts),
+                mass == null ? "" : amounts.mass(mass.value()),
+                mass == null ? "" : amounts.mass(mass.low()),
+                mass == null ? "" : amounts.mass(mass.high()),
+                plan.steps().stream().map(step -> step(step, amounts)).toList(),
                 waters(plan),
                 plan.remedies().stream().map(remedy -> remedy.detail()).toList(),
                 plan.cautions().stream().map(caution -> caution.detail()).toList(),
@@ -171,7 +187,9 @@ final class DosePages {
                         .toList());
     }
 
-    private static String sentence(DosePlan plan, String hydration) {
+    private static String sentence(DosePlan plan, DoseWish wish, DoseAmounts amounts) {
+        DoseWish.Agent agent = wish.agent();
+        Double volumeL = wish.volumeL();
         Amount mass = plan.massG();
         CarbonateState after = plan.after();
         return switch (plan.outcome()) {
@@ -183,11 +201,13 @@ final class DosePages {
                         : (plan.remedies().stream().anyMatch(Remedy::reachesTarget)
                                         ? "Air first. If that cannot be: "
                                         : "")
-                                + grams(mass.value()) + " of " + hydration + " sodium carbonate in "
+                                + amounts.mass(mass.value()) + " of " + (agent == null ? "" : agent.hydration())
+                                + " sodium carbonate in "
                                 + (plan.steps().size() == 1
                                         ? "one step"
                                         : plan.steps().size() + " steps")
-                                + " would bring \u03a9 to " + Words.number(after.omegaAragonite(), 2) + ".";
+                                + " would bring \u03a9 to " + Words.number(after.omegaAragonite(), 2)
+                                + (volumeL == null ? "" : " in " + amounts.volume(volumeL)) + ".";
         };
     }
 
@@ -197,11 +217,11 @@ final class DosePages {
         return words.endsWith(".") ? words : words + ".";
     }
 
-    private static Step step(DoseStep step) {
+    private static Step step(DoseStep step, DoseAmounts amounts) {
         Double stock = step.stockMl();
         return new Step(
                 step.atMinutes() == 0 ? "At once" : "After " + Moment.span(Duration.ofMinutes(step.atMinutes())),
-                grams(step.massG()),
+                amounts.mass(step.massG()),
                 stock == null ? "" : Words.number(stock, 0) + "\u00a0mL",
                 Words.number(step.phTotal(), 2),
                 Words.number(step.omegaAragonite(), 2));
@@ -248,11 +268,5 @@ final class DosePages {
                 Words.number(before, digits),
                 after == null ? "" : Words.number(after, digits),
                 aerated == null ? "" : Words.number(aerated, digits));
-    }
-
-    private static String grams(double grams) {
-        return grams >= 10_000
-                ? Words.number(grams / 1000, 2) + "\u00a0kg"
-                : Words.number(grams, grams < 10 ? 2 : grams < 100 ? 1 : 0) + "\u00a0g";
     }
 }

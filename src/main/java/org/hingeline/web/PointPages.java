@@ -189,7 +189,7 @@ final class PointPages {
                 .map(input -> new InputLine(
                         input.quantity().words(),
                         Words.withUnit(input.quantity(), input.value()),
-                        input.origin() + " " + input.sensor(),
+                        input.source(),
                         Moment.of(input.at(), point.now(), zone),
                         flag(input.flag())))
                 .toList();

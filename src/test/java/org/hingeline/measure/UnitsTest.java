@@ -12,6 +12,7 @@ import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.Arrays;
 import java.util.List;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvFileSource;
@@ -102,6 +103,15 @@ class UnitsTest {
         assertThatIllegalArgumentException().isThrownBy(() -> dkh.conversion(0)).withMessageContaining("0.0");
         assertThatIllegalArgumentException().isThrownBy(() -> dkh.conversion(Double.NaN));
         assertThat(Units.codesWithoutDensity(Quantity.TOTAL_ALKALINITY)).isEqualTo("umol/kg, mmol/kg, mol/kg");
+    }
+
+    @Test
+    void a_unit_written_otherwise_is_not_found() {
+        assertThat(Stream.of("meq/l", "DKH", "\u00b5mol/kg", "UMOL/KG", "", " umol/kg"))
+                .allSatisfy(text ->
+                        assertThat(Units.find(Quantity.TOTAL_ALKALINITY, text)).isEmpty());
+        assertThat(Units.find(Quantity.TEMPERATURE, "\u00b0C")).isEmpty();
+        assertThat(Units.find(Quantity.PH, "Cel")).isEmpty();
     }
 
     @Test

@@ -176,6 +176,7 @@ final class Hatchery {
             case "t" -> "temperature";
             case "s" -> "salinity";
             case "ta" -> "totalAlkalinity";
+            case "c" -> "conductivity";
             case "o2" -> "dissolvedOxygen";
             default -> throw new IllegalArgumentException(sensor);
         };

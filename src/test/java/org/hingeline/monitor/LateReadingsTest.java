@@ -16,6 +16,8 @@ import java.util.Random;
 import java.util.Set;
 import org.hingeline.measure.Quantity;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
 
 class LateReadingsTest {
     private static final int MANY = 1200;
@@ -88,13 +90,14 @@ class LateReadingsTest {
         assertThat(knows(hatchery.newestState(), Quantity.TOTAL_ALKALINITY)).isTrue();
     }
 
-    @Test
-    void readings_in_any_order_and_any_batches_give_the_states_of_readings_in_order() {
+    @ParameterizedTest
+    @ValueSource(booleans = {false, true})
+    void readings_in_any_order_and_any_batches_give_the_states_of_readings_in_order(boolean conductivity) {
         for (int seed = 1; seed <= 2; seed++) {
             Hatchery first = Hatchery.empty();
-            sensors(first);
+            sensors(first, conductivity);
             first.clock.set(T0.plus(Duration.ofDays(20)));
-            List<IncomingReading> rows = readings(new Random(seed));
+            List<IncomingReading> rows = readings(new Random(seed), conductivity);
             rows.sort(Comparator.comparing(IncomingReading::at).thenComparing(IncomingReading::index));
             for (int from = 0; from < rows.size(); from += 6) {
                 first.take(rows.subList(from, Math.min(rows.size(), from + 6)).toArray(IncomingReading[]::new));
@@ -102,7 +105,7 @@ class LateReadingsTest {
             List<WaterState> inOrder = statesOf(first);
 
             Hatchery second = Hatchery.empty();
-            sensors(second);
+            sensors(second, conductivity);
             second.clock.set(T0.plus(Duration.ofDays(20)));
             Random random = new Random(100 + seed);
             Collections.shuffle(rows, random);
@@ -115,26 +118,40 @@ class LateReadingsTest {
                 // until all is done
             }
 
+            assertThat(inOrder.stream()
+                            .flatMap(state -> state.inputs().stream())
+                            .filter(input -> input.origin().equals("conductivity")))
+                    .hasSizeGreaterThan(conductivity ? 20 : -1)
+                    .hasSizeLessThan(conductivity ? 1000 : 1);
             assertThat(statesOf(second)).as("seed %s", seed).isEqualTo(inOrder);
         }
     }
 
-    private static void sensors(Hatchery hatchery) {
+    private static void sensors(Hatchery hatchery, boolean conductivity) {
+        if (conductivity) {
+            hatchery.sensor("c-1", Quantity.CONDUCTIVITY, 0.1);
+            hatchery.sensor("c-2", Quantity.CONDUCTIVITY, 0.05);
+        }
         hatchery.sensor("ph-2", Quantity.PH, 0.02);
         hatchery.sensor("t-2", Quantity.TEMPERATURE, 0.05);
     }
 
     /** Some hundred readings of eleven days, dense and with gaps, some of one moment, some not usable. */
-    private static List<IncomingReading> readings(Random random) {
+    private static List<IncomingReading> readings(Random random, boolean conductivity) {
         List<IncomingReading> rows = new ArrayList<>();
         Set<String> taken = new HashSet<>();
-        String[] sensors = {"ph-1", "ph-1", "ph-2", "t-1", "t-2", "s-1", "ta-1", "o2-1"};
-        double[] base = {7.9, 7.9, 7.8, 22, 21.5, 30, 2078, 7};
+        String[] sensors = conductivity
+                ? new String[] {"ph-1", "c-1", "ph-2", "t-1", "t-2", "s-1", "ta-1", "c-2"}
+                : new String[] {"ph-1", "ph-1", "ph-2", "t-1", "t-2", "s-1", "ta-1", "o2-1"};
+        double[] base = {7.9, conductivity ? 43 : 7.9, 7.8, 22, 21.5, 30, 2078, conductivity ? 44 : 7};
         for (int i = 0; i < 420; i++) {
             int which = random.nextInt(sensors.length);
             Instant spell = T0.plus(Duration.ofHours(37L * random.nextInt(8)));
             Instant at = spell.plus(Duration.ofMinutes(5L * random.nextInt(60)));
             double value = random.nextInt(15) == 0 ? 9999 : base[which] * (1 + 0.02 * random.nextDouble());
+            if (conductivity && which == 5 && i % 4 != 0) {
+                continue; // salinity seldom, so that conductivity has to stand in
+            }
             if (taken.add(sensors[which] + at)) {
                 rows.add(row(i, sensors[which], value, at));
             }

@@ -337,8 +337,10 @@ final class LookSamples {
         Form form = Form.of(Map.of(
                 "targetOmega",
                 "2.5",
-                "volumeL",
+                "volume",
                 "4000",
+                "volumeUnit",
+                "L",
                 "hydration",
                 "anhydrous",
                 "assayPercent",

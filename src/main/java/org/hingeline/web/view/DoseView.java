@@ -1,6 +1,8 @@
 package org.hingeline.web.view;
 
+import java.util.Arrays;
 import java.util.List;
+import org.hingeline.measure.VolumeUnit;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -9,7 +11,7 @@ import org.jspecify.annotations.Nullable;
  * @param pointCode the tank
  * @param pointName its name
  * @param waterNow its water in a sentence: "Ω 1.62 ±0.11, pH 7.71, 21.9 °C, 2 min ago"
- * @param form fields targetOmega, volumeL, hydration (anhydrous, monohydrate, decahydrate), assayPercent, stockGramsPerLitre,
+ * @param form fields targetOmega, volume, volumeUnit (UCUM), hydration (anhydrous, monohydrate, decahydrate), assayPercent, stockGramsPerLitre,
  *     phTotalMax, omegaAragoniteMax, phPerHourMax
  * @param result what was worked out; null before the form is sent
  */
@@ -69,6 +71,13 @@ public record DoseView(
 
     /** Why a plan was refused, and what would lift that. */
     public record Reason(String why, String lift) {}
+
+    /** The units a tank's volume may be given in. */
+    public static List<Choice> volumeUnits() {
+        return Arrays.stream(VolumeUnit.values())
+                .map(unit -> new Choice(unit.ucum(), unit.label()))
+                .toList();
+    }
 
     /** The forms of sodium carbonate sold, with what sets them apart. */
     public static List<Choice> hydrations() {

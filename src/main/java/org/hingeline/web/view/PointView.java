@@ -33,7 +33,7 @@ public record PointView(
      *
      * @param quantity "pH", "alkalinity"
      * @param value with its unit: "7.71", "2 180 µmol/kg"
-     * @param origin where it came from: "sensor ph-3", "bottle sample 12 May", "site setting"
+     * @param origin where it came from: "sensor ph-3", "conductivity sensor c-3", "bottle sample 12 May", "site setting"
      * @param measured when it was read
      * @param flag what quality control thinks of it: "passed", "suspect: flat line"; may be empty
      */
