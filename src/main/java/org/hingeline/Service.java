@@ -37,6 +37,7 @@ import org.hingeline.monitor.Secrets;
 import org.hingeline.monitor.Signals;
 import org.hingeline.monitor.StatusBoard;
 import org.hingeline.monitor.Storage;
+import org.hingeline.monitor.WaterRules;
 import org.hingeline.store.Database;
 import org.hingeline.store.EmbeddedDatabase;
 import org.hingeline.web.LiveEvents;
@@ -91,7 +92,10 @@ final class Service implements AutoCloseable {
         SecureRandom random = new SecureRandom();
         Secrets secrets = new Secrets(random);
         String node = Secrets.hash(secrets.make("")).substring(0, 12);
-        AgeLimits ageLimits = new AgeLimits(settings.ageLimits().byQuantity());
+        WaterRules water = new WaterRules(
+                new AgeLimits(settings.ageLimits().byQuantity()),
+                settings.water().constants(),
+                settings.water().boron());
         Courier courier = courier(settings, clock, database, random, node);
 
         LiveEvents live = new LiveEvents(embedded ? Duration.ZERO : LOOK_FOR_OTHER_NODES);
@@ -118,7 +122,7 @@ final class Service implements AutoCloseable {
         List<Check> checks = new ArrayList<>(Checks.of(database, backups, clock));
         TimedWork timedWork = TimedWork.start(
                 database,
-                new Housekeeping(database, clock, watch, ageLimits),
+                new Housekeeping(database, clock, watch, water),
                 nudge,
                 backups,
                 settings.backups().every(),
@@ -133,13 +137,13 @@ final class Service implements AutoCloseable {
                         new ReadingIntake.Rules(
                                 settings.intake().futureTolerance(),
                                 settings.intake().rowsPerTransaction()),
-                        ageLimits,
+                        water,
                         watch,
                         signals),
                 board,
                 limits,
                 alerts,
-                doses(settings, database, board, ageLimits),
+                doses(settings, database, board, water),
                 place,
                 checks);
         try {
@@ -172,11 +176,11 @@ final class Service implements AutoCloseable {
                 new Passwords(random));
     }
 
-    private static DoseDesk doses(Settings settings, Database database, StatusBoard board, AgeLimits ageLimits) {
+    private static DoseDesk doses(Settings settings, Database database, StatusBoard board, WaterRules water) {
         Settings.Dosing dosing = settings.dosing();
         return new DoseDesk(
                 board,
-                new DoseWaters(database, ageLimits),
+                new DoseWaters(database, water),
                 new DoseDesk.Defaults(
                         dosing.phTotalMax(),
                         dosing.omegaAragoniteMax(),

@@ -195,19 +195,23 @@ final class Section {
     }
 
     <E extends Enum<E>> E choice(String key, E standard) {
+        return named(key, standard, standard.getDeclaringClass().getEnumConstants(), Section::word);
+    }
+
+    /** One of several, each by its name. */
+    <E> E named(String key, E standard, E[] all, Function<E, String> name) {
         JsonNode value = value(key);
         if (value == null) {
             return standard;
         }
-        E[] all = standard.getDeclaringClass().getEnumConstants();
         if (value.isString()) {
             for (E one : all) {
-                if (word(one).equals(value.asString())) {
+                if (name.apply(one).equals(value.asString())) {
                     return one;
                 }
             }
         }
-        bad(key, value, Arrays.stream(all).map(Section::word).collect(Collectors.joining(" or ")));
+        bad(key, value, Arrays.stream(all).map(name).collect(Collectors.joining(" or ")));
         return standard;
     }
 

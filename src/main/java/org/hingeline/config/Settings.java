@@ -5,6 +5,8 @@ import java.time.Duration;
 import java.util.List;
 import java.util.Map;
 import org.hingeline.measure.Quantity;
+import org.hingeline.seawater.BoronRatio;
+import org.hingeline.seawater.CarbonicAcidFit;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -21,6 +23,7 @@ public record Settings(
         Mail mail,
         Delivery delivery,
         AgeLimits ageLimits,
+        Water water,
         Intake intake,
         Dosing dosing,
         Accounts accounts) {
@@ -121,6 +124,9 @@ public record Settings(
         }
     }
 
+    /** The published fits that water states are computed with. */
+    public record Water(CarbonicAcidFit constants, BoronRatio boron) {}
+
     public record Intake(Duration futureTolerance, int maxRowsPerPost, int rowsPerTransaction) {}
 
     /**
@@ -159,6 +165,7 @@ public record Settings(
     public Settings withPortAndData(int port, Path dataFolder) {
         Server moved =
                 new Server(server.host(), port, server.publicUrlSet(), server.maxBodyBytes(), server.secureCookies());
-        return new Settings(dataFolder, moved, database, backups, mail, delivery, ageLimits, intake, dosing, accounts);
+        return new Settings(
+                dataFolder, moved, database, backups, mail, delivery, ageLimits, water, intake, dosing, accounts);
     }
 }

@@ -13,6 +13,8 @@ import org.hingeline.config.Settings.DatabaseKind;
 import org.hingeline.config.Settings.MailMode;
 import org.hingeline.config.Settings.SecureCookies;
 import org.hingeline.config.Settings.StartTls;
+import org.hingeline.seawater.BoronRatio;
+import org.hingeline.seawater.CarbonicAcidFit;
 import org.jspecify.annotations.Nullable;
 
 /** Reads settings strictly: an unknown key, a wrong type or a value out of range is an error, and all are told at once. */
@@ -39,6 +41,7 @@ public final class SettingsReader {
                 mail(root.section("mail")),
                 delivery(root.section("delivery")),
                 ageLimits(root.section("ageLimitsMin")),
+                water(root.section("water")),
                 intake(root.section("intake")),
                 dosing(root.section("dosing")),
                 accounts(root.section("accounts")));
@@ -144,6 +147,14 @@ public final class SettingsReader {
         Duration totalAlkalinity = minutes(in, "totalAlkalinity", 4320);
         in.refuseOthers();
         return new Settings.AgeLimits(ph, temperature, salinity, totalAlkalinity);
+    }
+
+    private static Settings.Water water(Section in) {
+        CarbonicAcidFit constants =
+                in.named("constants", CarbonicAcidFit.LUEKER_2000, CarbonicAcidFit.values(), CarbonicAcidFit::wireName);
+        BoronRatio boron = in.named("boron", BoronRatio.LEE_2010, BoronRatio.values(), BoronRatio::wireName);
+        in.refuseOthers();
+        return new Settings.Water(constants, boron);
     }
 
     private static Settings.Intake intake(Section in) {

@@ -13,9 +13,17 @@ public record AgeLimits(Map<Quantity, Duration> longest) {
     public static final List<Quantity> NEEDED =
             List.of(Quantity.PH, Quantity.TEMPERATURE, Quantity.SALINITY, Quantity.TOTAL_ALKALINITY);
 
-    /** Whatever a reading of can change a water state: salinity may come from conductivity. */
+    /**
+     * Whatever a reading of can change a water state: salinity may come from conductivity, and a measured calcium takes
+     * the place of the one that salinity tells.
+     */
     public static final List<Quantity> ENTERING = List.of(
-            Quantity.PH, Quantity.TEMPERATURE, Quantity.SALINITY, Quantity.TOTAL_ALKALINITY, Quantity.CONDUCTIVITY);
+            Quantity.PH,
+            Quantity.TEMPERATURE,
+            Quantity.SALINITY,
+            Quantity.TOTAL_ALKALINITY,
+            Quantity.CONDUCTIVITY,
+            Quantity.CALCIUM);
 
     public AgeLimits {
         longest = Map.copyOf(longest);
@@ -27,10 +35,16 @@ public record AgeLimits(Map<Quantity, Duration> longest) {
         }
     }
 
-    /** The limit of a quantity; that of conductivity is that of the salinity it gives. */
+    /**
+     * The limit of a quantity; that of conductivity is that of the salinity it gives, and calcium, titrated by hand, has
+     * that of the alkalinity.
+     */
     public Duration of(Quantity quantity) {
         if (quantity == Quantity.CONDUCTIVITY) {
             return of(Quantity.SALINITY);
+        }
+        if (quantity == Quantity.CALCIUM) {
+            return of(Quantity.TOTAL_ALKALINITY);
         }
         return Objects.requireNonNull(longest.get(quantity), () -> quantity.code() + " has no age limit");
     }

@@ -34,11 +34,11 @@ public final class DoseWaters {
     }
 
     private final Storage storage;
-    private final AgeLimits ageLimits;
+    private final WaterRules rules;
 
-    public DoseWaters(Storage storage, AgeLimits ageLimits) {
+    public DoseWaters(Storage storage, WaterRules rules) {
         this.storage = storage;
-        this.ageLimits = ageLimits;
+        this.rules = rules;
     }
 
     Water of(PointStatus status) {
@@ -66,7 +66,7 @@ public final class DoseWaters {
                 .stream()
                 .collect(Collectors.toMap(Sensor::code, Function.identity()));
         WaterAssessor.Inputs inputs = WaterAssessor.Inputs.of(state, sensors);
-        return new Water(inputs.solve(), inputs.uncertainty(), notes);
+        return new Water(inputs.solve(rules), inputs.uncertainty(), notes);
     }
 
     private static InputNote note(MissingInput missing, Instant now) {
@@ -84,12 +84,12 @@ public final class DoseWaters {
     private void addNote(InputUsed input, Instant now, List<InputNote> notes) {
         Quantity quantity = input.quantity();
         Duration age = Duration.between(input.at(), now);
-        if (age.compareTo(ageLimits.of(quantity)) > 0) {
+        if (age.compareTo(rules.ageLimits().of(quantity)) > 0) {
             notes.add(new InputNote(
                     quantity.code(),
                     Problem.STALE,
-                    quantity.words() + " is " + minutes(age) + " old; at most " + minutes(ageLimits.of(quantity))
-                            + " is allowed"));
+                    quantity.words() + " is " + minutes(age) + " old; at most "
+                            + minutes(rules.ageLimits().of(quantity)) + " is allowed"));
         }
         if (input.flag() == Flag.SUSPECT) {
             notes.add(new InputNote(

@@ -13,11 +13,11 @@ public final class Housekeeping {
     private final AlertWatch watch;
     private final WaterLedger ledger;
 
-    public Housekeeping(Storage storage, InstantSource clock, AlertWatch watch, AgeLimits ageLimits) {
+    public Housekeeping(Storage storage, InstantSource clock, AlertWatch watch, WaterRules water) {
         this.storage = storage;
         this.clock = clock;
         this.watch = watch;
-        this.ledger = new WaterLedger(ageLimits);
+        this.ledger = new WaterLedger(water);
     }
 
     /** Lets time pass over every limit. */

@@ -59,12 +59,12 @@ public final class ReadingIntake {
     private final Signals signals;
 
     public ReadingIntake(
-            Storage storage, InstantSource clock, Rules rules, AgeLimits ageLimits, AlertWatch watch, Signals signals) {
+            Storage storage, InstantSource clock, Rules rules, WaterRules water, AlertWatch watch, Signals signals) {
         this.storage = storage;
         this.clock = clock;
         this.rules = rules;
-        this.ledger = new WaterLedger(ageLimits);
-        this.litres = new LitreReadings(ageLimits);
+        this.ledger = new WaterLedger(water);
+        this.litres = new LitreReadings(water.ageLimits());
         this.watch = watch;
         this.signals = signals;
     }

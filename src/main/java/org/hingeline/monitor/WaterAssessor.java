@@ -6,6 +6,7 @@ import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.hingeline.hatchery.Sensor;
 import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.WaterState.InputUsed;
@@ -16,7 +17,6 @@ import org.hingeline.seawater.CarbonateResult.Solved;
 import org.hingeline.seawater.CarbonateResult.Unsolvable;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.CarbonateSystem;
-import org.hingeline.seawater.Conditions;
 import org.hingeline.seawater.ConductivitySalinity;
 import org.hingeline.seawater.Figure;
 import org.hingeline.seawater.InputUncertainty;
@@ -24,15 +24,16 @@ import org.hingeline.seawater.KnownPair;
 import org.hingeline.seawater.PhScale;
 import org.hingeline.seawater.StateUncertainty;
 import org.hingeline.seawater.Uncertainty;
+import org.jspecify.annotations.Nullable;
 
 /** From the freshest inputs at a moment to the water state, with the account of what was used and what was missing. */
 final class WaterAssessor {
-    private final AgeLimits ageLimits;
+    private final WaterRules rules;
     private final InputChoice choice;
 
-    WaterAssessor(AgeLimits ageLimits) {
-        this.ageLimits = ageLimits;
-        this.choice = new InputChoice(ageLimits);
+    WaterAssessor(WaterRules rules) {
+        this.rules = rules;
+        this.choice = new InputChoice(rules.ageLimits());
     }
 
     WaterState assess(long pointId, Instant at, PointInputs inputs) {
@@ -49,11 +50,19 @@ final class WaterAssessor {
                 used.add(input);
                 sensors.put(sensor.code(), sensor);
             } else {
-                missing.add(new MissingInput(quantity, picked.newestAt(), ageLimits.of(quantity)));
+                missing.add(new MissingInput(
+                        quantity, picked.newestAt(), rules.ageLimits().of(quantity)));
             }
         }
         if (!missing.isEmpty()) {
             return new WaterState(pointId, at, used, missing, null, notes);
+        }
+        InputChoice.Picked calcium = choice.pick(Quantity.CALCIUM, at, inputs);
+        InputUsed measured = calcium.used();
+        Sensor calciumSensor = calcium.sensor();
+        if (measured != null && calciumSensor != null) {
+            used.add(measured);
+            sensors.put(calciumSensor.code(), calciumSensor);
         }
         return compute(new WaterState(pointId, at, used, List.of(), null, notes), sensors);
     }
@@ -63,14 +72,14 @@ final class WaterAssessor {
         return allowedAge.multipliedBy(2);
     }
 
-    private static WaterState compute(WaterState bare, Map<String, Sensor> sensors) {
+    private WaterState compute(WaterState bare, Map<String, Sensor> sensors) {
         Inputs inputs = Inputs.of(bare, sensors);
         List<Note> cautions = new ArrayList<>(bare.cautions());
         if (bare.suspect()) {
             cautions.add(
                     new Note("suspect-input", "an input is marked suspect, and so is everything computed from it"));
         }
-        CarbonateResult result = inputs.solve();
+        CarbonateResult result = inputs.solve(rules);
         if (result instanceof Unsolvable refusal) {
             cautions.add(new Note(refusal.reason().code(), refusal.detail()));
             return new WaterState(bare.pointId(), bare.at(), bare.inputs(), List.of(), null, cautions);
@@ -89,6 +98,7 @@ final class WaterAssessor {
             double temperatureC,
             double salinity,
             double totalAlkalinityUmolKg,
+            @Nullable Double calciumMmolKg,
             InputUncertainty uncertainty) {
 
         /** @throws IllegalStateException when the state lacks an input */
@@ -101,20 +111,21 @@ final class WaterAssessor {
             if (scale == null) {
                 throw new IllegalStateException("pH sensor " + ph.sensor() + " has no scale");
             }
-            double registered = sensor(ph, sensors).standardUncertainty();
+            Optional<InputUsed> calcium = found(state, Quantity.CALCIUM);
             return new Inputs(
                     ph.value(),
                     scale,
                     temperature.value(),
                     salinity.value(),
                     alkalinity.value(),
+                    calcium.map(InputUsed::value).orElse(null),
                     InputUncertainty.ofPhAndAlkalinity(
-                            scale == PhScale.NBS
-                                    ? Math.max(registered, InputUncertainty.PH_ON_NBS_BUFFERS)
-                                    : registered,
-                            sensor(alkalinity, sensors).standardUncertainty() * 1e-6,
-                            sensor(temperature, sensors).standardUncertainty(),
-                            salinityUncertainty(salinity, temperature, sensors)));
+                                    sensor(ph, sensors).standardUncertainty(),
+                                    sensor(alkalinity, sensors).standardUncertainty() * 1e-6,
+                                    sensor(temperature, sensors).standardUncertainty(),
+                                    salinityUncertainty(salinity, temperature, sensors))
+                            .withCalcium(calcium.map(c -> sensor(c, sensors).standardUncertainty() * 1e-3)
+                                    .orElse(0.0)));
         }
 
         /**
@@ -140,17 +151,21 @@ final class WaterAssessor {
             return InputUncertainty.DEFAULTS.salinity();
         }
 
-        CarbonateResult solve() {
+        CarbonateResult solve(WaterRules rules) {
             return CarbonateSystem.solve(
-                    Conditions.of(temperatureC, salinity),
+                    rules.conditions(temperatureC, salinity, calciumMmolKg),
                     new KnownPair.PhAndAlkalinity(ph, scale, totalAlkalinityUmolKg * 1e-6));
         }
 
         private static InputUsed input(WaterState state, Quantity quantity) {
+            return found(state, quantity)
+                    .orElseThrow(() -> new IllegalStateException(quantity.code() + " is not among the inputs"));
+        }
+
+        private static Optional<InputUsed> found(WaterState state, Quantity quantity) {
             return state.inputs().stream()
                     .filter(input -> input.quantity() == quantity)
-                    .findFirst()
-                    .orElseThrow(() -> new IllegalStateException(quantity.code() + " is not among the inputs"));
+                    .findFirst();
         }
 
         private static Sensor sensor(InputUsed input, Map<String, Sensor> sensors) {

@@ -26,9 +26,9 @@ final class WaterLedger {
     private final WaterAssessor assessor;
     private final InputLoader loader;
 
-    WaterLedger(AgeLimits ageLimits) {
-        this.ageLimits = ageLimits;
-        this.assessor = new WaterAssessor(ageLimits);
+    WaterLedger(WaterRules rules) {
+        this.ageLimits = rules.ageLimits();
+        this.assessor = new WaterAssessor(rules);
         this.loader = new InputLoader(ageLimits);
     }
 

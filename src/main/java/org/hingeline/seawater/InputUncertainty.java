@@ -48,6 +48,11 @@ public record InputUncertainty(
                 ph, totalAlkalinity, DEFAULTS.dic, DEFAULTS.pco2Atm, temperatureC, salinity, DEFAULTS.calcium);
     }
 
+    /** The same with that of a measured calcium, mol/kg-seawater. */
+    public InputUncertainty withCalcium(double newCalcium) {
+        return new InputUncertainty(ph, totalAlkalinity, dic, pco2Atm, temperatureC, salinity, newCalcium);
+    }
+
     /** For waters solved from alkalinity and inorganic carbon. */
     public static InputUncertainty ofAlkalinityAndDic(
             double totalAlkalinity, double dic, double temperatureC, double salinity) {

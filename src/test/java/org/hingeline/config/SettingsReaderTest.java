@@ -44,7 +44,7 @@ class SettingsReaderTest {
         JsonNode shipped = YAMLMapper.builder().build().readTree(Files.readString(SHIPPED));
         List<String> sections = new ArrayList<>(shipped.propertyNames());
         sections.remove("dataFolder");
-        assertThat(sections).hasSize(9);
+        assertThat(sections).hasSize(10);
         for (String section : sections) {
             String known = String.join(", ", shipped.get(section).propertyNames());
             assertThat(problems(section + ":\n  stray: 1"))
@@ -157,13 +157,14 @@ class SettingsReaderTest {
                 "ageLimitsMin: {dic: 5}|ageLimitsMin.dic: no such setting; known here: ph, temperature, salinity, totalAlkalinity",
                 "intake: {futureToleranceSeconds: -1}|intake.futureToleranceSeconds: -1 is not accepted; give a whole number from 0 to 3600",
                 "intake: {rowsPerTransaction: 9999}|intake.rowsPerTransaction: 9999 is not accepted; give a whole number from 1 to 5000",
+                "water: {constants: best}|water.constants: \"best\" is not accepted; give lueker2000 or millero2006 or waters2014",
                 "dosing: {phTotalMax: 9.5}|dosing.phTotalMax: 9.5 is not accepted; give a number from 7.5 to 9",
                 "dosing: {phTotalMax: .nan}|dosing.phTotalMax: \"NaN\" is not accepted; give a number from 7.5 to 9",
                 "dosing: {phPerHourMax: 0}|dosing.phPerHourMax: 0 is not accepted; give a number from 0.01 to 1",
                 "accounts: {minPasswordLength: 4}|accounts.minPasswordLength: 4 is not accepted; give a whole number from 8 to 100",
                 "accounts: {lockAfterFailures: 1}|accounts.lockAfterFailures: 1 is not accepted; give a whole number from 2 to 100",
                 "dataFolder: 7|dataFolder: 7 is not accepted; give a text of 1 to 500 characters on one line",
-                "sever: {port: 1}|sever: no such setting; known here: dataFolder, server, database, backups, mail, delivery, ageLimitsMin, intake, dosing, accounts",
+                "sever: {port: 1}|sever: no such setting; known here: dataFolder, server, database, backups, mail, delivery, ageLimitsMin, water, intake, dosing, accounts",
                 "just words|the file: \"just words\" is not accepted; give settings, one \"key: value\" a line",
             })
     void a_bad_value_is_named_with_what_would_be_accepted(String yaml, String problem) {

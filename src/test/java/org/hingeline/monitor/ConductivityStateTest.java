@@ -211,7 +211,7 @@ class ConductivityStateTest {
     void a_dose_is_planned_from_it_with_its_uncertainty() {
         hatchery.clock.set(T0);
         readAllWithConductivity(T0);
-        DoseWaters.Water water = new DoseWaters(hatchery.database, Hatchery.AGE_LIMITS)
+        DoseWaters.Water water = new DoseWaters(hatchery.database, Hatchery.WATER)
                 .of(hatchery.board.point(hatchery.site, "tank").orElseThrow());
 
         assertThat(water.result().orElseThrow().conditions().salinity()).isCloseTo(30, within(1e-9));

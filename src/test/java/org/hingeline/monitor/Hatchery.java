@@ -46,6 +46,7 @@ final class Hatchery {
             Duration.ofHours(6),
             Quantity.TOTAL_ALKALINITY,
             Duration.ofDays(3)));
+    static final WaterRules WATER = WaterRules.of(AGE_LIMITS);
     static final int ROWS_PER_TRANSACTION = 1000;
 
     final SettableClock clock = new SettableClock(T0);
@@ -84,13 +85,17 @@ final class Hatchery {
 
     /** The service starts again, over another storage or with other rules. */
     void start(Storage over, int rowsPerTransaction) {
+        start(over, rowsPerTransaction, WATER);
+    }
+
+    void start(Storage over, int rowsPerTransaction, WaterRules water) {
         Signals silent = siteId -> {};
         alerts = new AlertDesk(over, clock, new MessageDesk("https://cove.example.org", "0123456789ab"), silent);
         AlertWatch watch = new AlertWatch(alerts);
         limits = new LimitDesk(over, clock, silent);
         place = new PlaceDesk(over, clock, limits, silent);
         board = new StatusBoard(over, clock);
-        doses = new DoseDesk(board, new DoseWaters(over, AGE_LIMITS), new DoseDesk.Defaults(8.4, 4.5, 0.15, 420, 50));
+        doses = new DoseDesk(board, new DoseWaters(over, water), new DoseDesk.Defaults(8.4, 4.5, 0.15, 420, 50));
         SecureRandom random = new SecureRandom();
         accounts = new Accounts(
                 over,
@@ -99,13 +104,8 @@ final class Hatchery {
                 new Secrets(random),
                 new Passwords(random));
         intake = new ReadingIntake(
-                over,
-                clock,
-                new ReadingIntake.Rules(Duration.ofMinutes(2), rowsPerTransaction),
-                AGE_LIMITS,
-                watch,
-                silent);
-        housekeeping = new Housekeeping(over, clock, watch, AGE_LIMITS);
+                over, clock, new ReadingIntake.Rules(Duration.ofMinutes(2), rowsPerTransaction), water, watch, silent);
+        housekeeping = new Housekeeping(over, clock, watch, water);
     }
 
     /** A second site, with nothing in it. */
@@ -177,6 +177,7 @@ final class Hatchery {
             case "s" -> "salinity";
             case "ta" -> "totalAlkalinity";
             case "c" -> "conductivity";
+            case "ca" -> "calcium";
             case "o2" -> "dissolvedOxygen";
             default -> throw new IllegalArgumentException(sensor);
         };
