@@ -62,7 +62,7 @@ public final class SettingsReader {
                     "\"" + publicUrl.replaceAll("//[^/@]*@", "//…@")
                             + "\" is not accepted; give an address such as https://water.example.org");
         }
-        int maxBodyBytes = in.whole("maxBodyBytes", 8 * 1024 * 1024, 1024, 256 * 1024 * 1024);
+        int maxBodyBytes = in.whole("maxBodyBytes", 16 * 1024 * 1024, 1024, 256 * 1024 * 1024);
         SecureCookies secureCookies = in.choice("secureCookies", SecureCookies.AUTO);
         in.refuseOthers();
         return new Settings.Server(

@@ -1,7 +1,6 @@
 package org.hingeline.monitor;
 
 import java.time.Duration;
-import java.util.List;
 import java.util.Optional;
 import org.hingeline.dosing.Agent;
 import org.hingeline.dosing.Bounds;
@@ -13,12 +12,7 @@ import org.hingeline.dosing.Target;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Site;
 import org.hingeline.measure.Quantity;
-import org.hingeline.seawater.CarbonateSystem;
 import org.hingeline.seawater.Caution;
-import org.hingeline.seawater.Conditions;
-import org.hingeline.seawater.InputUncertainty;
-import org.hingeline.seawater.KnownPair;
-import org.hingeline.seawater.PhScale;
 import org.jspecify.annotations.Nullable;
 
 /** Suggests doses. Stores nothing and does nothing: a person confirms, a person doses. */
@@ -39,6 +33,7 @@ public final class DoseDesk {
     private final StatusBoard board;
     private final DoseWaters waters;
     private final Defaults defaults;
+    private final WaterCalculator calculator = new WaterCalculator();
 
     public DoseDesk(StatusBoard board, DoseWaters waters, Defaults defaults) {
         this.board = board;
@@ -89,7 +84,7 @@ public final class DoseDesk {
         }
         DoseWaters.Water water = status.isPresent()
                 ? waters.of(status.get())
-                : wish.water() != null ? given(wish.water(), faults) : null;
+                : wish.water() != null ? calculator.toDose(wish.water(), "water", faults) : null;
         faults.throwIfAny();
         if (water == null || target == null || agent == null || form == null || bounds == null || volumeL == null) {
             throw new IllegalStateException("a fault was not told");
@@ -106,11 +101,13 @@ public final class DoseDesk {
                 bounds,
                 stock,
                 air * 1e-6));
-        return plan.outcome() == DosePlan.Outcome.PLAN
-                ? status.flatMap(DoseDesk::aboutAlkalinity)
-                        .map(plan::withCaution)
-                        .orElse(plan)
-                : plan;
+        if (plan.outcome() != DosePlan.Outcome.PLAN) {
+            return plan;
+        }
+        for (Caution caution : water.cautions()) {
+            plan = plan.withCaution(caution);
+        }
+        return status.flatMap(DoseDesk::aboutAlkalinity).map(plan::withCaution).orElse(plan);
     }
 
     /** The plan stands on an alkalinity that a dose or an exchange of water since then has changed. */
@@ -217,59 +214,5 @@ public final class DoseDesk {
             faults.add("bounds/" + detail.split(" ", 2)[0], detail);
             return null;
         }
-    }
-
-    private static DoseWaters.@Nullable Water given(DoseWish.Water wish, FieldFaults faults) {
-        Double temperatureC = required("water/temperatureC", wish.temperatureC(), faults);
-        Double salinity = required("water/salinity", wish.salinity(), faults);
-        Double ph = required("water/ph", wish.ph(), faults);
-        Double alkalinity = required("water/totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg(), faults);
-        String scaleName = wish.phScale() == null ? PhScale.TOTAL.wireName() : wish.phScale();
-        Optional<PhScale> scale = PhScale.fromWireName(scaleName);
-        if (scale.isEmpty()) {
-            faults.add("water/phScale", "phScale \"" + scaleName + "\" is not one of total, seawater, free, nbs");
-        }
-        DoseWish.Uncertainty u = wish.uncertainty();
-        InputUncertainty standard = InputUncertainty.DEFAULTS;
-        double phDefault =
-                scale.orElse(PhScale.TOTAL) == PhScale.NBS ? InputUncertainty.PH_ON_NBS_BUFFERS : standard.ph();
-        double uPh = notNegative("water/uncertainty/ph", u == null ? null : u.ph(), phDefault, faults);
-        double uAlkalinity = notNegative(
-                "water/uncertainty/totalAlkalinityUmolKg",
-                u == null ? null : u.totalAlkalinityUmolKg(),
-                standard.totalAlkalinity() * 1e6,
-                faults);
-        double uTemperature = notNegative(
-                "water/uncertainty/temperatureC", u == null ? null : u.temperatureC(), standard.temperatureC(), faults);
-        double uSalinity =
-                notNegative("water/uncertainty/salinity", u == null ? null : u.salinity(), standard.salinity(), faults);
-        if (temperatureC == null || salinity == null || ph == null || alkalinity == null || scale.isEmpty()) {
-            return null;
-        }
-        return new DoseWaters.Water(
-                CarbonateSystem.solve(
-                        Conditions.of(temperatureC, salinity),
-                        new KnownPair.PhAndAlkalinity(ph, scale.get(), alkalinity * 1e-6)),
-                InputUncertainty.ofPhAndAlkalinity(uPh, uAlkalinity * 1e-6, uTemperature, uSalinity),
-                List.of());
-    }
-
-    private static @Nullable Double required(String field, @Nullable Double value, FieldFaults faults) {
-        if (value == null || !Double.isFinite(value)) {
-            faults.add(field, field + (value == null ? " is missing" : " " + value + " must be a finite number"));
-            return null;
-        }
-        return value;
-    }
-
-    private static double notNegative(String field, @Nullable Double value, double otherwise, FieldFaults faults) {
-        if (value == null) {
-            return otherwise;
-        }
-        if (!(value >= 0 && Double.isFinite(value))) {
-            faults.add(field, field + " " + value + " must be a number of at least 0");
-            return otherwise;
-        }
-        return value;
     }
 }

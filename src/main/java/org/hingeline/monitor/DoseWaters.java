@@ -15,6 +15,7 @@ import org.hingeline.monitor.WaterState.InputUsed;
 import org.hingeline.monitor.WaterState.MissingInput;
 import org.hingeline.quality.Flag;
 import org.hingeline.seawater.CarbonateResult;
+import org.hingeline.seawater.Caution;
 import org.hingeline.seawater.InputUncertainty;
 import org.jspecify.annotations.Nullable;
 
@@ -26,10 +27,20 @@ public final class DoseWaters {
      *
      * @param result absent when an input is missing
      * @param notes inputs that are stale, failed, missing or suspect
+     * @param cautions about the inputs, which a plan passes on
      */
-    record Water(@Nullable CarbonateResult result, InputUncertainty uncertainty, List<InputNote> notes) {
+    record Water(
+            @Nullable CarbonateResult result,
+            InputUncertainty uncertainty,
+            List<InputNote> notes,
+            List<Caution> cautions) {
         Water {
             notes = List.copyOf(notes);
+            cautions = List.copyOf(cautions);
+        }
+
+        Water(@Nullable CarbonateResult result, InputUncertainty uncertainty, List<InputNote> notes) {
+            this(result, uncertainty, notes, List.of());
         }
     }
 

@@ -4,6 +4,7 @@ import io.javalin.http.Context;
 import java.util.regex.Pattern;
 import tools.jackson.core.JacksonException;
 import tools.jackson.core.StreamReadFeature;
+import tools.jackson.core.StreamWriteFeature;
 import tools.jackson.core.json.JsonFactory;
 import tools.jackson.databind.DeserializationFeature;
 import tools.jackson.databind.MapperFeature;
@@ -16,6 +17,7 @@ import tools.jackson.databind.type.LogicalType;
 final class Json {
     static final JsonFactory FACTORY = JsonFactory.builder()
             .enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION)
+            .enable(StreamWriteFeature.USE_FAST_DOUBLE_WRITER)
             .build();
 
     static final JsonMapper MAPPER = JsonMapper.builder(FACTORY)
@@ -36,12 +38,7 @@ final class Json {
 
     /** The request's body as a record; a bad one ends the request with 400 and names the field. */
     static <T> T body(Context ctx, Class<T> type) {
-        byte[] bytes = ctx.bodyAsBytes();
-        requireType(ctx);
-        if (bytes.length == 0) {
-            throw new ProblemException(400, "No body", "the request has no body; a JSON object is needed");
-        }
-        requireUtf8(bytes);
+        byte[] bytes = bytes(ctx);
         try {
             T value = MAPPER.readValue(bytes, type);
             if (value == null) {
@@ -51,6 +48,17 @@ final class Json {
         } catch (JacksonException e) {
             throw new ProblemException(JsonFaults.problem(e));
         }
+    }
+
+    /** The request's body, which is not empty and says to be JSON in UTF-8, if anything. */
+    static byte[] bytes(Context ctx) {
+        byte[] bytes = ctx.bodyAsBytes();
+        requireType(ctx);
+        if (bytes.length == 0) {
+            throw new ProblemException(400, "No body", "the request has no body; a JSON object is needed");
+        }
+        requireUtf8(bytes);
+        return bytes;
     }
 
     static void answer(Context ctx, int status, Object body) {

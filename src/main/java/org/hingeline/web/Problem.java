@@ -2,6 +2,7 @@ package org.hingeline.web;
 
 import com.fasterxml.jackson.annotation.JsonInclude;
 import java.util.List;
+import org.hingeline.monitor.FieldFaultsException;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -26,5 +27,17 @@ record Problem(
 
     static Problem ofFields(int status, String title, String detail, List<FieldError> errors) {
         return new Problem("about:blank", title, status, detail, List.copyOf(errors));
+    }
+
+    /** Fields that were read but cannot be taken. */
+    static Problem of(FieldFaultsException e) {
+        return ofFields(
+                422,
+                "Wrong fields",
+                String.valueOf(e.getMessage()),
+                e.faults().stream()
+                        .map(fault ->
+                                new FieldError(fault.field().isEmpty() ? "" : "/" + fault.field(), fault.detail()))
+                        .toList());
     }
 }

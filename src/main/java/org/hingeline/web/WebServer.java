@@ -9,7 +9,6 @@ import io.javalin.http.staticfiles.Location;
 import io.micrometer.core.instrument.Tags;
 import io.micrometer.jetty12.server.TimedHandler;
 import io.micrometer.prometheusmetrics.PrometheusMeterRegistry;
-import java.util.List;
 import java.util.Locale;
 import java.util.Set;
 import java.util.TreeSet;
@@ -17,7 +16,7 @@ import java.util.stream.Collectors;
 import org.eclipse.jetty.util.thread.QueuedThreadPool;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.Secrets;
-import org.hingeline.web.Problem.FieldError;
+import org.hingeline.monitor.WaterCalculator;
 import org.hingeline.web.view.ErrorView;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
@@ -54,11 +53,13 @@ public final class WebServer implements AutoCloseable {
             routes.before(WebServer::harden);
             routes.before(WebServer::refuseUploads);
             routes.beforeMatched(new Gatekeeper(services.accounts())::check);
-            new ReadingRoutes(services.intake(), new Meters(registry), rules.maxRowsPerPost()).addTo(routes);
+            Meters meters = new Meters(registry);
+            new ReadingRoutes(services.intake(), meters, rules.maxRowsPerPost()).addTo(routes);
             new PointRoutes(services.board(), services.clock()).addTo(routes);
             new LimitRoutes(services.board(), services.limits()).addTo(routes);
             new AlertRoutes(services.board(), services.alerts()).addTo(routes);
             new DoseRoutes(services.doses()).addTo(routes);
+            new SeawaterRoutes(new WaterCalculator(), meters).addTo(routes);
             new OperationRoutes(services.checks(), registry).addTo(routes);
             new SignInPages(services.accounts(), pages, secrets, rules.cookiesOverTlsOnly()).addTo(routes);
             new StatusPages(services.board(), pages).addTo(routes);
@@ -124,7 +125,7 @@ public final class WebServer implements AutoCloseable {
 
     private static void failures(RoutesConfig routes, PageMaker pages) {
         routes.exception(ProblemException.class, (e, ctx) -> tell(ctx, e.problem(), pages));
-        routes.exception(FieldFaultsException.class, (e, ctx) -> tell(ctx, ofFields(e), pages));
+        routes.exception(FieldFaultsException.class, (e, ctx) -> tell(ctx, Problem.of(e), pages));
         routes.exception(JacksonException.class, (e, ctx) -> tell(ctx, JsonFaults.problem(e), pages));
         routes.exception(
                 HttpResponseException.class,
@@ -143,13 +144,6 @@ public final class WebServer implements AutoCloseable {
                 tell(ctx, Problem.of(404, "No such address", "there is nothing at " + ctx.path()), pages);
             }
         });
-    }
-
-    private static Problem ofFields(FieldFaultsException e) {
-        List<FieldError> errors = e.faults().stream()
-                .map(fault -> new FieldError(fault.field().isEmpty() ? "" : "/" + fault.field(), fault.detail()))
-                .toList();
-        return Problem.ofFields(422, "Wrong fields", String.valueOf(e.getMessage()), errors);
     }
 
     private static String title(int status) {

@@ -97,7 +97,12 @@ class DoseDeskTest {
 
     @Test
     void a_request_names_a_point_or_a_water_and_not_both_or_neither() {
-        DoseWish.Water given = new DoseWish.Water(22.0, 30.0, 7.9, null, 2078.0, null);
+        WaterWish given = WaterWish.builder()
+                .temperatureC(22.0)
+                .salinity(30.0)
+                .ph(7.9)
+                .totalAlkalinityUmolKg(2078.0)
+                .build();
 
         assertThatThrownBy(() -> hatchery.doses.plan(hatchery.site, wish(null))).hasMessageContaining("neither");
         assertThatThrownBy(() -> hatchery.doses.plan(
@@ -125,8 +130,14 @@ class DoseDeskTest {
 
     @Test
     void what_is_given_of_a_water_must_be_numbers_on_a_known_scale() {
-        DoseWish.Water given = new DoseWish.Water(
-                Double.NaN, null, 7.9, "sws", 2078.0, new DoseWish.Uncertainty(-0.1, null, null, null));
+        WaterWish given = WaterWish.builder()
+                .temperatureC(Double.NaN)
+                .ph(7.9)
+                .phScale("sws")
+                .totalAlkalinityUmolKg(2078.0)
+                .uncertainty(new WaterWish.Uncertainty(-0.1, null, null, null, null, null, null, null))
+                .warmToC(25.0)
+                .build();
 
         assertThatThrownBy(() -> hatchery.doses.plan(
                         hatchery.site, new DoseWish(null, given, 4000.0, TARGET, ANHYDROUS, null, null, null)))
@@ -134,11 +145,12 @@ class DoseDeskTest {
                         FieldFaultsException.class,
                         e -> assertThat(e.faults())
                                 .extracting(FieldFaults.Fault::field)
-                                .containsExactly(
+                                .containsExactlyInAnyOrder(
                                         "water/temperatureC",
                                         "water/salinity",
                                         "water/phScale",
-                                        "water/uncertainty/ph"));
+                                        "water/uncertainty/ph",
+                                        "water/warmToC"));
     }
 
     private void refused(String... said) {

@@ -64,6 +64,8 @@ final class ResultSize {
 
     private static double average(Object[] first, Object[] second, List<Object> results) {
         long bytes = 0;
+        // objects are told apart by where they lie: nothing must move them meanwhile
+        System.gc();
         for (int i = 1; i <= WATERS; i++) {
             GraphLayout shared = GraphLayout.parseInstance(first[i], second[i], results.get(i - 1));
             bytes += GraphLayout.parseInstance(results.get(i)).subtract(shared).totalSize();

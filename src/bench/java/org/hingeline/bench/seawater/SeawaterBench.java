@@ -2,6 +2,7 @@ package org.hingeline.bench.seawater;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.List;
 import java.util.Locale;
 import java.util.concurrent.TimeUnit;
@@ -62,11 +63,12 @@ public final class SeawaterBench {
 
     private static void print(List<Line> lines) {
         System.out.println();
-        System.out.println(
-                "Time as a ratio to the constants alone of the same round; bytes allocated beside the size of"
-                        + " what is handed back.");
+        System.out.println("Time as a ratio to the constants alone of the same round: median, least and most of the"
+                + " rounds; and quickest of all rounds over quickest, which a busy machine disturbs least.");
+        System.out.println("ns: median of the rounds. B/op: allocated; B kept: size of what is handed back.");
         System.out.printf(
-                "%-56s %7s %7s %7s %5s %9s %8s %8s%n", "", "median", "least", "most", "aim", "ns", "B/op", "B kept");
+                "%-62s %7s %7s %7s %9s %5s %8s %8s %8s%n",
+                "", "median", "least", "most", "quickest", "aim", "ns", "B/op", "B kept");
         for (Line line : lines) {
             System.out.println(line.row());
         }
@@ -175,11 +177,12 @@ public final class SeawaterBench {
                     nanos.stream().mapToDouble(Double::doubleValue).sorted().toArray();
             return String.format(
                     Locale.ROOT,
-                    "%-56s %7.2f %7.2f %7.2f %5s %9.0f %8.0f %8.0f",
+                    "%-62s %7.2f %7.2f %7.2f %9.2f %5s %8.0f %8.0f %8.0f",
                     title,
                     median(ratios),
                     ratios[0],
                     ratios[ratios.length - 1],
+                    sortedNanos[0] / Collections.min(baseline.nanos),
                     Double.isNaN(aim) ? "" : String.valueOf(aim),
                     median(sortedNanos),
                     bytes,
