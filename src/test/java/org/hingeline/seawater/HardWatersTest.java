@@ -53,6 +53,19 @@ class HardWatersTest {
         }
     }
 
+    @Test
+    void inputs_that_would_need_more_carbon_than_any_water_holds_are_refused() {
+        for (KnownPair absurd : new KnownPair[] {
+            new KnownPair.PhAndPco2(12.9, 911e-6), new KnownPair.PhAndAlkalinity(2.3, 0.038),
+        }) {
+            assertThat(CarbonateSystem.solve(Conditions.of(15, 30), absurd))
+                    .as(absurd.toString())
+                    .isInstanceOfSatisfying(
+                            CarbonateResult.Unsolvable.class,
+                            refusal -> assertThat(refusal.reason()).isEqualTo(UnsolvableReason.TOO_MUCH_CARBON));
+        }
+    }
+
     private static double cube(Random random) {
         double x = random.nextDouble();
         return x * x * x;
