@@ -20,7 +20,6 @@ import org.hingeline.seawater.StateUncertainty;
 import org.hingeline.web.view.CalculatorFields;
 import org.hingeline.web.view.CalculatorView.Line;
 import org.hingeline.web.view.CalculatorView.Method;
-import org.hingeline.web.view.CalculatorView.Share;
 import org.hingeline.web.view.CalculatorView.Worked;
 import org.hingeline.web.view.OmegaPicture;
 import org.hingeline.web.view.OmegaPicture.Reading;
@@ -142,7 +141,10 @@ final class CalculatorResult {
                 lines(),
                 scales(),
                 ammonia(),
-                PARTS.stream().map(this::share).toList(),
+                CalculatorShares.ofOmega(water),
+                PARTS.stream()
+                        .map(part -> CalculatorShares.of(part, uncertainty))
+                        .toList(),
                 CalculatorBecomes.of(form, water, uncertainty),
                 picture(),
                 methods(),
@@ -250,16 +252,6 @@ final class CalculatorResult {
                                 "",
                                 "",
                                 ""));
-    }
-
-    private Share share(Part part) {
-        StandardUncertainty u = part.uncertainty().apply(uncertainty);
-        double scale = part.scale();
-        return new Share(
-                part.unit().isEmpty() ? part.name() : part.name() + ", " + part.unit(),
-                Rounded.small(u.total() * scale),
-                Rounded.small(u.fromConstants() * scale),
-                Rounded.small(u.fromInputs() * scale));
     }
 
     private OmegaPicture picture() {

@@ -75,6 +75,8 @@ class CalculatorPageTest {
         assertThat(words)
                 .contains("NBS scale 8.2")
                 .contains("cancels when two readings are compared")
+                .containsPattern(
+                        "of Ω aragonite: equilibrium constants ±0\\.\\d+, pH ±0\\.\\d+, alkalinity ±0\\.\\d+, temperature")
                 .contains("Lueker, Dickson")
                 .contains("Mucci 1983");
     }

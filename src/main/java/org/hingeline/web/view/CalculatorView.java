@@ -75,6 +75,7 @@ public record CalculatorView(
      * @param state the whole state
      * @param scales the pH on every scale
      * @param ammonia un-ionised ammonia; empty when not asked for
+     * @param origins what the ± of Ω comes from, the largest first: "pH ±0.06"
      * @param shares where the ± of each quantity comes from
      * @param becomes what the water would become; null when not asked for
      * @param picture Ω against the two inputs
@@ -91,6 +92,7 @@ public record CalculatorView(
             List<Line> state,
             List<Line> scales,
             List<Line> ammonia,
+            List<String> origins,
             List<Share> shares,
             @Nullable Becomes becomes,
             OmegaPicture picture,
@@ -101,6 +103,7 @@ public record CalculatorView(
             state = List.copyOf(state);
             scales = List.copyOf(scales);
             ammonia = List.copyOf(ammonia);
+            origins = List.copyOf(origins);
             shares = List.copyOf(shares);
             methods = List.copyOf(methods);
         }
