@@ -6,8 +6,8 @@ import java.util.Objects;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.Caution;
 import org.hingeline.seawater.InputUncertainty;
-import org.hingeline.seawater.Origin;
 import org.hingeline.seawater.StateUncertainty;
+import org.hingeline.seawater.UncertaintySource;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -15,7 +15,7 @@ import org.jspecify.annotations.Nullable;
  *
  * @param state the water
  * @param uncertainty of its quantities; null when none was asked for
- * @param omegaAragoniteByOrigin the uncertainty of Ω of aragonite that each origin alone would give; empty when none was
+ * @param omegaAragoniteBySource the uncertainty of Ω of aragonite that each origin alone would give; empty when none was
  *     asked for
  * @param inputs the standard uncertainties counted with, the usual ones where the wish named none
  * @param warmed the water at another temperature; null when not asked for
@@ -28,7 +28,7 @@ import org.jspecify.annotations.Nullable;
 public record CalculatedWater(
         CarbonateState state,
         @Nullable StateUncertainty uncertainty,
-        Map<Origin, Double> omegaAragoniteByOrigin,
+        Map<UncertaintySource, Double> omegaAragoniteBySource,
         InputUncertainty inputs,
         @Nullable Treated warmed,
         @Nullable Treated equilibrated,
@@ -38,7 +38,7 @@ public record CalculatedWater(
         WaterMethod method) {
     public CalculatedWater {
         Objects.requireNonNull(state, "state");
-        omegaAragoniteByOrigin = Map.copyOf(omegaAragoniteByOrigin);
+        omegaAragoniteBySource = Map.copyOf(omegaAragoniteBySource);
         Objects.requireNonNull(inputs, "inputs");
         cautions = List.copyOf(cautions);
         Objects.requireNonNull(method, "method");

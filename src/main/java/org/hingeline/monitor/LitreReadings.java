@@ -19,7 +19,8 @@ import org.hingeline.seawater.VolumeAmount;
 
 /**
  * Turns values per litre into values per kilogram with the density of the water they were taken from: that of the point's
- * freshest temperature and salinity at the time of the reading, those of the same batch included.
+ * freshest temperature and salinity at the time of the reading, those of the same batch included. A sample whose volume
+ * was taken in a laboratory 10 °C warmer comes out about 0.2 % too low.
  */
 final class LitreReadings {
     private static final double LITRES_PER_M3 = 1000;

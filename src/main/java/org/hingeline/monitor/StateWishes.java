@@ -72,7 +72,7 @@ public final class StateWishes {
                     null,
                     null,
                     u.temperatureC(),
-                    u.salinity(),
+                    u.salinityInAll(),
                     null,
                     input(state, Quantity.CALCIUM).isPresent() ? (Double) (u.calcium() * 1e3) : null);
         }

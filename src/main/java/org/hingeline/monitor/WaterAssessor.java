@@ -112,6 +112,15 @@ final class WaterAssessor {
                 throw new IllegalStateException("pH sensor " + ph.sensor() + " has no scale");
             }
             Optional<InputUsed> calcium = found(state, Quantity.CALCIUM);
+            double ofSalinity = sensor(salinity, sensors).standardUncertainty();
+            boolean read = !salinity.origin().equals(InputUsed.FROM_CONDUCTIVITY);
+            InputUncertainty uncertainty = InputUncertainty.ofPhAndAlkalinity(
+                            sensor(ph, sensors).standardUncertainty(),
+                            sensor(alkalinity, sensors).standardUncertainty() * 1e-6,
+                            sensor(temperature, sensors).standardUncertainty(),
+                            read ? ofSalinity : InputUncertainty.DEFAULTS.salinity())
+                    .withCalcium(calcium.map(c -> sensor(c, sensors).standardUncertainty() * 1e-3)
+                            .orElse(0.0));
             return new Inputs(
                     ph.value(),
                     scale,
@@ -119,36 +128,22 @@ final class WaterAssessor {
                     salinity.value(),
                     alkalinity.value(),
                     calcium.map(InputUsed::value).orElse(null),
-                    InputUncertainty.ofPhAndAlkalinity(
-                                    sensor(ph, sensors).standardUncertainty(),
-                                    sensor(alkalinity, sensors).standardUncertainty() * 1e-6,
-                                    sensor(temperature, sensors).standardUncertainty(),
-                                    salinityUncertainty(salinity, temperature, sensors))
-                            .withCalcium(calcium.map(c -> sensor(c, sensors).standardUncertainty() * 1e-3)
-                                    .orElse(0.0)));
+                    read
+                            ? uncertainty
+                            : withConductivity(uncertainty, salinity.value(), temperature.value(), ofSalinity));
         }
 
         /**
-         * Of a salinity from conductivity, what the uncertainties of conductivity and temperature make of it. Taken at
-         * the temperature of the state: between that and the temperature of the conductivity the sensitivities hardly
-         * differ.
+         * A salinity from conductivity moves with the thermometer too. The slopes are taken at the temperature of the
+         * state: between that and the temperature of the conductivity they hardly differ.
          */
-        private static double salinityUncertainty(
-                InputUsed salinity, InputUsed temperature, Map<String, Sensor> sensors) {
-            double registered = sensor(salinity, sensors).standardUncertainty();
-            if (!salinity.origin().equals(InputUsed.FROM_CONDUCTIVITY)) {
-                return registered;
-            }
-            if (ConductivitySalinity.conductivity(salinity.value(), temperature.value()) instanceof Figure.Known known
-                    && ConductivitySalinity.uncertainty(
-                                    known.value(),
-                                    temperature.value(),
-                                    registered,
-                                    sensor(temperature, sensors).standardUncertainty())
-                            instanceof Figure.Known uncertainty) {
-                return uncertainty.value();
-            }
-            return InputUncertainty.DEFAULTS.salinity();
+        private static InputUncertainty withConductivity(
+                InputUncertainty u, double salinity, double temperatureC, double ofConductivity) {
+            return ConductivitySalinity.conductivity(salinity, temperatureC) instanceof Figure.Known conductivity
+                            && ConductivitySalinity.salinity(conductivity.value(), temperatureC) instanceof Figure.Known
+                    ? u.withSalinityFrom(
+                            ofConductivity, ConductivitySalinity.slopes(conductivity.value(), temperatureC))
+                    : u;
         }
 
         CarbonateResult solve(WaterRules rules) {

@@ -66,7 +66,7 @@ public final class WaterCalculator {
         return new CalculatedWater(
                 state,
                 uncertainty == null ? null : uncertainty.ofState(),
-                uncertainty == null ? Map.of() : uncertainty.ofOmegaAragoniteByOrigin(),
+                uncertainty == null ? Map.of() : uncertainty.ofOmegaAragoniteBySource(),
                 water.wished().uncertainty(),
                 warmed,
                 equilibrated,

@@ -41,11 +41,16 @@ final class WishReader {
     private static final String PAIR = "ph, totalAlkalinityUmolKg, dicUmolKg, pco2Uatm";
 
     /** A salinity with what is known of it. */
-    private record Salinity(double value, double uncertainty, boolean fromConductivity, List<Caution> cautions) {
-        static final Salinity NONE = given(Double.NaN, 0);
+    private record Salinity(
+            double value, ConductivitySalinity.@Nullable Slopes ofConductivity, List<Caution> cautions) {
+        static final Salinity NONE = given(Double.NaN);
 
-        static Salinity given(double value, double uncertainty) {
-            return new Salinity(value, uncertainty, false, List.of());
+        static Salinity given(double value) {
+            return new Salinity(value, null, List.of());
+        }
+
+        InputUncertainty in(InputUncertainty inputs, double ofConductivityMsCm) {
+            return ofConductivity == null ? inputs : inputs.withSalinityFrom(ofConductivityMsCm, ofConductivity);
         }
     }
 
@@ -70,7 +75,8 @@ final class WishReader {
         PhScale scale = scale();
         Double readAtC = readAtC();
         InputUncertainty inputs = uncertainty.inputs(scale);
-        Salinity salinity = salinity(temperatureC, inputs);
+        double ofConductivityMsCm = uncertainty.ofConductivityMsCm();
+        Salinity salinity = salinity(temperatureC);
         Conditions conditions = new Conditions(
                 temperatureC,
                 salinity.value(),
@@ -86,8 +92,8 @@ final class WishReader {
                         wish,
                         conditions,
                         known,
-                        WishUncertainty.withSalinity(inputs, salinity.uncertainty()),
-                        salinity.fromConductivity(),
+                        salinity.in(inputs, ofConductivityMsCm),
+                        salinity.ofConductivity() != null,
                         salinity.cautions());
     }
 
@@ -113,7 +119,7 @@ final class WishReader {
         return faults.number(name, value, TEMPERATURE_C, UnsolvableReason.TEMPERATURE_NOT_COVERED);
     }
 
-    private Salinity salinity(double temperatureC, InputUncertainty inputs) {
+    private Salinity salinity(double temperatureC) {
         Double given = wish.salinity();
         Double conductivity = wish.conductivityMsCm();
         if (given != null && conductivity != null) {
@@ -123,14 +129,13 @@ final class WishReader {
                             + WaterFaults.plain(given) + " and " + WaterFaults.plain(conductivity));
             return Salinity.NONE;
         }
-        double ofConductivity = uncertainty.ofConductivityMsCm();
         if (conductivity != null) {
             uncertainty.refuseThatOfSalinity();
             double value = faults.number(
                     "conductivityMsCm", conductivity, CONDUCTIVITY_MS_CM, UnsolvableReason.SALINITY_NOT_COVERED);
             return Double.isNaN(value) || Double.isNaN(temperatureC)
                     ? Salinity.NONE
-                    : ofConductivity(value, temperatureC, ofConductivity, inputs.temperatureC());
+                    : ofConductivity(value, temperatureC);
         }
         uncertainty.refuseThatOfConductivity();
         if (given == null) {
@@ -139,12 +144,10 @@ final class WishReader {
                     faults.at("salinity") + " is missing; " + SALINITY.words()
                             + " is accepted, or conductivityMsCm in its place");
         }
-        return Salinity.given(
-                faults.number("salinity", given, SALINITY, UnsolvableReason.SALINITY_NOT_COVERED), inputs.salinity());
+        return Salinity.given(faults.number("salinity", given, SALINITY, UnsolvableReason.SALINITY_NOT_COVERED));
     }
 
-    private Salinity ofConductivity(
-            double conductivity, double temperatureC, double ofConductivity, double ofTemperature) {
+    private Salinity ofConductivity(double conductivity, double temperatureC) {
         Figure salinity = ConductivitySalinity.salinity(conductivity, temperatureC);
         if (!(salinity instanceof Figure.Known known)) {
             faults.addImpossible(
@@ -155,9 +158,7 @@ final class WishReader {
                             + " °C is beyond a salinity of 50; up to that of 50 is accepted");
             return Salinity.NONE;
         }
-        double uncertain = ConductivitySalinity.uncertainty(conductivity, temperatureC, ofConductivity, ofTemperature)
-                .orElseThrow();
-        return new Salinity(known.value(), uncertain, true, known.cautions());
+        return new Salinity(known.value(), ConductivitySalinity.slopes(conductivity, temperatureC), known.cautions());
     }
 
     private PhScale scale() {

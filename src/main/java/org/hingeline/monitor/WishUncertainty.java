@@ -70,9 +70,4 @@ final class WishUncertainty {
         double number = faults.number("uncertainty/" + name, value, Range.of(0, most, unit));
         return Double.isNaN(number) ? usual : number;
     }
-
-    static InputUncertainty withSalinity(InputUncertainty u, double salinity) {
-        return new InputUncertainty(
-                u.ph(), u.totalAlkalinity(), u.dic(), u.pco2Atm(), u.temperatureC(), salinity, u.calcium());
-    }
 }

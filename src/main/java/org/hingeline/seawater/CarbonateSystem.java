@@ -9,6 +9,7 @@ import org.hingeline.seawater.KnownPair.DicAndPco2;
 import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
 import org.hingeline.seawater.KnownPair.PhAndDic;
 import org.hingeline.seawater.KnownPair.PhAndPco2;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Solves the carbonate system of a water from two known quantities.
@@ -18,8 +19,10 @@ import org.hingeline.seawater.KnownPair.PhAndPco2;
  * ({@link PhReadElsewhere}).
  */
 public final class CarbonateSystem {
-    /** Bicarbonate and carbonate over CO2: beyond it the water would be above pH 14. */
-    private static final double IONISED_MAX = 1e14;
+    /** What any accepted alkalinity can give, with room to spare. */
+    private static final double PH_MIN = 1;
+
+    private static final double PH_MAX = 14.5;
 
     /** Ten times what is accepted as an input, mol/kg-seawater: no equilibrium constant holds there. */
     private static final double DIC_MAX = 1;
@@ -50,9 +53,25 @@ public final class CarbonateSystem {
         CarbonateResult result = ph != null && ph.readAtC(conditions.temperatureC()) != conditions.temperatureC()
                 ? PhReadElsewhere.solve(constants, conditions, known, ph)
                 : here(constants, conditions, known);
-        return result instanceof Solved solved && solved.state().dic() > DIC_MAX
-                ? tooMuchCarbon(solved.state())
-                : result;
+        Unsolvable absurd = result instanceof Solved solved ? absurdity(solved.state()) : null;
+        return absurd == null ? result : absurd;
+    }
+
+    /** Why a state is that of no water at all; null when it may be one. */
+    private static @Nullable Unsolvable absurdity(CarbonateState state) {
+        if (!(state.dic() <= DIC_MAX)) {
+            return new Unsolvable(
+                    UnsolvableReason.TOO_MUCH_CARBON,
+                    state.known() + " would need " + state.dic()
+                            + " mol/kg of inorganic carbon, and no water holds more than " + DIC_MAX);
+        }
+        if (!(state.phTotal() >= PH_MIN && state.phTotal() <= PH_MAX)) {
+            return new Unsolvable(
+                    UnsolvableReason.INPUTS_CONTRADICT,
+                    state.known() + " would give pH " + state.phTotal() + ", which no water has: " + PH_MIN + " to "
+                            + PH_MAX + " is accepted");
+        }
+        return null;
     }
 
     /** With pH, if it is known, read at the water's own temperature, and every input judged before. */
@@ -86,7 +105,7 @@ public final class CarbonateSystem {
         }
         DicAndPco2 pair = (DicAndPco2) known;
         double ionised = pair.dic() / k.co2(pair.pco2Atm()) - 1;
-        return ionised > 0 && ionised <= IONISED_MAX
+        return ionised > 0
                 ? solvedFromCarbon(k, conditions, pair, hydrogenIonOfIonised(k, ionised), pair.dic())
                 : contradiction(pair);
     }
@@ -123,15 +142,7 @@ public final class CarbonateSystem {
         return new Unsolvable(
                 UnsolvableReason.INPUTS_CONTRADICT,
                 "dissolved inorganic carbon " + pair.dic() + " mol/kg and pCO2 " + pair.pco2Atm()
-                        + " atm contradict each other: dissolved CO2 would be as much as the inorganic carbon or more, or so"
-                        + " little of it that the water would be above pH 14");
-    }
-
-    private static Unsolvable tooMuchCarbon(CarbonateState state) {
-        return new Unsolvable(
-                UnsolvableReason.TOO_MUCH_CARBON,
-                state.known() + " would need " + state.dic()
-                        + " mol/kg of inorganic carbon, and no water holds more than " + DIC_MAX);
+                        + " atm contradict each other: dissolved CO2 alone would exceed the inorganic carbon");
     }
 
     static Unsolvable notConverged(KnownPair pair) {

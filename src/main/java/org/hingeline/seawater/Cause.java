@@ -3,7 +3,7 @@ package org.hingeline.seawater;
 /**
  * One independent cause of uncertainty, moved by one standard uncertainty: what it does to a water.
  *
- * @param origin where it comes from
+ * @param source where it comes from
  * @param constant which constant moves, in the order of {@link Sensitivity}; −1 when none does
  * @param ofConstant by how much, in its logarithm
  * @param temperatureC how far the temperature moves, °C
@@ -13,7 +13,7 @@ package org.hingeline.seawater;
  * @param second the same of the second
  */
 record Cause(
-        Origin origin,
+        UncertaintySource source,
         int constant,
         double ofConstant,
         double temperatureC,
@@ -24,18 +24,23 @@ record Cause(
     static final int NO_CONSTANT = -1;
 
     static Cause constant(int constant, double inLogarithm) {
-        return new Cause(Origin.CONSTANTS, constant, inLogarithm, 0, 0, 0, 0, 0);
+        return new Cause(UncertaintySource.CONSTANTS, constant, inLogarithm, 0, 0, 0, 0, 0);
     }
 
     static Cause input(
-            Origin origin, double temperatureC, double salinity, double calcium, double first, double second) {
-        return new Cause(origin, NO_CONSTANT, 0, temperatureC, salinity, calcium, first, second);
+            UncertaintySource source,
+            double temperatureC,
+            double salinity,
+            double calcium,
+            double first,
+            double second) {
+        return new Cause(source, NO_CONSTANT, 0, temperatureC, salinity, calcium, first, second);
     }
 
     /** Both at once: the same cause, at work in two parts of a water. */
     Cause with(Cause other) {
         return new Cause(
-                origin,
+                source,
                 constant,
                 ofConstant,
                 temperatureC + other.temperatureC,

@@ -114,16 +114,37 @@ public final class ConductivitySalinity {
         if (refused.isPresent()) {
             return refused.get();
         }
+        Slopes slopes = slopes(conductivityMsCm, temperatureC);
+        return new Figure.Known(
+                Math.hypot(
+                        slopes.perConductivity() * conductivityUncertainty,
+                        slopes.perDegree() * temperatureUncertainty),
+                known.cautions());
+    }
+
+    /**
+     * How a salinity at the surface moves with what it was computed from.
+     *
+     * @param perConductivity 1/(mS/cm)
+     * @param perDegree 1/°C
+     */
+    public record Slopes(double perConductivity, double perDegree) {}
+
+    /**
+     * The slopes where {@link #salinity(double, double)} gives a number.
+     *
+     * @throws IllegalStateException with the refusal's words where it gives none
+     */
+    public static Slopes slopes(double conductivityMsCm, double temperatureC) {
+        salinity(conductivityMsCm, temperatureC).orElseThrow();
         double step = Math.max(conductivityMsCm, 1) * CONDUCTIVITY_STEP;
         double low = Math.max(0, conductivityMsCm - step);
         double high = conductivityMsCm + step;
-        double perConductivity = (raw(high, temperatureC, 0) - raw(low, temperatureC, 0)) / (high - low);
-        double perTemperature = (raw(conductivityMsCm, temperatureC + TEMPERATURE_STEP_C, 0)
-                        - raw(conductivityMsCm, temperatureC - TEMPERATURE_STEP_C, 0))
-                / (2 * TEMPERATURE_STEP_C);
-        return new Figure.Known(
-                Math.hypot(perConductivity * conductivityUncertainty, perTemperature * temperatureUncertainty),
-                known.cautions());
+        return new Slopes(
+                (raw(high, temperatureC, 0) - raw(low, temperatureC, 0)) / (high - low),
+                (raw(conductivityMsCm, temperatureC + TEMPERATURE_STEP_C, 0)
+                                - raw(conductivityMsCm, temperatureC - TEMPERATURE_STEP_C, 0))
+                        / (2 * TEMPERATURE_STEP_C));
     }
 
     private static double raw(double conductivityMsCm, double temperatureC, double pressureDbar) {

@@ -11,8 +11,10 @@ package org.hingeline.seawater;
  * @param dic mol/kg-seawater
  * @param pco2Atm atm
  * @param temperatureC °C
- * @param salinity practical salinity
+ * @param salinity practical salinity; where it was computed from conductivity, the conductivity's part alone
  * @param calcium measured calcium, mol/kg-seawater
+ * @param salinityPerDegree how far the salinity moves with the temperature, 1/°C: where it was computed from conductivity,
+ *     the same thermometer is in both; 0 where it was measured by itself
  */
 public record InputUncertainty(
         double ph,
@@ -21,7 +23,8 @@ public record InputUncertainty(
         double pco2Atm,
         double temperatureC,
         double salinity,
-        double calcium) {
+        double calcium,
+        double salinityPerDegree) {
     /**
      * pH 0.02, TA and DIC 10 µmol/kg, pCO2 10 µatm, 0.1 °C, salinity 0.1; calcium 0.1 mmol/kg (about one per cent, common
      * practice, no source).
@@ -39,6 +42,44 @@ public record InputUncertainty(
         require("temperatureC", temperatureC);
         require("salinity", salinity);
         require("calcium", calcium);
+        if (!Double.isFinite(salinityPerDegree)) {
+            throw new IllegalArgumentException("salinityPerDegree must be a finite number, got " + salinityPerDegree);
+        }
+    }
+
+    /** With a salinity that was measured by itself. */
+    public InputUncertainty(
+            double ph,
+            double totalAlkalinity,
+            double dic,
+            double pco2Atm,
+            double temperatureC,
+            double salinity,
+            double calcium) {
+        this(ph, totalAlkalinity, dic, pco2Atm, temperatureC, salinity, calcium, 0);
+    }
+
+    /** Of the salinity, that which the thermometer brings to it included. */
+    public double salinityInAll() {
+        return Math.hypot(salinity, salinityPerDegree * temperatureC);
+    }
+
+    /**
+     * The same with a salinity computed from conductivity.
+     *
+     * @param conductivity standard uncertainty of the conductivity, mS/cm
+     * @param slopes how that salinity moves
+     */
+    public InputUncertainty withSalinityFrom(double conductivity, ConductivitySalinity.Slopes slopes) {
+        return new InputUncertainty(
+                ph,
+                totalAlkalinity,
+                dic,
+                pco2Atm,
+                temperatureC,
+                Math.abs(slopes.perConductivity()) * conductivity,
+                calcium,
+                slopes.perDegree());
     }
 
     /** For waters solved from pH and alkalinity. */
@@ -50,7 +91,8 @@ public record InputUncertainty(
 
     /** The same with that of a measured calcium, mol/kg-seawater. */
     public InputUncertainty withCalcium(double newCalcium) {
-        return new InputUncertainty(ph, totalAlkalinity, dic, pco2Atm, temperatureC, salinity, newCalcium);
+        return new InputUncertainty(
+                ph, totalAlkalinity, dic, pco2Atm, temperatureC, salinity, newCalcium, salinityPerDegree);
     }
 
     /** For waters solved from alkalinity and inorganic carbon. */

@@ -26,7 +26,7 @@ final class KnownSlopes {
         KnownPh ph = known.ph();
         double waterC = state.conditions().temperatureC();
         if (ph == null) {
-            first = plain(Origin.firstOf(known));
+            first = plain(UncertaintySource.firstOf(known));
             withReadingTemperature = 0;
         } else if (ph.readAtC(waterC) == waterC) {
             double[] with = new double[Sensitivity.PARAMETERS];
@@ -44,11 +44,11 @@ final class KnownSlopes {
                     + there.with[Sensitivity.TEMPERATURE][Sensitivity.TA]
                             / (there.withLnH[Sensitivity.TA] * SeawaterConstants.LN_10);
         }
-        second = plain(Origin.secondOf(known));
+        second = plain(UncertaintySource.secondOf(known));
         determinant = first.withLnH * second.withDic - first.withDic * second.withLnH;
     }
 
-    private Row plain(Origin known) {
+    private Row plain(UncertaintySource known) {
         int quantity = switch (known) {
             case TOTAL_ALKALINITY -> Sensitivity.TA;
             case DIC -> Sensitivity.DIC;

@@ -21,7 +21,8 @@ final class Sensitivity {
     static final int PCO2 = 7;
     static final int OMEGA_ARAGONITE = 8;
     static final int OMEGA_CALCITE = 9;
-    static final int QUANTITIES = 10;
+    static final int DENSITY = 10;
+    static final int QUANTITIES = 11;
 
     // what they move with: logarithms of the constants first, then temperature, salinity and measured calcium
     private static final int K0 = 0;
@@ -137,6 +138,7 @@ final class Sensitivity {
     private void difference(double[] row, SeawaterConstants near, double step) {
         Speciation moved = Speciation.of(near, conditions, s.h(), s.dic());
         row[TA] = (alkalinity(near) - alkalinity(k)) / step;
+        row[DENSITY] = (near.densityKgM3 - k.densityKgM3) / step;
         row[CO2] = (moved.co2() - s.co2()) / step;
         row[BICARBONATE] = (moved.bicarbonate() - s.bicarbonate()) / step;
         row[CARBONATE] = (moved.carbonate() - s.carbonate()) / step;

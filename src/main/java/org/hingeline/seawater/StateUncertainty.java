@@ -13,6 +13,7 @@ package org.hingeline.seawater;
  * @param pco2Atm atm
  * @param omegaAragonite 1
  * @param omegaCalcite 1
+ * @param densityKgM3 kg/m³; what temperature and salinity make of it, the equation of state itself counts as exact
  */
 public record StateUncertainty(
         StandardUncertainty phTotal,
@@ -24,7 +25,8 @@ public record StateUncertainty(
         StandardUncertainty fco2Atm,
         StandardUncertainty pco2Atm,
         StandardUncertainty omegaAragonite,
-        StandardUncertainty omegaCalcite) {
+        StandardUncertainty omegaCalcite,
+        StandardUncertainty densityKgM3) {
 
     /** From the variances of both shares, in the order of {@link Sensitivity}. */
     static StateUncertainty ofVariances(double[] fromConstants, double[] fromInputs) {
@@ -42,6 +44,7 @@ public record StateUncertainty(
                 u[Sensitivity.FCO2],
                 u[Sensitivity.PCO2],
                 u[Sensitivity.OMEGA_ARAGONITE],
-                u[Sensitivity.OMEGA_CALCITE]);
+                u[Sensitivity.OMEGA_CALCITE],
+                u[Sensitivity.DENSITY]);
     }
 }

@@ -63,17 +63,28 @@ public final class Uncertainty {
         for (int p = 0; p < ofConstants.length; p++) {
             causes.add(Cause.constant(p, ofConstants[p]));
         }
-        causes.add(Cause.input(Origin.firstOf(known), 0, 0, 0, first(known, inputs), 0));
-        causes.add(Cause.input(Origin.secondOf(known), 0, 0, 0, 0, second(known, inputs)));
-        causes.add(Cause.input(Origin.TEMPERATURE, inputs.temperatureC(), 0, 0, 0, 0));
-        causes.add(Cause.input(Origin.SALINITY, 0, inputs.salinity(), 0, 0, 0));
+        causes.add(Cause.input(UncertaintySource.firstOf(known), 0, 0, 0, first(known, inputs), 0));
+        causes.add(Cause.input(UncertaintySource.secondOf(known), 0, 0, 0, 0, second(known, inputs)));
+        causes.add(Cause.input(
+                UncertaintySource.TEMPERATURE,
+                inputs.temperatureC(),
+                inputs.salinityPerDegree() * inputs.temperatureC(),
+                0,
+                0,
+                0));
+        causes.add(Cause.input(UncertaintySource.SALINITY, 0, inputs.salinity(), 0, 0, 0));
         if (state.conditions().calcium() != null) {
-            causes.add(Cause.input(Origin.CALCIUM, 0, 0, inputs.calcium(), 0, 0));
+            causes.add(Cause.input(UncertaintySource.CALCIUM, 0, 0, inputs.calcium(), 0, 0));
         }
         if (slopes.withReadingTemperature != 0) {
             // the thermometer at the electrode: the pH that the sample had where it was thought to be
             causes.add(Cause.input(
-                    Origin.TEMPERATURE_AT_PH, 0, 0, 0, -slopes.withReadingTemperature * inputs.temperatureC(), 0));
+                    UncertaintySource.TEMPERATURE_AT_PH,
+                    0,
+                    0,
+                    0,
+                    -slopes.withReadingTemperature * inputs.temperatureC(),
+                    0));
         }
         return new Uncertainty(state, slopes, causes);
     }
@@ -96,7 +107,7 @@ public final class Uncertainty {
             Cause cause = causes.get(i);
             double[] move = moves.get(i);
             carried.add(new Cause(
-                    cause.origin(),
+                    cause.source(),
                     cause.constant(),
                     cause.ofConstant(),
                     sameTemperature ? cause.temperatureC() : 0,
@@ -119,28 +130,32 @@ public final class Uncertainty {
         double heat = Blend.heatShareOfOther(state.conditions(), other.state.conditions(), shareOfOther);
         List<Cause> blended = new ArrayList<>(causes.size() + other.causes.size());
         for (int i = 0; i < causes.size(); i++) {
-            Cause own = partOf(i, 1 - shareOfOther, 1 - heat);
-            blended.add(own.common() ? own.with(other.partOf(i, shareOfOther, heat)) : own);
+            Cause own = partOf(i, 1 - shareOfOther, 1 - heat, blend);
+            blended.add(own.common() ? own.with(other.partOf(i, shareOfOther, heat, blend)) : own);
         }
         for (int i = 0; i < other.causes.size(); i++) {
             if (!other.causes.get(i).common()) {
-                blended.add(other.partOf(i, shareOfOther, heat));
+                blended.add(other.partOf(i, shareOfOther, heat, blend));
             }
         }
         return new Uncertainty(blend, blended);
     }
 
     /** What a cause does to a blend that this water is a share of, by mass and by heat. */
-    private Cause partOf(int i, double share, double heatShare) {
+    private Cause partOf(int i, double share, double heatShare, CarbonateState blend) {
         Cause cause = causes.get(i);
         double[] move = moves.get(i);
+        // beside a measured calcium, one from salinity still moves with it
+        boolean fromSalinity =
+                state.conditions().calcium() == null && blend.conditions().calcium() != null;
+        double calcium = fromSalinity ? SeaSalt.calcium(cause.salinity()) : cause.calcium();
         return new Cause(
-                cause.origin(),
+                cause.source(),
                 cause.constant(),
                 cause.ofConstant(),
                 heatShare * cause.temperatureC(),
                 share * cause.salinity(),
-                share * cause.calcium(),
+                share * calcium,
                 share * move[Sensitivity.TA],
                 share * move[Sensitivity.DIC]);
     }
@@ -156,10 +171,10 @@ public final class Uncertainty {
     }
 
     /** The standard uncertainty of Ω of aragonite that each origin alone would give; together, in quadrature, the total. */
-    public Map<Origin, Double> ofOmegaAragoniteByOrigin() {
-        Map<Origin, Double> shares = new EnumMap<>(Origin.class);
+    public Map<UncertaintySource, Double> ofOmegaAragoniteBySource() {
+        Map<UncertaintySource, Double> shares = new EnumMap<>(UncertaintySource.class);
         for (int i = 0; i < moves.size(); i++) {
-            shares.merge(causes.get(i).origin(), Math.abs(moves.get(i)[Sensitivity.OMEGA_ARAGONITE]), Math::hypot);
+            shares.merge(causes.get(i).source(), Math.abs(moves.get(i)[Sensitivity.OMEGA_ARAGONITE]), Math::hypot);
         }
         return shares;
     }
@@ -201,16 +216,16 @@ public final class Uncertainty {
     }
 
     private static double first(KnownPair known, InputUncertainty inputs) {
-        double stated = of(Origin.firstOf(known), inputs);
+        double stated = of(UncertaintySource.firstOf(known), inputs);
         KnownPh ph = known.ph();
         return ph != null && ph.scale() == PhScale.NBS ? Math.max(stated, InputUncertainty.PH_ON_NBS_BUFFERS) : stated;
     }
 
     private static double second(KnownPair known, InputUncertainty inputs) {
-        return of(Origin.secondOf(known), inputs);
+        return of(UncertaintySource.secondOf(known), inputs);
     }
 
-    private static double of(Origin known, InputUncertainty inputs) {
+    private static double of(UncertaintySource known, InputUncertainty inputs) {
         return switch (known) {
             case PH -> inputs.ph();
             case TOTAL_ALKALINITY -> inputs.totalAlkalinity();

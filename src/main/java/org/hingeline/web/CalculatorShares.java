@@ -3,9 +3,9 @@ package org.hingeline.web;
 import java.util.List;
 import java.util.Map;
 import org.hingeline.monitor.CalculatedWater;
-import org.hingeline.seawater.Origin;
 import org.hingeline.seawater.StandardUncertainty;
 import org.hingeline.seawater.StateUncertainty;
+import org.hingeline.seawater.UncertaintySource;
 import org.hingeline.web.view.CalculatorView.Share;
 
 /** Where the ± of a calculated water comes from. */
@@ -14,8 +14,8 @@ final class CalculatorShares {
 
     /** What brings how much of the ± of Ω of aragonite, the largest first. */
     static List<String> ofOmega(CalculatedWater water) {
-        return water.omegaAragoniteByOrigin().entrySet().stream()
-                .sorted(Map.Entry.<Origin, Double>comparingByValue().reversed())
+        return water.omegaAragoniteBySource().entrySet().stream()
+                .sorted(Map.Entry.<UncertaintySource, Double>comparingByValue().reversed())
                 .map(each -> words(each.getKey()) + " \u00b1" + Rounded.small(each.getValue()))
                 .toList();
     }
@@ -31,7 +31,7 @@ final class CalculatorShares {
                 Rounded.small(u.fromInputs() * scale));
     }
 
-    private static String words(Origin origin) {
+    private static String words(UncertaintySource origin) {
         return switch (origin) {
             case CONSTANTS -> "equilibrium constants";
             case PH -> "pH";

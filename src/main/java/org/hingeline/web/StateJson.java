@@ -135,6 +135,7 @@ final class StateJson {
             each(CARBONATE, state.carbonate(), u.carbonate(), MICRO);
             each(ARAGONITE, state.omegaAragonite(), u.omegaAragonite(), 1);
             each(CALCITE, state.omegaCalcite(), u.omegaCalcite(), 1);
+            each(DENSITY, state.densityKgM3(), u.densityKgM3(), 1);
             json.writeEndObject();
         }
     }

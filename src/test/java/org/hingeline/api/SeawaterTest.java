@@ -211,7 +211,11 @@ class SeawaterTest extends AskedByViewer {
                         / omega)
                 .as("first order leaves out the curvature of a step of 0.05")
                 .isCloseTo(0.117, within(0.006));
-        assertThat(state.at("/standardUncertainty").has("densityKgM3")).isFalse();
+        assertThat(state.at("/standardUncertainty/densityKgM3/fromConstants").asDouble())
+                .isZero();
+        assertThat(state.at("/standardUncertainty/densityKgM3/total").asDouble())
+                .as("0.75 kg/m³ for a salinity of 1, 0.25 for 1 °C")
+                .isCloseTo(Math.hypot(0.075, 0.026), within(0.005));
         assertThat(state(water + ",\"withUncertainty\":false", 0.02).has("standardUncertainty"))
                 .isFalse();
     }

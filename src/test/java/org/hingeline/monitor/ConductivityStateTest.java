@@ -152,11 +152,10 @@ class ConductivityStateTest {
         WaterNumbers numbers = hatchery.newestState().numbers();
 
         // registered: 0.2 mS/cm and 0.1 °C
-        double ofSalinity =
-                ConductivitySalinity.uncertainty(CONDUCTIVITY, 22, 0.2, 0.1).orElseThrow();
-        assertThat(ofSalinity).isBetween(0.13, 0.2);
         double expected = Uncertainty.of(
-                        solved(22, 30), InputUncertainty.ofPhAndAlkalinity(0.02, 10e-6, 0.1, ofSalinity))
+                        solved(22, 30),
+                        InputUncertainty.ofPhAndAlkalinity(0.02, 10e-6, 0.1, 0)
+                                .withSalinityFrom(0.2, ConductivitySalinity.slopes(CONDUCTIVITY, 22)))
                 .omegaAragonite()
                 .fromInputs();
         assertThat(numbers.omegaAragoniteFromInputs()).isCloseTo(expected, within(1e-8));

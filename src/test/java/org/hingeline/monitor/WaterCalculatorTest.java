@@ -80,7 +80,10 @@ class WaterCalculatorTest {
         WaterWishBuilder fresh = measured().salinity(null).conductivityMsCm(43.6);
         CalculatedWater usual = calculated(fresh);
         assertThat(usual.state().conditions().salinity()).isCloseTo(30, within(0.2));
-        assertThat(usual.inputs().salinity()).isCloseTo(0.1, within(0.02));
+        assertThat(usual.inputs().salinityInAll()).isCloseTo(0.1, within(0.02));
+        assertThat(usual.inputs().salinityPerDegree())
+                .as("a warmer water of that conductivity is fresher")
+                .isNegative();
         assertThat(usual.method().salinityFromConductivity()).isTrue();
         assertThat(calculated(fresh.uncertainty(uncertainty(null, null, 1.0)))
                         .inputs()

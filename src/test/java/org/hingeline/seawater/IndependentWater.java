@@ -15,7 +15,8 @@ import java.util.function.UnaryOperator;
 
 /**
  * The same equilibria written a second time from the publications, to 34 digits, and solved by bisection. It shares no line
- * with the product, so agreement speaks for both.
+ * with the product, so agreement speaks for the arithmetic of both. The coefficients are the same digits typed twice: for
+ * these the check values speak ({@link PublishedValues}).
  */
 final class IndependentWater {
     private static final BigDecimal[] STEPS = steps();

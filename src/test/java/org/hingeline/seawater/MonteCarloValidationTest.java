@@ -84,9 +84,38 @@ class MonteCarloValidationTest {
                 .withCalcium(7.1e-3);
         return Stream.concat(
                 plain,
-                Stream.of(measured(
-                        "an estuary with its own calcium",
-                        new DrawnWater(estuary, new PhAndAlkalinity(7.7, 1700e-6), InputUncertainty.DEFAULTS))));
+                Stream.of(
+                        measured(
+                                "an estuary with its own calcium",
+                                new DrawnWater(estuary, new PhAndAlkalinity(7.7, 1700e-6), InputUncertainty.DEFAULTS)),
+                        salinityFromConductivity()));
+    }
+
+    /** The thermometer moves the salinity along with the constants. */
+    private static Case salinityFromConductivity() {
+        double temperatureC = C.temperatureC();
+        double conductivity =
+                ConductivitySalinity.conductivity(C.salinity(), temperatureC).orElseThrow();
+        double ofConductivity = 0.2;
+        double ofTemperature = 0.3;
+        InputUncertainty usual = InputUncertainty.ofPhAndAlkalinity(0.01, 10e-6, ofTemperature, 0);
+        Drawing drawing = (off, constantsOff) -> {
+            double t = temperatureC + ofTemperature * off[0];
+            double s = ConductivitySalinity.salinity(conductivity + ofConductivity * off[1], t)
+                    .orElseThrow();
+            return Outputs.of(DrawnWater.solve(
+                    Conditions.of(t, s),
+                    new PhAndAlkalinity(PH + usual.ph() * off[2], TA + usual.totalAlkalinity() * off[3]),
+                    constantsOff));
+        };
+        InputUncertainty propagated =
+                usual.withSalinityFrom(ofConductivity, ConductivitySalinity.slopes(conductivity, temperatureC));
+        return new Case(
+                "salinity from conductivity",
+                DrawnWater.INPUTS,
+                drawing,
+                Uncertainty.of(
+                        CarbonateSystem.solve(C, new PhAndAlkalinity(PH, TA)).orElseThrow(), propagated));
     }
 
     @ParameterizedTest

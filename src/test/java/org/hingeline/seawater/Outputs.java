@@ -14,7 +14,8 @@ final class Outputs {
             "fco2Atm",
             "pco2Atm",
             "omegaAragonite",
-            "omegaCalcite");
+            "omegaCalcite",
+            "densityKgM3");
 
     private Outputs() {}
 
@@ -29,7 +30,8 @@ final class Outputs {
             s.fco2Atm(),
             s.pco2Atm(),
             s.omegaAragonite(),
-            s.omegaCalcite()
+            s.omegaCalcite(),
+            s.densityKgM3()
         };
     }
 
@@ -44,7 +46,8 @@ final class Outputs {
             u.fco2Atm(),
             u.pco2Atm(),
             u.omegaAragonite(),
-            u.omegaCalcite()
+            u.omegaCalcite(),
+            u.densityKgM3()
         };
     }
 }

@@ -64,7 +64,7 @@ class PublishedValuesTest {
     @Test
     void says_how_many_values_of_each_source_were_checked() {
         assertThat(all).allMatch(PublishedValue::agrees);
-        StringBuilder text = new StringBuilder("Published values checked, by source:\n");
+        StringBuilder text = new StringBuilder("Values from elsewhere checked, by source:\n");
         counts().forEach((source, n) -> text.append(String.format("%7d  %s%n", n, source)));
         text.append(String.format("%7d  in all%n", all.size()));
         System.out.print(text);
@@ -83,7 +83,9 @@ class PublishedValuesTest {
                 Every value from elsewhere that the chemistry is held against, computed anew by the tests, which fail when
                 this page no longer says what they find. The values stand in `src/test/resources/reference`, each table
                 with its sources and the reason for its tolerances. Amounts are in µmol/kg and pressures in µatm unless the
-                name says otherwise.
+                name says otherwise. "Recomputed" values were worked out from the published equations outside this code;
+                those of "definition" and "figures of the trade" hold the units; the long TEOS-10 tables show the row that
+                is furthest off.
 
                 | source | in full | values |
                 |---|---|---|

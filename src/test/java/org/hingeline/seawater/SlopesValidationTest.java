@@ -94,7 +94,7 @@ class SlopesValidationTest {
         BigDecimal[] low = down.quantities();
         double[] values = Outputs.of(state);
         StandardUncertainty[] ours = Outputs.of(Uncertainty.of(state, u));
-        for (int q = 0; q < ours.length; q++) {
+        for (int q = 0; q < high.length; q++) {
             double slope = Math.abs(high[q].subtract(low[q]).doubleValue()) / (2 * STEP);
             assertThat(ours[q].fromInputs())
                     .as("%s of %s with %s", Outputs.NAMES.get(q), state.known(), u)

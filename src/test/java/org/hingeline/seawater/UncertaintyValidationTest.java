@@ -82,17 +82,20 @@ class UncertaintyValidationTest {
     @Test
     void each_origin_has_the_share_computed_elsewhere() {
         CarbonateState state = CarbonateSystem.solve(WATER, PAIR).orElseThrow();
-        Map<Origin, Double> shares = Uncertainty.ofMeasured(
+        Map<UncertaintySource, Double> shares = Uncertainty.ofMeasured(
                         state, InputUncertainty.ofPhAndAlkalinity(0.02, 17e-6, 0.1, 0.1), ConstantUncertainty.ORR_2018)
-                .ofOmegaAragoniteByOrigin();
+                .ofOmegaAragoniteBySource();
         // percent of 1.9454, to the printed digit; first order for the constants and pH, as in uncertainty.csv
-        assertThat(100 * shares.get(Origin.CONSTANTS) / state.omegaAragonite()).isCloseTo(5.5, within(0.05));
-        assertThat(100 * shares.get(Origin.PH) / state.omegaAragonite()).isCloseTo(3.9, within(0.05));
-        assertThat(100 * shares.get(Origin.TOTAL_ALKALINITY) / state.omegaAragonite())
+        assertThat(100 * shares.get(UncertaintySource.CONSTANTS) / state.omegaAragonite())
+                .isCloseTo(5.5, within(0.05));
+        assertThat(100 * shares.get(UncertaintySource.PH) / state.omegaAragonite())
+                .isCloseTo(3.9, within(0.05));
+        assertThat(100 * shares.get(UncertaintySource.TOTAL_ALKALINITY) / state.omegaAragonite())
                 .isCloseTo(0.84, within(0.005));
-        assertThat(100 * shares.get(Origin.TEMPERATURE) / state.omegaAragonite())
+        assertThat(100 * shares.get(UncertaintySource.TEMPERATURE) / state.omegaAragonite())
                 .isCloseTo(0.37, within(0.005));
-        assertThat(100 * shares.get(Origin.SALINITY) / state.omegaAragonite()).isCloseTo(0.17, within(0.005));
+        assertThat(100 * shares.get(UncertaintySource.SALINITY) / state.omegaAragonite())
+                .isCloseTo(0.17, within(0.005));
     }
 
     @Test

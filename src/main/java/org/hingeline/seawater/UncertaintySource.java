@@ -6,7 +6,7 @@ import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
 import org.hingeline.seawater.KnownPair.PhAndDic;
 
 /** Where an uncertainty comes from. */
-public enum Origin {
+public enum UncertaintySource {
     /** The equilibrium constants and total boron; common to all waters. */
     CONSTANTS,
     PH,
@@ -21,7 +21,7 @@ public enum Origin {
     TEMPERATURE_AT_PH;
 
     /** Of the first of the two known quantities. */
-    static Origin firstOf(KnownPair known) {
+    static UncertaintySource firstOf(KnownPair known) {
         if (known.ph() != null) {
             return PH;
         }
@@ -29,7 +29,7 @@ public enum Origin {
     }
 
     /** Of the second. */
-    static Origin secondOf(KnownPair known) {
+    static UncertaintySource secondOf(KnownPair known) {
         if (known instanceof PhAndAlkalinity) {
             return TOTAL_ALKALINITY;
         }
