@@ -17,7 +17,8 @@
       for (const same of form.querySelectorAll(`[data-unit-of="${select.name.replace(/Unit$/, "")}"]`)) same.textContent = chosen.textContent;
       if (!plusMinus || !standsIn) return;
       const was = [...select.options].find(option => option.value === standsIn.value);
-      const value = Number(plusMinus.value.replace(",", "."));
+      const ambiguous = /^\s*[1-9]\d{0,2}(,\d{3})+\s*$/.test(plusMinus.value);
+      const value = ambiguous ? NaN : Number(plusMinus.value.replace(",", "."));
       if (was && plusMinus.value !== "" && !Number.isNaN(value)) {
         plusMinus.value = figures(value * Number(was.dataset.factor) / Number(chosen.dataset.factor));
       }

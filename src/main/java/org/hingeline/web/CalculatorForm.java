@@ -133,20 +133,20 @@ final class CalculatorForm {
         if (pair.isEmpty()) {
             typed.fault("pair", "choose which two are known");
         }
-        required("temp", "fill in the temperature of the water, for instance 18,5");
+        required("temp", "fill in the temperature of the water, for instance 18.5");
         required("salt", "fill in the salinity, for instance 33, or a conductivity with its unit");
         pair.forEach(field -> required(field, "it is empty. Fill it in, or choose another two above"));
         boolean ph = pair.contains("ph");
         Double salt = units.conductivity
-                ? units.canonical("salt", Quantity.CONDUCTIVITY, "42,9")
-                : units.canonical("salt", Quantity.SALINITY, "33,1");
+                ? units.canonical("salt", Quantity.CONDUCTIVITY, "42.9")
+                : units.canonical("salt", Quantity.SALINITY, "33.1");
         Double phTemperature = ph ? typed.number("phTemp", "25") : null;
         Double warmTo = typed.number("warmTo", "25");
         WaterWish wish = WaterWish.builder()
-                .temperatureC(units.canonical("temp", Quantity.TEMPERATURE, "18,5"))
+                .temperatureC(units.canonical("temp", Quantity.TEMPERATURE, "18.5"))
                 .salinity(units.conductivity ? null : salt)
                 .conductivityMsCm(units.conductivity ? salt : null)
-                .ph(ph ? typed.number("ph", "8,02") : null)
+                .ph(ph ? typed.number("ph", "8.02") : null)
                 .phScale(ph ? typed.text("phUnit") : null)
                 .phTemperatureC(phTemperature == null ? null : (Double) units.temperature.toCanonical(phTemperature))
                 .totalAlkalinityUmolKg(of(pair, "ta", "2350"))
@@ -154,14 +154,14 @@ final class CalculatorForm {
                 .pco2Uatm(of(pair, "pco2", "420"))
                 .phosphateUmolKg(typed.number("phosphate", "1"))
                 .silicateUmolKg(typed.number("silicate", "10"))
-                .calciumMmolKg(units.canonical("calcium", Quantity.CALCIUM, "9,6"))
+                .calciumMmolKg(units.canonical("calcium", Quantity.CALCIUM, "9.6"))
                 .constants(typed.text("constants"))
                 .boron(typed.text("boron"))
                 .uncertainty(uncertainty(pair))
                 .warmToC(warmTo == null ? null : (Double) units.temperature.toCanonical(warmTo))
                 .equilibrateToUatm(typed.number("airTo", "420"))
                 .blendWith(blend())
-                .ammoniaMgL(units.canonical("ammonia", Quantity.AMMONIA, "0,5"))
+                .ammoniaMgL(units.canonical("ammonia", Quantity.AMMONIA, "0.5"))
                 .build();
         limit();
         return wish;
@@ -181,7 +181,7 @@ final class CalculatorForm {
     private WaterWish.Uncertainty uncertainty(List<String> pair) {
         Double salt = units.salinityPlusMinus();
         return new WaterWish.Uncertainty(
-                pair.contains("ph") ? typed.number("phPm", "0,02") : null,
+                pair.contains("ph") ? typed.number("phPm", "0.02") : null,
                 pair.contains("ta") ? units.plusMinus("ta", Quantity.TOTAL_ALKALINITY) : null,
                 pair.contains("dic") ? units.plusMinus("dic", Quantity.DIC) : null,
                 pair.contains("pco2") ? units.plusMinus("pco2", Quantity.PCO2) : null,
@@ -207,7 +207,7 @@ final class CalculatorForm {
                 .temperatureC(temperature == null ? null : (Double) units.temperature.toCanonical(temperature))
                 .salinity(units.conductivity ? null : salinity)
                 .conductivityMsCm(units.conductivity ? salinity : null)
-                .ph(typed.number("blendPh", "7,8"))
+                .ph(typed.number("blendPh", "7.8"))
                 .phScale(typed.text("phUnit"))
                 .totalAlkalinityUmolKg(
                         alkalinity == null

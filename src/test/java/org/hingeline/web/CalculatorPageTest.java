@@ -88,12 +88,12 @@ class CalculatorPageTest {
                 "temp; 77; tempUnit; [degF]",
                 "temp; 25,0; tempUnit; Cel",
                 "salt; 35,0; saltUnit; 1",
-                "salt; 53,071; saltUnit; mS/cm",
+                "salt; 53,0710; saltUnit; mS/cm",
                 "salt; 5,3071; saltUnit; S/m",
                 "ta; 2,35369; taUnit; meq/L",
                 "ta; 2 300; taUnit; umol/kg",
                 "ta; 2.3; taUnit; mmol/kg",
-                "ta; 117,782; taUnit; mg/L",
+                "ta; 117,7820; taUnit; mg/L",
                 "ta; 6,5996; taUnit; {dKH}",
                 "ph; 8,1; phUnit; total",
                 "ph; 8.0871; phUnit; seawater",
@@ -166,7 +166,8 @@ class CalculatorPageTest {
     @CsvSource(
             delimiter = ';',
             value = {
-                "temp; warm; “warm” is not a number; 18,5 would be",
+                "temp; warm; “warm” is not a number; 18.5 would be",
+                "ta; 2,350; “2,350” can be read in two ways; write 2350 or 2.350",
                 "temp; ''; fill in the temperature",
                 "temp; 60; 60 cannot be: −2 to 45 °C is accepted",
                 "salt; 51; 51 cannot be: 0 to 50 is accepted",
@@ -294,8 +295,43 @@ class CalculatorPageTest {
                 .contains("0.136 too high")
                 .contains("Do not trust its readings")
                 .contains("calibrated in NBS buffers");
+        assertThat(page("/calculator/electrode?temp=warm&salt=&ph=9", 422)).contains("21.5 would be");
         assertThat(page("/calculator/electrode?temp=warm&salt=&ph=99", 422))
                 .contains("“warm” is not a number", "id=\"c-salt-error\"");
+    }
+
+    @Test
+    void an_electrode_that_is_to_be_calibrated_in_tris_is_to_be_registered_on_the_total_scale() {
+        for (String ph : new String[] {"8.06", "8.23"}) {
+            assertThat(words(page("/calculator/electrode?temp=25&salt=35&ph=" + ph + "&phUnit=total", 200)))
+                    .contains(
+                            "in tris",
+                            "register the sensor with that scale in Setup",
+                            "every later pH is about 0.13 wrong");
+        }
+    }
+
+    @ParameterizedTest
+    @CsvSource({
+        "8.18, is-fit, Within 0.05",
+        "8.28, is-unknown, with a sound electrode too",
+        "8.40, is-short, fresh buffers"
+    })
+    void an_electrode_on_nbs_buffers_is_judged_by_what_its_scale_can_tell_and_never_to_be_replaced(
+            String ph, String standing, String advice) {
+        String page = page("/calculator/electrode?temp=25&salt=35&ph=" + ph + "&phUnit=nbs", 200);
+
+        assertThat(page).contains("verdict-of " + standing);
+        assertThat(words(page)).contains(advice).doesNotContain("replace", "Do not trust", "calibrated in NBS buffers");
+        assertThat(words(page).contains("in Setup")).isEqualTo(!standing.equals("is-fit"));
+    }
+
+    @Test
+    void an_electrode_in_a_unit_or_on_a_scale_nobody_offers_is_refused() {
+        assertThat(page("/calculator/electrode?temp=25&tempUnit=stone&salt=35&ph=8.1&phUnit=total", 422))
+                .contains("id=\"c-temp-error\"", "unit “stone” is not known; accepted: Cel");
+        assertThat(page("/calculator/electrode?temp=25&salt=35&ph=8.1&phUnit=sour", 422))
+                .contains("id=\"c-ph-error\"", "scale “sour” is not known; accepted: total");
     }
 
     private static String page(String path, int status) {
