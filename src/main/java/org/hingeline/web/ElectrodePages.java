@@ -83,7 +83,7 @@ final class ElectrodePages {
     private static Finding compared(Map<String, String> values) {
         FieldFaults faults = new FieldFaults();
         Typed typed = new Typed(values, faults);
-        UnitConversion unit = new CalculatorUnits(typed).temperature;
+        UnitConversion unit = CalculatorUnits.of(typed).temperature;
         Double temperature = required(typed, "temp", "21.5");
         Double salinity = required(typed, "salt", "35");
         Double reading = required(typed, "ph", "8.12");

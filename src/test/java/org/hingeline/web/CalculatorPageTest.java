@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.within;
 import static org.hingeline.web.CalculatorReader.digits;
 import static org.hingeline.web.CalculatorReader.fields;
 import static org.hingeline.web.CalculatorReader.form;
+import static org.hingeline.web.CalculatorReader.plusMinus;
 import static org.hingeline.web.CalculatorReader.query;
 import static org.hingeline.web.CalculatorReader.value;
 import static org.hingeline.web.CalculatorReader.words;
@@ -19,6 +20,7 @@ import java.util.regex.Pattern;
 import org.hingeline.RunningService;
 import org.hingeline.SettableClock;
 import org.hingeline.monitor.Role;
+import org.hingeline.seawater.MilleroPoisson1981;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
@@ -278,6 +280,156 @@ class CalculatorPageTest {
         String page = page(form("temp", "\"><script>alert(1)</script>", "salt", "35", "ph", "8", "ta", "2300"), 422);
 
         assertThat(page).doesNotContain("<script>alert");
+    }
+
+    @ParameterizedTest
+    @CsvSource({"ph-ta, total, umol/kg", "ta-dic, , "})
+    void the_other_water_of_a_blend_is_read_in_its_own_units_on_its_own_scale_with_its_own_density(
+            String pair, String firstScale, String firstUnit) {
+        String alone = words(page(
+                form("temp", "10", "salt", "20", "ph", "7.8", "phUnit", "nbs", "ta", "2", "taUnit", "meq/L"), 200));
+        Map<String, String> fields = fields(
+                "pair",
+                pair,
+                "temp",
+                "25",
+                "salt",
+                "35",
+                "ph",
+                "8.1",
+                "ta",
+                "2300",
+                "dic",
+                "1963.436",
+                "blendShare",
+                "100",
+                "blendTemp",
+                "50",
+                "blendTempUnit",
+                "[degF]",
+                "blendSalt",
+                "20",
+                "blendSaltUnit",
+                "1",
+                "blendPh",
+                "7.8",
+                "blendPhUnit",
+                "nbs",
+                "blendTa",
+                "2",
+                "blendTaUnit",
+                "meq/L");
+        if (firstScale != null) {
+            fields.put("phUnit", firstScale);
+            fields.put("taUnit", firstUnit);
+        }
+
+        String page = page(query(fields), 200);
+
+        Matcher alkalinity = Pattern.compile(" total alkalinity (1 9\\d\\d) ").matcher(alone);
+        assertThat(alkalinity.find()).as(alone).isTrue();
+        assertThat(Double.parseDouble(alkalinity.group(1).replace(" ", "")))
+                .isCloseTo(2000 / (MilleroPoisson1981.densityKgM3(10, 20) / 1000), within(0.5));
+        Matcher omega = Pattern.compile("\u03a9 ([\\d.]+) \u00b1").matcher(alone);
+        assertThat(omega.find()).isTrue();
+        assertThat(words(page))
+                .containsPattern(
+                        "\u03a9 aragonite 3\\.7\\d* \u00b1[\\d.]+ " + Pattern.quote(omega.group(1)) + " \u00b1")
+                .containsPattern("total alkalinity, \u00b5mol/kg 2 300 \u00b110 " + alkalinity.group(1) + " \u00b1");
+        assertThat(page).containsPattern("<option value=\"nbs\"[^>]* selected>NBS scale</option>");
+    }
+
+    @Test
+    void a_blend_that_does_not_say_is_in_the_units_and_on_the_scale_of_the_first() {
+        String words = words(page(
+                form(
+                        "temp",
+                        "77",
+                        "tempUnit",
+                        "[degF]",
+                        "salt",
+                        "35",
+                        "ph",
+                        "8.1",
+                        "ta",
+                        "2.3537",
+                        "taUnit",
+                        "meq/L",
+                        "blendShare",
+                        "100",
+                        "blendTemp",
+                        "77",
+                        "blendSalt",
+                        "35",
+                        "blendPh",
+                        "8.1",
+                        "blendTa",
+                        "2.3537"),
+                200));
+
+        assertThat(words)
+                .contains(
+                        "total alkalinity, \u00b5mol/kg 2 300 \u00b110 2 300 \u00b110",
+                        "temperature, \u00b0C 25.0 25.0");
+        assertThat(page(
+                        form(
+                                "temp",
+                                "25",
+                                "salt",
+                                "35",
+                                "ph",
+                                "8.1",
+                                "ta",
+                                "2300",
+                                "blendShare",
+                                "30",
+                                "blendTemp",
+                                "25",
+                                "blendSalt",
+                                "35",
+                                "blendPh",
+                                "8",
+                                "blendPhUnit",
+                                "sour",
+                                "blendTa",
+                                "1",
+                                "blendTaUnit",
+                                "stone"),
+                        422))
+                .contains("id=\"c-blendTa-error\">unit \u201cstone\u201d is not known")
+                .contains("id=\"c-blendPh-error\"");
+    }
+
+    @ParameterizedTest
+    @CsvSource({"mS/cm, 53.0710, 0.5", "S/m, 5.30710, 0.05"})
+    void a_plus_minus_of_salinity_beside_a_conductivity_counts_as_it_is_shown(
+            String unit, String conductivity, String shown) {
+        Map<String, String> fields = fields(
+                "temp",
+                "25",
+                "salt",
+                conductivity,
+                "saltUnit",
+                unit,
+                "saltPm",
+                "0.5",
+                "saltPmIn",
+                "1",
+                "ph",
+                "8.1",
+                "ta",
+                "2300");
+        String page = page(query(fields), 200);
+        assertThat(value(page, "saltPm")).isEqualTo(shown);
+        assertThat(value(page, "saltPmIn")).isEqualTo(unit);
+
+        fields.put("saltPm", shown);
+        fields.put("saltPmIn", unit);
+        String again = words(page(query(fields), 200));
+        assertThat(plusMinus(words(page), "dicUmolKg")).isEqualTo(plusMinus(again, "dicUmolKg"));
+        fields.put("saltPm", "");
+        assertThat(plusMinus(words(page), "dicUmolKg"))
+                .isGreaterThan(plusMinus(words(page(query(fields), 200)), "dicUmolKg"));
     }
 
     @Test
