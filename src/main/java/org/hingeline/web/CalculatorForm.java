@@ -132,6 +132,12 @@ final class CalculatorForm {
         return limit;
     }
 
+    /** Total ammonia, mg/L as N; absent when it is not asked about. */
+    @Nullable
+    Double ammoniaMgL() {
+        return units.canonical("ammonia", Quantity.AMMONIA, "0.5");
+    }
+
     /** What is to be worked out; what cannot be read is absent from it, and told by {@link #errors}. */
     WaterWish wish() {
         List<String> pair = pair();
@@ -166,7 +172,7 @@ final class CalculatorForm {
                 .warmToC(warmTo == null ? null : (Double) units.temperature.toCanonical(warmTo))
                 .equilibrateToUatm(typed.number("airTo", "420"))
                 .blendWith(blend())
-                .ammoniaMgL(units.canonical("ammonia", Quantity.AMMONIA, "0.5"))
+                .ammoniaMgL(ammoniaMgL())
                 .build();
         limit();
         return wish;

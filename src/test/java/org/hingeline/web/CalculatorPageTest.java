@@ -199,7 +199,8 @@ class CalculatorPageTest {
         Matcher error = Pattern.compile("id=\"" + id + "-error\">([^<]*)<").matcher(page);
         assertThat(error.find()).as("an error at " + id + " in " + words(page)).isTrue();
         assertThat(error.group(1).replace("-", "−")).contains(why.replace("-", "−"));
-        assertThat(page).contains("Nothing was worked out.").doesNotContain("id=\"state\"");
+        assertThat(page).contains("id=\"state\" tabindex=\"-1\">Nothing was worked out.");
+        assertThat(error.group(1)).doesNotContainPattern("\\d,\\d+ would be");
         assertThat(value(page, field)).isEqualTo(typed);
     }
 
@@ -263,6 +264,42 @@ class CalculatorPageTest {
         assertThat(Double.parseDouble(omega.group(3))).isGreaterThan(Double.parseDouble(omega.group(2)));
         assertThat(omega.group(4)).isEqualTo(omega.group(1));
         assertThat(words).contains("Un-ionised ammonia").contains("US EPA 1989");
+        Matcher toxic = Pattern.compile(
+                        "as NH\u2083 ([\\d.]+) mg/L.*un-ionised ammonia, mg/L as NH\u2083 ([\\d.]+) ([\\d.]+) ([\\d.]+) not known")
+                .matcher(words);
+        assertThat(toxic.find()).as(words).isTrue();
+        assertThat(toxic.group(2)).isEqualTo(toxic.group(1));
+        double warmed = Double.parseDouble(toxic.group(3));
+        double aerated = Double.parseDouble(toxic.group(4));
+        assertThat(warmed).isGreaterThan(Double.parseDouble(toxic.group(2)));
+        assertThat(aerated).isGreaterThan(1.5 * Double.parseDouble(toxic.group(2)));
+    }
+
+    @ParameterizedTest
+    @CsvSource(
+            delimiter = '|',
+            value = {
+                "7.55 | Over 1 aragonite, the stuff of the first shell, does not dissolve; larvae need more than that: hold it against your own limit",
+                "7.1 | dissolves, and larvae need more than 1",
+                "7.41 | Larvae need more than 1: hold it against your own limit"
+            })
+    void no_omega_is_called_enough_for_larvae_only_because_aragonite_lasts(String ph, String said) {
+        assertThat(words(page(form("temp", "25", "salt", "35", "ph", ph, "ta", "2300"), 200)))
+                .contains(said);
+    }
+
+    @Test
+    void a_refused_page_has_the_place_that_its_address_leads_to_once() {
+        String page = page(form("temp", "25", "salt", "35", "ph", "14", "ta", "2300"), 422);
+        assertThat(page.split("id=\"state\"", -1)).hasSize(2);
+        assertThat(page).contains("role=\"alert\" id=\"state\" tabindex=\"-1\"");
+        assertThat(page("/calculator/electrode?temp=25&salt=35&ph=99", 422))
+                .contains("role=\"alert\" id=\"finding\" tabindex=\"-1\"", "#finding");
+    }
+
+    @Test
+    void says_that_the_air_of_a_building_is_not_that_outside() {
+        assertThat(page("/calculator", 200)).contains("in a closed building often 600 to 1000");
     }
 
     @Test
