@@ -1,7 +1,8 @@
 "use strict";
 /*
  * Small helps for the calculator: a ± follows the unit that is chosen beside its value, and what was left empty or belongs to
- * another pair stays out of the address. Without this script the server does the same with the ±.
+ * another pair stays out of the address, as do the units of another water that is not there. Without this script the server
+ * does the same with the ±.
  */
 (() => {
   const form = document.querySelector("form.calc");
@@ -17,7 +18,8 @@
       for (const same of form.querySelectorAll(`[data-unit-of="${select.name.replace(/Unit$/, "")}"]`)) same.textContent = chosen.textContent;
       if (!plusMinus || !standsIn) return;
       const was = [...select.options].find(option => option.value === standsIn.value);
-      const value = Number(plusMinus.value.replace(",", "."));
+      const ambiguous = /^\s*[1-9]\d{0,2}(,\d{3})+\s*$/.test(plusMinus.value);
+      const value = ambiguous ? NaN : Number(plusMinus.value.replace(",", "."));
       if (was && plusMinus.value !== "" && !Number.isNaN(value)) {
         plusMinus.value = figures(value * Number(was.dataset.factor) / Number(chosen.dataset.factor));
       }
@@ -28,9 +30,10 @@
 
   const fields = () => [...form.elements].filter(e => e.name && e.name !== "temp");
   form.addEventListener("submit", () => {
+    const blending = [...form.querySelectorAll("input[name^=blend]")].some(input => input.value !== "");
     for (const field of fields()) {
       const unused = field.closest(".measured")?.offsetParent === null && !field.closest("details");
-      if (field.value === "" || unused) field.disabled = true;
+      if (field.value === "" || unused || !blending && field.matches("select[name^=blend]")) field.disabled = true;
     }
   });
   addEventListener("pageshow", () => { for (const field of fields()) field.disabled = false; });

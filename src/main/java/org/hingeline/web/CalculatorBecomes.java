@@ -1,14 +1,17 @@
 package org.hingeline.web;
 
 import java.util.ArrayList;
+import java.util.Collection;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.stream.Stream;
 import org.hingeline.monitor.CalculatedWater;
 import org.hingeline.monitor.CalculatedWater.Treated;
+import org.hingeline.seawater.Ammonia;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.Caution;
+import org.hingeline.seawater.Figure;
 import org.hingeline.seawater.StateUncertainty;
 import org.hingeline.web.CalculatorResult.Part;
 import org.hingeline.web.view.CalculatorView.Becomes;
@@ -20,14 +23,24 @@ import org.jspecify.annotations.Nullable;
 final class CalculatorBecomes {
     private CalculatorBecomes() {}
 
-    private record Water(CarbonateState state, @Nullable StateUncertainty uncertainty) {}
+    /** @param mixed whether it holds some of another water, of whose ammonia nothing is known */
+    private record Water(CarbonateState state, @Nullable StateUncertainty uncertainty, boolean mixed) {
+        /** Its toxic share of a total ammonia; a treatment leaves the total as it is. */
+        Figure nh3MgL(double totalMgL) {
+            return Ammonia.unionisedNh3MgL(
+                    totalMgL,
+                    state.phTotal(),
+                    state.conditions().temperatureC(),
+                    state.conditions().salinity());
+        }
+    }
 
     static @Nullable Becomes of(CalculatorForm form, CalculatedWater water, StateUncertainty uncertainty) {
         Map<String, Water> waters = new LinkedHashMap<>();
-        waters.put("now", new Water(water.state(), uncertainty));
-        add(waters, "closed, at " + form.wanted("warmTo") + "\u00a0" + form.temperatureUnit(), water.warmed());
-        add(waters, "aerated to " + form.wanted("airTo") + "\u00a0\u00b5atm", water.equilibrated());
-        add(waters, "with " + form.wanted("blendShare") + "\u00a0% of the other", water.blended());
+        waters.put("now", new Water(water.state(), uncertainty, false));
+        add(waters, "closed, at " + form.wanted("warmTo") + "\u00a0" + form.temperatureUnit(), water.warmed(), false);
+        add(waters, "aerated to " + form.wanted("airTo") + "\u00a0\u00b5atm", water.equilibrated(), false);
+        add(waters, "with " + form.wanted("blendShare") + "\u00a0% of the other", water.blended(), true);
         if (waters.size() == 1) {
             return null;
         }
@@ -41,6 +54,12 @@ final class CalculatorBecomes {
             rows.add(new Row(
                     part.unit().isEmpty() ? part.name() : part.name() + ", " + part.unit(),
                     waters.values().stream().map(each -> cell(part, each)).toList()));
+        }
+        Double ammonia = water.ammonia() == null ? null : form.ammoniaMgL();
+        if (ammonia != null) {
+            rows.add(new Row(
+                    "un-ionised ammonia, mg/L as NH\u2083",
+                    waters.values().stream().map(each -> toxic(each, ammonia)).toList()));
         }
         rows.add(new Row(
                 "temperature, \u00b0C",
@@ -56,12 +75,12 @@ final class CalculatorBecomes {
                                     Words.number(each.state().conditions().salinity(), 1), ""))
                             .toList()));
         }
-        return new Becomes(List.copyOf(waters.keySet()), rows, cautions(water));
+        return new Becomes(List.copyOf(waters.keySet()), rows, cautions(water, waters.values(), ammonia));
     }
 
-    private static void add(Map<String, Water> waters, String head, @Nullable Treated treated) {
+    private static void add(Map<String, Water> waters, String head, @Nullable Treated treated, boolean mixed) {
         if (treated != null) {
-            waters.put(head, new Water(treated.state(), treated.uncertainty()));
+            waters.put(head, new Water(treated.state(), treated.uncertainty(), mixed));
         }
     }
 
@@ -74,11 +93,27 @@ final class CalculatorBecomes {
         return new Cell(rounded.value(), rounded.plusMinus());
     }
 
+    private static Cell toxic(Water water, double totalMgL) {
+        return new Cell(
+                !water.mixed() && water.nh3MgL(totalMgL) instanceof Figure.Known nh3
+                        ? Rounded.small(nh3.value())
+                        : "not known",
+                "");
+    }
+
     /** Those that the water itself does not carry already. */
-    private static List<String> cautions(CalculatedWater water) {
-        return Stream.of(water.warmed(), water.equilibrated(), water.blended())
+    private static List<String> cautions(CalculatedWater water, Collection<Water> waters, @Nullable Double ammonia) {
+        Stream<Caution> ofStates = Stream.of(water.warmed(), water.equilibrated(), water.blended())
                 .filter(treated -> treated != null)
-                .flatMap(treated -> treated.cautions().stream())
+                .flatMap(treated -> treated.cautions().stream());
+        Stream<Caution> ofAmmonia = ammonia == null
+                ? Stream.of()
+                : waters.stream()
+                        .filter(each -> !each.mixed())
+                        .flatMap(each -> each.nh3MgL(ammonia) instanceof Figure.Known nh3
+                                ? nh3.cautions().stream()
+                                : Stream.of());
+        return Stream.concat(ofStates, ofAmmonia)
                 .filter(caution -> !water.cautions().contains(caution))
                 .map(Caution::detail)
                 .map(CalculatorResult::whole)

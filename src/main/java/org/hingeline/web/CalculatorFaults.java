@@ -19,10 +19,11 @@ final class CalculatorFaults {
             "dic", Quantity.DIC,
             "pco2", Quantity.PCO2,
             "calcium", Quantity.CALCIUM,
-            "ammonia", Quantity.AMMONIA);
+            "ammonia", Quantity.AMMONIA,
+            "blendTemp", Quantity.TEMPERATURE,
+            "blendTa", Quantity.TOTAL_ALKALINITY);
 
-    private static final Map<String, String> UNIT_OF =
-            Map.of("phTemp", "temp", "warmTo", "temp", "blendTemp", "temp", "blendTa", "ta");
+    private static final Map<String, String> UNIT_OF = Map.of("phTemp", "temp", "warmTo", "temp");
     private static final Pattern LONG = Pattern.compile("\\d+\\.\\d{4,}");
 
     private CalculatorFaults() {}
@@ -102,7 +103,7 @@ final class CalculatorFaults {
         if (quantity == null || !detail.matches("(?s)[-\u2212]?\\d.*")) {
             return Words.sentence(detail);
         }
-        UnitChoice unit = new CalculatorUnits(typed).choice(UNIT_OF.getOrDefault(field, field), quantity);
+        UnitChoice unit = CalculatorUnits.of(typed).choice(UNIT_OF.getOrDefault(field, field), quantity);
         String symbol = quantity.unit().symbol();
         return unit.ucum().equals(quantity.unit().ucum())
                 ? detail

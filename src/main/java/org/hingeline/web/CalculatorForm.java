@@ -3,7 +3,6 @@ package org.hingeline.web;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import org.hingeline.measure.Quantity;
 import org.hingeline.measure.UnitChoice;
 import org.hingeline.measure.Units;
@@ -20,6 +19,10 @@ import org.jspecify.annotations.Nullable;
 final class CalculatorForm {
     private static final Map<String, Quantity> QUANTITIES = quantities();
 
+    /** The other water of a blend is told in units of its own; where nothing says which, in those of the first. */
+    private static final Map<String, String> BLEND_UNITS = Map.of(
+            "blendTempUnit", "tempUnit", "blendSaltUnit", "saltUnit", "blendPhUnit", "phUnit", "blendTaUnit", "taUnit");
+
     private final Map<String, String> values;
     private final FieldFaults faults = new FieldFaults();
     private final Typed typed;
@@ -29,8 +32,10 @@ final class CalculatorForm {
     CalculatorForm(Map<String, String> values) {
         this.values = new LinkedHashMap<>(defaults());
         this.values.putAll(values);
+        BLEND_UNITS.forEach((field, first) -> this.values.merge(
+                field, this.values.getOrDefault(first, ""), (own, other) -> own.isBlank() ? other : own));
         typed = new Typed(this.values, faults);
-        units = new CalculatorUnits(typed);
+        units = CalculatorUnits.of(typed);
     }
 
     private static Map<String, Quantity> quantities() {
@@ -127,26 +132,32 @@ final class CalculatorForm {
         return limit;
     }
 
+    /** Total ammonia, mg/L as N; absent when it is not asked about. */
+    @Nullable
+    Double ammoniaMgL() {
+        return units.canonical("ammonia", Quantity.AMMONIA, "0.5");
+    }
+
     /** What is to be worked out; what cannot be read is absent from it, and told by {@link #errors}. */
     WaterWish wish() {
         List<String> pair = pair();
         if (pair.isEmpty()) {
             typed.fault("pair", "choose which two are known");
         }
-        required("temp", "fill in the temperature of the water, for instance 18,5");
+        required("temp", "fill in the temperature of the water, for instance 18.5");
         required("salt", "fill in the salinity, for instance 33, or a conductivity with its unit");
         pair.forEach(field -> required(field, "it is empty. Fill it in, or choose another two above"));
         boolean ph = pair.contains("ph");
         Double salt = units.conductivity
-                ? units.canonical("salt", Quantity.CONDUCTIVITY, "42,9")
-                : units.canonical("salt", Quantity.SALINITY, "33,1");
+                ? units.canonical("salt", Quantity.CONDUCTIVITY, "42.9")
+                : units.canonical("salt", Quantity.SALINITY, "33.1");
         Double phTemperature = ph ? typed.number("phTemp", "25") : null;
         Double warmTo = typed.number("warmTo", "25");
         WaterWish wish = WaterWish.builder()
-                .temperatureC(units.canonical("temp", Quantity.TEMPERATURE, "18,5"))
+                .temperatureC(units.canonical("temp", Quantity.TEMPERATURE, "18.5"))
                 .salinity(units.conductivity ? null : salt)
                 .conductivityMsCm(units.conductivity ? salt : null)
-                .ph(ph ? typed.number("ph", "8,02") : null)
+                .ph(ph ? typed.number("ph", "8.02") : null)
                 .phScale(ph ? typed.text("phUnit") : null)
                 .phTemperatureC(phTemperature == null ? null : (Double) units.temperature.toCanonical(phTemperature))
                 .totalAlkalinityUmolKg(of(pair, "ta", "2350"))
@@ -154,14 +165,14 @@ final class CalculatorForm {
                 .pco2Uatm(of(pair, "pco2", "420"))
                 .phosphateUmolKg(typed.number("phosphate", "1"))
                 .silicateUmolKg(typed.number("silicate", "10"))
-                .calciumMmolKg(units.canonical("calcium", Quantity.CALCIUM, "9,6"))
+                .calciumMmolKg(units.canonical("calcium", Quantity.CALCIUM, "9.6"))
                 .constants(typed.text("constants"))
                 .boron(typed.text("boron"))
                 .uncertainty(uncertainty(pair))
                 .warmToC(warmTo == null ? null : (Double) units.temperature.toCanonical(warmTo))
                 .equilibrateToUatm(typed.number("airTo", "420"))
                 .blendWith(blend())
-                .ammoniaMgL(units.canonical("ammonia", Quantity.AMMONIA, "0,5"))
+                .ammoniaMgL(ammoniaMgL())
                 .build();
         limit();
         return wish;
@@ -181,7 +192,7 @@ final class CalculatorForm {
     private WaterWish.Uncertainty uncertainty(List<String> pair) {
         Double salt = units.salinityPlusMinus();
         return new WaterWish.Uncertainty(
-                pair.contains("ph") ? typed.number("phPm", "0,02") : null,
+                pair.contains("ph") ? typed.number("phPm", "0.02") : null,
                 pair.contains("ta") ? units.plusMinus("ta", Quantity.TOTAL_ALKALINITY) : null,
                 pair.contains("dic") ? units.plusMinus("dic", Quantity.DIC) : null,
                 pair.contains("pco2") ? units.plusMinus("pco2", Quantity.PCO2) : null,
@@ -191,7 +202,7 @@ final class CalculatorForm {
                 typed.empty("calcium") ? null : units.plusMinus("calcium", Quantity.CALCIUM));
     }
 
-    /** The other water, in the units and on the scale of the first; none when nothing of it is filled in. */
+    /** The other water, in its own units and on its own scale; none when nothing of it is filled in. */
     private WaterWish.@Nullable Blend blend() {
         List<String> fields = List.of("blendShare", "blendTemp", "blendSalt", "blendPh", "blendTa");
         if (fields.stream().allMatch(typed::empty)) {
@@ -199,21 +210,15 @@ final class CalculatorForm {
         }
         fields.forEach(field -> required(field, "it is empty; a blend needs all five, or none"));
         Double share = typed.number("blendShare", "30");
-        Double temperature = typed.number("blendTemp", "12");
-        Double salt = typed.number("blendSalt", "28");
-        Double alkalinity = typed.number("blendTa", "1900");
-        Double salinity = salt == null ? null : (Double) units.salinity.toCanonical(salt);
+        CalculatorUnits own = CalculatorUnits.ofBlend(typed);
+        Double salt = own.canonical("blendSalt", own.salinityQuantity(), "28");
         WaterWishBuilder other = WaterWish.builder()
-                .temperatureC(temperature == null ? null : (Double) units.temperature.toCanonical(temperature))
-                .salinity(units.conductivity ? null : salinity)
-                .conductivityMsCm(units.conductivity ? salinity : null)
-                .ph(typed.number("blendPh", "7,8"))
-                .phScale(typed.text("phUnit"))
-                .totalAlkalinityUmolKg(
-                        alkalinity == null
-                                ? null
-                                : (Double) units.of("ta", Quantity.TOTAL_ALKALINITY)
-                                        .toCanonical(alkalinity));
+                .temperatureC(own.canonical("blendTemp", Quantity.TEMPERATURE, "12"))
+                .salinity(own.conductivity ? null : salt)
+                .conductivityMsCm(own.conductivity ? salt : null)
+                .ph(typed.number("blendPh", "7.8"))
+                .phScale(typed.text("blendPhUnit"))
+                .totalAlkalinityUmolKg(own.canonical("blendTa", Quantity.TOTAL_ALKALINITY, "1900"));
         return new WaterWish.Blend(other.build(), share == null ? null : (Double) (share / 100));
     }
 
@@ -225,16 +230,13 @@ final class CalculatorForm {
             Units.find(quantity, typed.text(field + "PmIn")).ifPresent(was -> moveTo(shown, field, was, chosen));
             shown.put(field + "PmIn", chosen.ucum());
         });
-        salinityUnit(typed.text("saltPmIn"))
-                .ifPresent(was -> salinityUnit(typed.text("saltUnit")).ifPresent(chosen -> {
-                    moveTo(shown, "salt", was, chosen);
-                    shown.put("saltPmIn", chosen.ucum());
-                }));
+        CalculatorUnits.ofSalinity(typed.text("saltPmIn"))
+                .ifPresent(was -> CalculatorUnits.ofSalinity(typed.text("saltUnit"))
+                        .ifPresent(chosen -> {
+                            moveTo(shown, "salt", was, chosen);
+                            shown.put("saltPmIn", chosen.ucum());
+                        }));
         return shown;
-    }
-
-    private static Optional<UnitChoice> salinityUnit(String ucum) {
-        return Units.find(Quantity.SALINITY, ucum).or(() -> Units.find(Quantity.CONDUCTIVITY, ucum));
     }
 
     private void moveTo(Map<String, String> shown, String field, UnitChoice was, UnitChoice chosen) {

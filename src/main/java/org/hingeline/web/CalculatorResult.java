@@ -160,11 +160,13 @@ final class CalculatorResult {
         double omega = state.omegaAragonite();
         double u = uncertainty.omegaAragonite().total();
         if (Math.abs(omega - 1) < u) {
-            return "So near 1 that the \u00b1 does not tell whether aragonite, the first shell, dissolves in this water.";
+            return "So near 1 that the \u00b1 does not tell whether aragonite, the stuff of the first shell, dissolves in this"
+                    + " water. Larvae need more than 1: hold it against your own limit.";
         }
         return omega < 1
-                ? "Aragonite, the stuff of the first shell, dissolves in this water."
-                : "Aragonite, the stuff of the first shell, can form in this water: it dissolves only under 1.";
+                ? "Under 1 aragonite, the stuff of the first shell, dissolves, and larvae need more than 1."
+                : "Over 1 aragonite, the stuff of the first shell, does not dissolve; larvae need more than that: hold it"
+                        + " against your own limit.";
     }
 
     private String against() {

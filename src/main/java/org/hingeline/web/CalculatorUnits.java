@@ -8,15 +8,17 @@ import org.hingeline.measure.UnitConversion;
 import org.hingeline.measure.Units;
 import org.hingeline.seawater.ConductivitySalinity;
 import org.hingeline.seawater.Figure;
-import org.hingeline.seawater.VolumeAmount;
+import org.hingeline.seawater.MilleroPoisson1981;
 import org.jspecify.annotations.Nullable;
 
 /**
- * The units chosen in the calculator's form, with the density of its water for those per litre. A unit that is not known
- * counts as the canonical one, and is told.
+ * The units chosen in the calculator's form for a water, with the density of that water for those per litre. A unit that is
+ * not known counts as the canonical one, and is told.
  */
 final class CalculatorUnits {
-    private static final double LITRES_PER_M3 = 1000;
+    private static final double LEAST_C = -2;
+    private static final double MOST_C = 45;
+    private static final double MOST_SALINITY = 50;
 
     final UnitConversion temperature;
     /** Whether the salinity field holds a conductivity. */
@@ -24,18 +26,33 @@ final class CalculatorUnits {
 
     final UnitConversion salinity;
     private final Typed typed;
+    private final String temperatureField;
+    private final String salinityField;
     private final double densityKgM3;
 
-    CalculatorUnits(Typed typed) {
+    private CalculatorUnits(Typed typed, String temperatureField, String salinityField) {
         this.typed = typed;
-        temperature = choice("temp", Quantity.TEMPERATURE).conversion();
-        conductivity = Units.find(Quantity.SALINITY, typed.text("saltUnit")).isEmpty()
-                && Units.find(Quantity.CONDUCTIVITY, typed.text("saltUnit")).isPresent();
-        salinity = choice("salt", salinityQuantity()).conversion();
+        this.temperatureField = temperatureField;
+        this.salinityField = salinityField;
+        temperature = choice(temperatureField, Quantity.TEMPERATURE).conversion();
+        String ofSalinity = typed.text(salinityField + "Unit");
+        conductivity = Units.find(Quantity.SALINITY, ofSalinity).isEmpty()
+                && Units.find(Quantity.CONDUCTIVITY, ofSalinity).isPresent();
+        salinity = choice(salinityField, salinityQuantity()).conversion();
         densityKgM3 = density();
     }
 
-    private Quantity salinityQuantity() {
+    /** Those of the water that is asked about. */
+    static CalculatorUnits of(Typed typed) {
+        return new CalculatorUnits(typed, "temp", "salt");
+    }
+
+    /** Those of the other water of a blend. */
+    static CalculatorUnits ofBlend(Typed typed) {
+        return new CalculatorUnits(typed, "blendTemp", "blendSalt");
+    }
+
+    Quantity salinityQuantity() {
         return conductivity ? Quantity.CONDUCTIVITY : Quantity.SALINITY;
     }
 
@@ -78,18 +95,30 @@ final class CalculatorUnits {
         return standsIn.conversion(densityKgM3).uncertaintyToCanonical(value);
     }
 
-    /** The ± of the salinity field; none when it was for the other of salinity and conductivity. */
+    /**
+     * The ± of the salinity field, canonical; absent when empty. One that stood there for the other of salinity and
+     * conductivity keeps its number, as it does on the page.
+     */
     @Nullable
     Double salinityPlusMinus() {
-        boolean sameKind = typed.empty("saltPmIn")
-                || Units.find(salinityQuantity(), typed.text("saltPmIn")).isPresent();
-        return sameKind ? plusMinus("salt", salinityQuantity()) : null;
+        Double value = typed.number(salinityField + "Pm", "0.1");
+        return value == null
+                ? null
+                : (Double) ofSalinity(typed.text(salinityField + "PmIn"))
+                        .orElse(choice(salinityField, salinityQuantity()))
+                        .conversion()
+                        .uncertaintyToCanonical(value);
+    }
+
+    /** A unit of salinity or of conductivity. */
+    static Optional<UnitChoice> ofSalinity(String ucum) {
+        return Units.find(Quantity.SALINITY, ucum).or(() -> Units.find(Quantity.CONDUCTIVITY, ucum));
     }
 
     /** Of the water at its own temperature; of ordinary seawater as long as temperature and salinity are not known. */
     private double density() {
-        Double t = Typed.parsed(typed.text("temp"));
-        Double s = Typed.parsed(typed.text("salt"));
+        Double t = Typed.parsed(typed.text(temperatureField));
+        Double s = Typed.parsed(typed.text(salinityField));
         if (t == null || s == null) {
             return UnitChoice.TYPICAL_DENSITY_KG_M3;
         }
@@ -98,8 +127,11 @@ final class CalculatorUnits {
         Figure practical =
                 conductivity ? ConductivitySalinity.salinity(given, temperatureC) : new Figure.Known(given, List.of());
         return practical instanceof Figure.Known known
-                        && VolumeAmount.perLitre(1, temperatureC, known.value()) instanceof Figure.Known perLitre
-                ? perLitre.value() * LITRES_PER_M3
+                        && known.value() >= 0
+                        && known.value() <= MOST_SALINITY
+                        && temperatureC >= LEAST_C
+                        && temperatureC <= MOST_C
+                ? MilleroPoisson1981.densityKgM3(temperatureC, known.value())
                 : UnitChoice.TYPICAL_DENSITY_KG_M3;
     }
 }

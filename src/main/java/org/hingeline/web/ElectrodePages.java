@@ -6,13 +6,15 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import org.hingeline.measure.Quantity;
-import org.hingeline.measure.UnitChoice;
-import org.hingeline.measure.Units;
+import java.util.Optional;
+import java.util.stream.Collectors;
+import java.util.stream.Stream;
+import org.hingeline.measure.UnitConversion;
 import org.hingeline.monitor.FieldFaults;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.seawater.Caution;
 import org.hingeline.seawater.Figure;
+import org.hingeline.seawater.InputUncertainty;
 import org.hingeline.seawater.PhScale;
 import org.hingeline.seawater.TrisStandard;
 import org.hingeline.web.view.CalculatorFields;
@@ -29,10 +31,22 @@ final class ElectrodePages {
 
     private static final double POOR = 0.05;
 
+    /** The same of one on the NBS scale: the conversion alone carries the first, and twice that is no rare thing. */
+    private static final double NBS_GOOD = InputUncertainty.PH_ON_NBS_BUFFERS;
+
+    private static final double NBS_POOR = 2 * InputUncertainty.PH_ON_NBS_BUFFERS;
+
     /** How far NBS buffers lie from the total scale, give or take. */
     private static final double NBS_FROM = 0.09;
 
     private static final double NBS_TO = 0.18;
+
+    private static final String REGISTER =
+            "Calibrated in tris it reads the total scale: register the sensor with that scale"
+                    + " in Setup. Left on the NBS scale there, every later pH is about 0.13 wrong.";
+
+    private static final String THERMOMETER =
+            "Check the thermometer too: 1 \u00b0C moves the pH of tris by about 0.03.";
 
     private final PageMaker pages;
 
@@ -69,17 +83,16 @@ final class ElectrodePages {
     private static Finding compared(Map<String, String> values) {
         FieldFaults faults = new FieldFaults();
         Typed typed = new Typed(values, faults);
-        UnitChoice unit = Units.find(Quantity.TEMPERATURE, typed.text("tempUnit"))
-                .orElse(Units.of(Quantity.TEMPERATURE).get(0));
-        Double temperature = required(typed, "temp", "21,5");
+        UnitConversion unit = CalculatorUnits.of(typed).temperature;
+        Double temperature = required(typed, "temp", "21.5");
         Double salinity = required(typed, "salt", "35");
-        Double reading = required(typed, "ph", "8,12");
-        PhScale scale = PhScale.fromWireName(typed.text("phUnit")).orElse(PhScale.TOTAL);
+        Double reading = required(typed, "ph", "8.12");
+        PhScale scale = scale(typed);
         faults.throwIfAny();
         if (temperature == null || salinity == null || reading == null) {
             throw new IllegalStateException("a fault was not told");
         }
-        double temperatureC = unit.conversion().toCanonical(temperature);
+        double temperatureC = unit.toCanonical(temperature);
         Figure standard = TrisStandard.ph(temperatureC, salinity);
         if (standard instanceof Figure.Refused refused) {
             throw new FieldFaultsException(
@@ -90,6 +103,17 @@ final class ElectrodePages {
             throw new FieldFaultsException("ph", refused.detail());
         }
         return finding(standard.orElseThrow(), (Figure.Known) deviation, scale, temperatureC, salinity);
+    }
+
+    private static PhScale scale(Typed typed) {
+        Optional<PhScale> scale = PhScale.fromWireName(typed.text("phUnit"));
+        if (scale.isEmpty()) {
+            typed.fault(
+                    "ph",
+                    "scale \u201c" + typed.text("phUnit") + "\u201d is not known; accepted: "
+                            + Stream.of(PhScale.values()).map(PhScale::wireName).collect(Collectors.joining(", ")));
+        }
+        return scale.orElse(PhScale.TOTAL);
     }
 
     private static @Nullable Double required(Typed typed, String field, String example) {
@@ -103,23 +127,26 @@ final class ElectrodePages {
             double total, Figure.Known deviation, PhScale scale, double temperatureC, double salinity) {
         double off = Math.rint(deviation.value() * 1000) / 1000;
         double size = Math.abs(off);
+        boolean nbs = scale == PhScale.NBS;
         return new Finding(
                 size == 0
                         ? "The electrode reads as it should."
                         : "The electrode reads " + Words.number(size, 3) + (off > 0 ? " too high." : " too low."),
-                size <= GOOD ? Standing.FIT : size <= POOR ? Standing.UNKNOWN : Standing.SHORT,
+                size <= (nbs ? NBS_GOOD : GOOD)
+                        ? Standing.FIT
+                        : size <= (nbs ? NBS_POOR : POOR) ? Standing.UNKNOWN : Standing.SHORT,
                 "pH " + Words.number(scale.fromTotal(total, temperatureC, salinity), 3) + ", "
                         + CalculatorFields.scaleLabel(scale),
                 Words.number(total, 3),
                 (off > 0 ? "+" : "") + Words.number(off, 3),
-                advice(off, scale),
+                nbs ? adviceOnNbs(size) : advice(off),
                 deviation.cautions().stream()
                         .map(Caution::detail)
                         .map(CalculatorResult::whole)
                         .toList());
     }
 
-    private static List<String> advice(double off, PhScale scale) {
+    private static List<String> advice(double off) {
         double size = Math.abs(off);
         if (size <= GOOD) {
             return List.of("Within 0.02, about as good as a glass electrode gets. Use it as it is, and write this down:"
@@ -130,15 +157,35 @@ final class ElectrodePages {
             advice.add("More than 0.02. Rinse, wait until bottle and electrode are at one temperature, and read again."
                     + " If it stays, calibrate the electrode in tris, or count the difference out of its readings and"
                     + " register 0.05 as its \u00b1.");
+            advice.add(REGISTER);
         } else {
             advice.add("More than 0.05. Do not trust its readings: clean the electrode and its junction, let it soak,"
-                    + " calibrate it, and check again. If it still is off with fresh tris, replace it.");
+                    + " calibrate it in tris, and check again. If it still is off with fresh tris, replace it.");
+            advice.add(REGISTER);
         }
-        if (scale != PhScale.NBS && off > NBS_FROM && off < NBS_TO) {
+        if (off > NBS_FROM && off < NBS_TO) {
             advice.add("About 0.13 too high is how an electrode reads that was calibrated in NBS buffers (pH 4, 7, 10)."
                     + " If this one was, choose the NBS scale below, and register the sensor with it.");
         }
-        advice.add("Check the thermometer too: 1 \u00b0C moves the pH of tris by about 0.03.");
+        advice.add(THERMOMETER);
         return advice;
+    }
+
+    /** Tris cannot judge such an electrode better than its readings can be converted: a sound one may be off by 0.1. */
+    private static List<String> adviceOnNbs(double size) {
+        if (size <= NBS_GOOD) {
+            return List.of(
+                    "Within 0.05, which is as near as a reading on the NBS scale can be held against tris. Use it as"
+                            + " it is, and write this down: a drift shows only against the last check.");
+        }
+        return List.of(
+                size <= NBS_POOR
+                        ? "More than 0.05, but the conversion from the NBS scale alone can do that, with a sound electrode"
+                                + " too. Calibrated in tris it would not be needed, and \u03a9 would be surer by far."
+                        : "More than 0.10, which is more than the conversion from the NBS scale usually does. Rinse, clean"
+                                + " the junction, calibrate again in fresh buffers and check again; or calibrate the"
+                                + " electrode in tris, which needs no conversion.",
+                REGISTER,
+                THERMOMETER);
     }
 }

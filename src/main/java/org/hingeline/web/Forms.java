@@ -29,22 +29,17 @@ final class Forms {
         return text == null ? "" : text.strip();
     }
 
-    /** The field's number, absent when empty; a comma is taken for the decimal point, as half the world types it. */
+    /** The field's number as {@link Typed} reads it, absent when empty. */
     static @Nullable Double number(Context ctx, String field, FieldFaults faults) {
         String text = text(ctx, field);
         if (text.isEmpty()) {
             return null;
         }
-        try {
-            double value = Double.parseDouble(text.replace(',', '.').replace('\u2212', '-'));
-            if (Double.isFinite(value)) {
-                return value;
-            }
-        } catch (NumberFormatException e) {
-            // told below
+        Double number = Typed.parsed(text);
+        if (number == null) {
+            faults.add(field, Typed.refusal(text));
         }
-        faults.add(field, "\u201c" + text + "\u201d is not a number");
-        return null;
+        return number;
     }
 
     /** The form as it was sent, each fault beside its field. */

@@ -3,8 +3,6 @@ package org.hingeline.web;
 import io.javalin.config.RoutesConfig;
 import io.javalin.http.Context;
 import java.io.ByteArrayOutputStream;
-import java.io.IOException;
-import java.io.UncheckedIOException;
 import java.time.Duration;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -21,8 +19,6 @@ import tools.jackson.core.JsonGenerator;
 /** {@code /api/v1/seawater}: computes waters out of their numbers, stores nothing. */
 final class SeawaterRoutes {
     private static final Pattern NUMBER = Pattern.compile("[+-]?\\d{1,30}(\\.\\d{1,30})?([eE][+-]?\\d{1,3})?");
-
-    private static final long MOST_THAT_PASSES = 64L << 20;
 
     private final WaterCalculator calculator;
     private final Meters meters;
@@ -52,8 +48,8 @@ final class SeawaterRoutes {
     }
 
     private void states(Context ctx) {
+        byte[] body = Json.bytes(ctx); // before a place is taken: a slow line holds up nobody else
         boolean answered = lists.run(() -> {
-            byte[] body = Json.bytes(ctx);
             long began = System.nanoTime();
             WaterJson.Waters asked = WaterJson.list(body);
             long parseNs = System.nanoTime() - began;
@@ -62,17 +58,7 @@ final class SeawaterRoutes {
             meters.states(asked.each().size(), parseNs, answer.computeNs(), answer.writeNs());
         });
         if (!answered) {
-            letTheBodyPass(ctx);
             throw new ProblemException(503, "Busy", "other lists are being worked on; send it again in a few seconds");
-        }
-    }
-
-    /** Many clients hear an answer only after they have sent all. */
-    private static void letTheBodyPass(Context ctx) {
-        try {
-            ctx.bodyInputStream().skip(MOST_THAT_PASSES);
-        } catch (IOException e) {
-            throw new UncheckedIOException(e);
         }
     }
 

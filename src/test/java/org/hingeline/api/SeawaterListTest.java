@@ -3,8 +3,15 @@ package org.hingeline.api;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.io.IOException;
+import java.net.Socket;
 import java.net.http.HttpResponse;
+import java.nio.charset.StandardCharsets;
+import java.time.Duration;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Locale;
+import java.util.concurrent.locks.LockSupport;
 import java.util.function.IntFunction;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
@@ -46,6 +53,28 @@ class SeawaterListTest extends AskedByViewer {
                 .as(answer.body().substring(0, Math.min(2000, answer.body().length())))
                 .isEqualTo(status);
         return DESCRIPTION.check("POST " + STATES, answer);
+    }
+
+    @Test
+    void lists_that_arrive_slowly_hold_up_no_other() throws IOException {
+        List<Socket> slow = new ArrayList<>();
+        try {
+            for (int i = 0; i < 2; i++) {
+                Socket line = new Socket("127.0.0.1", service.address().getPort());
+                slow.add(line);
+                line.getOutputStream()
+                        .write(("POST " + STATES + " HTTP/1.1\r\nHost: localhost\r\nAuthorization: Bearer " + viewer
+                                        + "\r\nContent-Type: application/json\r\nContent-Length: 1000\r\n\r\n{\"wat")
+                                .getBytes(StandardCharsets.US_ASCII));
+            }
+            LockSupport.parkNanos(Duration.ofMillis(500).toNanos()); // until both are being read
+
+            assertThat(post(list(1, i -> GOOD), 200).get("states")).hasSize(1);
+        } finally {
+            for (Socket line : slow) {
+                line.close();
+            }
+        }
     }
 
     @Test

@@ -5,6 +5,7 @@ import static org.assertj.core.api.Assertions.within;
 import static org.hingeline.web.CalculatorReader.digits;
 import static org.hingeline.web.CalculatorReader.fields;
 import static org.hingeline.web.CalculatorReader.form;
+import static org.hingeline.web.CalculatorReader.plusMinus;
 import static org.hingeline.web.CalculatorReader.query;
 import static org.hingeline.web.CalculatorReader.value;
 import static org.hingeline.web.CalculatorReader.words;
@@ -19,6 +20,7 @@ import java.util.regex.Pattern;
 import org.hingeline.RunningService;
 import org.hingeline.SettableClock;
 import org.hingeline.monitor.Role;
+import org.hingeline.seawater.MilleroPoisson1981;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
@@ -88,12 +90,12 @@ class CalculatorPageTest {
                 "temp; 77; tempUnit; [degF]",
                 "temp; 25,0; tempUnit; Cel",
                 "salt; 35,0; saltUnit; 1",
-                "salt; 53,071; saltUnit; mS/cm",
+                "salt; 53,0710; saltUnit; mS/cm",
                 "salt; 5,3071; saltUnit; S/m",
                 "ta; 2,35369; taUnit; meq/L",
                 "ta; 2 300; taUnit; umol/kg",
                 "ta; 2.3; taUnit; mmol/kg",
-                "ta; 117,782; taUnit; mg/L",
+                "ta; 117,7820; taUnit; mg/L",
                 "ta; 6,5996; taUnit; {dKH}",
                 "ph; 8,1; phUnit; total",
                 "ph; 8.0871; phUnit; seawater",
@@ -166,7 +168,8 @@ class CalculatorPageTest {
     @CsvSource(
             delimiter = ';',
             value = {
-                "temp; warm; “warm” is not a number; 18,5 would be",
+                "temp; warm; “warm” is not a number; 18.5 would be",
+                "ta; 2,350; “2,350” can be read in two ways; write 2350 or 2.350",
                 "temp; ''; fill in the temperature",
                 "temp; 60; 60 cannot be: −2 to 45 °C is accepted",
                 "salt; 51; 51 cannot be: 0 to 50 is accepted",
@@ -196,7 +199,8 @@ class CalculatorPageTest {
         Matcher error = Pattern.compile("id=\"" + id + "-error\">([^<]*)<").matcher(page);
         assertThat(error.find()).as("an error at " + id + " in " + words(page)).isTrue();
         assertThat(error.group(1).replace("-", "−")).contains(why.replace("-", "−"));
-        assertThat(page).contains("Nothing was worked out.").doesNotContain("id=\"state\"");
+        assertThat(page).contains("id=\"state\" tabindex=\"-1\">Nothing was worked out.");
+        assertThat(error.group(1)).doesNotContainPattern("\\d,\\d+ would be");
         assertThat(value(page, field)).isEqualTo(typed);
     }
 
@@ -260,6 +264,42 @@ class CalculatorPageTest {
         assertThat(Double.parseDouble(omega.group(3))).isGreaterThan(Double.parseDouble(omega.group(2)));
         assertThat(omega.group(4)).isEqualTo(omega.group(1));
         assertThat(words).contains("Un-ionised ammonia").contains("US EPA 1989");
+        Matcher toxic = Pattern.compile(
+                        "as NH\u2083 ([\\d.]+) mg/L.*un-ionised ammonia, mg/L as NH\u2083 ([\\d.]+) ([\\d.]+) ([\\d.]+) not known")
+                .matcher(words);
+        assertThat(toxic.find()).as(words).isTrue();
+        assertThat(toxic.group(2)).isEqualTo(toxic.group(1));
+        double warmed = Double.parseDouble(toxic.group(3));
+        double aerated = Double.parseDouble(toxic.group(4));
+        assertThat(warmed).isGreaterThan(Double.parseDouble(toxic.group(2)));
+        assertThat(aerated).isGreaterThan(1.5 * Double.parseDouble(toxic.group(2)));
+    }
+
+    @ParameterizedTest
+    @CsvSource(
+            delimiter = '|',
+            value = {
+                "7.55 | Over 1 aragonite, the stuff of the first shell, does not dissolve; larvae need more than that: hold it against your own limit",
+                "7.1 | dissolves, and larvae need more than 1",
+                "7.41 | Larvae need more than 1: hold it against your own limit"
+            })
+    void no_omega_is_called_enough_for_larvae_only_because_aragonite_lasts(String ph, String said) {
+        assertThat(words(page(form("temp", "25", "salt", "35", "ph", ph, "ta", "2300"), 200)))
+                .contains(said);
+    }
+
+    @Test
+    void a_refused_page_has_the_place_that_its_address_leads_to_once() {
+        String page = page(form("temp", "25", "salt", "35", "ph", "14", "ta", "2300"), 422);
+        assertThat(page.split("id=\"state\"", -1)).hasSize(2);
+        assertThat(page).contains("role=\"alert\" id=\"state\" tabindex=\"-1\"");
+        assertThat(page("/calculator/electrode?temp=25&salt=35&ph=99", 422))
+                .contains("role=\"alert\" id=\"finding\" tabindex=\"-1\"", "#finding");
+    }
+
+    @Test
+    void says_that_the_air_of_a_building_is_not_that_outside() {
+        assertThat(page("/calculator", 200)).contains("in a closed building often 600 to 1000");
     }
 
     @Test
@@ -279,6 +319,156 @@ class CalculatorPageTest {
         assertThat(page).doesNotContain("<script>alert");
     }
 
+    @ParameterizedTest
+    @CsvSource({"ph-ta, total, umol/kg", "ta-dic, , "})
+    void the_other_water_of_a_blend_is_read_in_its_own_units_on_its_own_scale_with_its_own_density(
+            String pair, String firstScale, String firstUnit) {
+        String alone = words(page(
+                form("temp", "10", "salt", "20", "ph", "7.8", "phUnit", "nbs", "ta", "2", "taUnit", "meq/L"), 200));
+        Map<String, String> fields = fields(
+                "pair",
+                pair,
+                "temp",
+                "25",
+                "salt",
+                "35",
+                "ph",
+                "8.1",
+                "ta",
+                "2300",
+                "dic",
+                "1963.436",
+                "blendShare",
+                "100",
+                "blendTemp",
+                "50",
+                "blendTempUnit",
+                "[degF]",
+                "blendSalt",
+                "20",
+                "blendSaltUnit",
+                "1",
+                "blendPh",
+                "7.8",
+                "blendPhUnit",
+                "nbs",
+                "blendTa",
+                "2",
+                "blendTaUnit",
+                "meq/L");
+        if (firstScale != null) {
+            fields.put("phUnit", firstScale);
+            fields.put("taUnit", firstUnit);
+        }
+
+        String page = page(query(fields), 200);
+
+        Matcher alkalinity = Pattern.compile(" total alkalinity (1 9\\d\\d) ").matcher(alone);
+        assertThat(alkalinity.find()).as(alone).isTrue();
+        assertThat(Double.parseDouble(alkalinity.group(1).replace(" ", "")))
+                .isCloseTo(2000 / (MilleroPoisson1981.densityKgM3(10, 20) / 1000), within(0.5));
+        Matcher omega = Pattern.compile("\u03a9 ([\\d.]+) \u00b1").matcher(alone);
+        assertThat(omega.find()).isTrue();
+        assertThat(words(page))
+                .containsPattern(
+                        "\u03a9 aragonite 3\\.7\\d* \u00b1[\\d.]+ " + Pattern.quote(omega.group(1)) + " \u00b1")
+                .containsPattern("total alkalinity, \u00b5mol/kg 2 300 \u00b110 " + alkalinity.group(1) + " \u00b1");
+        assertThat(page).containsPattern("<option value=\"nbs\"[^>]* selected>NBS scale</option>");
+    }
+
+    @Test
+    void a_blend_that_does_not_say_is_in_the_units_and_on_the_scale_of_the_first() {
+        String words = words(page(
+                form(
+                        "temp",
+                        "77",
+                        "tempUnit",
+                        "[degF]",
+                        "salt",
+                        "35",
+                        "ph",
+                        "8.1",
+                        "ta",
+                        "2.3537",
+                        "taUnit",
+                        "meq/L",
+                        "blendShare",
+                        "100",
+                        "blendTemp",
+                        "77",
+                        "blendSalt",
+                        "35",
+                        "blendPh",
+                        "8.1",
+                        "blendTa",
+                        "2.3537"),
+                200));
+
+        assertThat(words)
+                .contains(
+                        "total alkalinity, \u00b5mol/kg 2 300 \u00b110 2 300 \u00b110",
+                        "temperature, \u00b0C 25.0 25.0");
+        assertThat(page(
+                        form(
+                                "temp",
+                                "25",
+                                "salt",
+                                "35",
+                                "ph",
+                                "8.1",
+                                "ta",
+                                "2300",
+                                "blendShare",
+                                "30",
+                                "blendTemp",
+                                "25",
+                                "blendSalt",
+                                "35",
+                                "blendPh",
+                                "8",
+                                "blendPhUnit",
+                                "sour",
+                                "blendTa",
+                                "1",
+                                "blendTaUnit",
+                                "stone"),
+                        422))
+                .contains("id=\"c-blendTa-error\">unit \u201cstone\u201d is not known")
+                .contains("id=\"c-blendPh-error\"");
+    }
+
+    @ParameterizedTest
+    @CsvSource({"mS/cm, 53.0710, 0.5", "S/m, 5.30710, 0.05"})
+    void a_plus_minus_of_salinity_beside_a_conductivity_counts_as_it_is_shown(
+            String unit, String conductivity, String shown) {
+        Map<String, String> fields = fields(
+                "temp",
+                "25",
+                "salt",
+                conductivity,
+                "saltUnit",
+                unit,
+                "saltPm",
+                "0.5",
+                "saltPmIn",
+                "1",
+                "ph",
+                "8.1",
+                "ta",
+                "2300");
+        String page = page(query(fields), 200);
+        assertThat(value(page, "saltPm")).isEqualTo(shown);
+        assertThat(value(page, "saltPmIn")).isEqualTo(unit);
+
+        fields.put("saltPm", shown);
+        fields.put("saltPmIn", unit);
+        String again = words(page(query(fields), 200));
+        assertThat(plusMinus(words(page), "dicUmolKg")).isEqualTo(plusMinus(again, "dicUmolKg"));
+        fields.put("saltPm", "");
+        assertThat(plusMinus(words(page), "dicUmolKg"))
+                .isGreaterThan(plusMinus(words(page(query(fields), 200)), "dicUmolKg"));
+    }
+
     @Test
     void an_electrode_in_tris_is_told_how_far_it_is_off_and_what_to_do() {
         assertThat(page("/calculator/electrode", 200)).contains("Check a pH electrode in tris");
@@ -294,8 +484,43 @@ class CalculatorPageTest {
                 .contains("0.136 too high")
                 .contains("Do not trust its readings")
                 .contains("calibrated in NBS buffers");
+        assertThat(page("/calculator/electrode?temp=warm&salt=&ph=9", 422)).contains("21.5 would be");
         assertThat(page("/calculator/electrode?temp=warm&salt=&ph=99", 422))
                 .contains("“warm” is not a number", "id=\"c-salt-error\"");
+    }
+
+    @Test
+    void an_electrode_that_is_to_be_calibrated_in_tris_is_to_be_registered_on_the_total_scale() {
+        for (String ph : new String[] {"8.06", "8.23"}) {
+            assertThat(words(page("/calculator/electrode?temp=25&salt=35&ph=" + ph + "&phUnit=total", 200)))
+                    .contains(
+                            "in tris",
+                            "register the sensor with that scale in Setup",
+                            "every later pH is about 0.13 wrong");
+        }
+    }
+
+    @ParameterizedTest
+    @CsvSource({
+        "8.18, is-fit, Within 0.05",
+        "8.28, is-unknown, with a sound electrode too",
+        "8.40, is-short, fresh buffers"
+    })
+    void an_electrode_on_nbs_buffers_is_judged_by_what_its_scale_can_tell_and_never_to_be_replaced(
+            String ph, String standing, String advice) {
+        String page = page("/calculator/electrode?temp=25&salt=35&ph=" + ph + "&phUnit=nbs", 200);
+
+        assertThat(page).contains("verdict-of " + standing);
+        assertThat(words(page)).contains(advice).doesNotContain("replace", "Do not trust", "calibrated in NBS buffers");
+        assertThat(words(page).contains("in Setup")).isEqualTo(!standing.equals("is-fit"));
+    }
+
+    @Test
+    void an_electrode_in_a_unit_or_on_a_scale_nobody_offers_is_refused() {
+        assertThat(page("/calculator/electrode?temp=25&tempUnit=stone&salt=35&ph=8.1&phUnit=total", 422))
+                .contains("id=\"c-temp-error\"", "unit “stone” is not known; accepted: Cel");
+        assertThat(page("/calculator/electrode?temp=25&salt=35&ph=8.1&phUnit=sour", 422))
+                .contains("id=\"c-ph-error\"", "scale “sour” is not known; accepted: total");
     }
 
     private static String page(String path, int status) {

@@ -217,6 +217,14 @@ class PointWaterPageTest {
         assertThat(page("/points/larval-1", 200)).doesNotContain("How was this computed?");
     }
 
+    @Test
+    void numbers_tried_on_a_points_water_that_are_refused_lead_to_the_refusal() {
+        String page = page("/calculator?point=larval-3&temp=22&salt=30&ph=14&ta=2080", 422);
+
+        assertThat(page.split("id=\"state\"", -1)).hasSize(2);
+        assertThat(page).contains("role=\"alert\" id=\"state\" tabindex=\"-1\"", "Where each input came from");
+    }
+
     private static String page(String path, int status) {
         HttpResponse<String> answer = answer(path, viewer);
         assertThat(answer.statusCode()).as(() -> words(answer.body())).isEqualTo(status);

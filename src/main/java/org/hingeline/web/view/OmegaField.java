@@ -21,6 +21,8 @@ import org.hingeline.seawater.KnownPh;
  */
 final class OmegaField {
     private static final double MICRO = 1e-6;
+    /** Along a range, when Ω is looked for. */
+    private static final int STEPS = 60;
 
     private final CarbonateState state;
 
@@ -127,27 +129,45 @@ final class OmegaField {
     /** Where along the first quantity Ω is {@code omega}, the second as given; not a number when not within the range. */
     double firstFor(double omega, Range across) {
         double second = secondValue();
-        return crossing(omega, across, first -> at(first, second));
+        return crossing(omega, across, firstValue(), first -> at(first, second));
     }
 
     /** Where along the second quantity Ω is {@code omega}, the first as given; not a number when not within the range. */
     double secondFor(double omega, Range up) {
         double first = firstValue();
-        return crossing(omega, up, second -> at(first, second));
+        return crossing(omega, up, secondValue(), second -> at(first, second));
     }
 
-    /** By halving: Ω rises or falls all the way along any one of the four quantities. */
-    private static double crossing(double omega, Range range, DoubleUnaryOperator along) {
+    /**
+     * The nearest to the water itself. Ω need not rise or fall all the way: with alkalinity fixed it rises with DIC until
+     * about half the alkalinity and falls from there, and some of the range may hold no water; so the range is looked
+     * through in steps.
+     */
+    private static double crossing(double omega, Range range, double here, DoubleUnaryOperator along) {
+        double nearest = Double.NaN;
         double low = range.low();
-        double high = range.high();
         double atLow = along.applyAsDouble(low);
-        double atHigh = along.applyAsDouble(high);
-        if (!((atLow - omega) * (atHigh - omega) <= 0)) {
-            return Double.NaN;
+        for (int step = 1; step <= STEPS; step++) {
+            double high = range.at((double) step / STEPS);
+            double atHigh = along.applyAsDouble(high);
+            if ((atLow - omega) * (atHigh - omega) <= 0) {
+                double found = halved(omega, low, high, along);
+                nearest = Math.abs(found - here) >= Math.abs(nearest - here) ? nearest : found;
+            }
+            low = high;
+            atLow = atHigh;
         }
+        return nearest;
+    }
+
+    /** Between two values of which one gives more than {@code omega} and the other less. */
+    private static double halved(double omega, double from, double to, DoubleUnaryOperator along) {
+        double low = from;
+        double high = to;
+        boolean under = along.applyAsDouble(low) < omega;
         for (int halving = 0; halving < 60; halving++) {
             double middle = (low + high) / 2;
-            boolean likeLow = along.applyAsDouble(middle) < omega == atLow < omega;
+            boolean likeLow = along.applyAsDouble(middle) < omega == under;
             low = likeLow ? middle : low;
             high = likeLow ? high : middle;
         }

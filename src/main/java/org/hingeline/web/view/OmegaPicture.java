@@ -152,8 +152,10 @@ public record OmegaPicture(
     }
 
     private static String summary(OmegaField field, Reading first, Reading second, Range across, Range up) {
-        return "\u03a9 aragonite of waters with " + PictureWords.span(first, across) + " and "
-                + PictureWords.span(second, up) + ", all else as given. " + PictureWords.slopes(field, first, second);
+        return ("\u03a9 aragonite of waters with " + PictureWords.span(first, across) + " and "
+                        + PictureWords.span(second, up) + ", all else as given. "
+                        + PictureWords.slopes(field, first, second))
+                .strip();
     }
 
     private static Scale scale(Reading reading, Range range, boolean upwards) {

@@ -10,7 +10,9 @@ import org.jspecify.annotations.Nullable;
 
 /** Which lines of equal Ω are drawn, and where their labels find room. */
 final class PictureRings {
+    /** Between the rings of waters as they are; beyond them 1, 2 or 5 times a power of ten. */
     private static final double[] STEPS = {0.05, 0.1, 0.25, 0.5, 1, 2, 5, 10};
+
     private static final int MOST = 7;
     private static final double MARGIN = 0.07;
     private static final double MARGIN_OF_WORDS = 0.24;
@@ -57,23 +59,32 @@ final class PictureRings {
         if (span.getCount() == 0) {
             return new double[0];
         }
-        double step = STEPS[STEPS.length - 1];
-        for (double candidate : STEPS) {
-            if ((span.getMax() - span.getMin()) / candidate <= MOST) {
-                step = candidate;
-                break;
-            }
-        }
-        double chosen = step;
-        double least = span.getMin();
-        DoubleStream round = DoubleStream.iterate(
-                (Math.floor(least / chosen) + 1) * chosen, level -> level < span.getMax(), level -> level + chosen);
+        double step = step(span.getMax() - span.getMin());
+        double first = Math.floor(span.getMin() / step) + 1;
+        DoubleStream round = DoubleStream.iterate(first, i -> i + 1)
+                .limit(MOST + 1)
+                .map(i -> i * step)
+                .filter(level -> level < span.getMax());
         return DoubleStream.concat(round, DoubleStream.of(1))
                 .filter(level -> level > span.getMin() && level < span.getMax())
                 .map(level -> Math.rint(level * 100) / 100)
                 .distinct()
                 .sorted()
                 .toArray();
+    }
+
+    /** The first round one that leaves no more than {@link #MOST} rings within the span. */
+    private static double step(double span) {
+        double least = span / MOST;
+        for (double candidate : STEPS) {
+            if (candidate >= least) {
+                return candidate;
+            }
+        }
+        double decade = Math.pow(10, Math.floor(Math.log10(least)));
+        return least <= decade
+                ? decade
+                : least <= 2 * decade ? 2 * decade : least <= 5 * decade ? 5 * decade : 10 * decade;
     }
 
     private void add(double[][] grid, double level, String css, String label, double margin) {

@@ -16,21 +16,33 @@ final class PictureWords {
                 + AxisTicks.reading(range.high(), reading.conversion(), width));
     }
 
-    /** "Ω rises with pH and falls with pCO₂." */
+    /** "Ω rises with pH and falls with pCO₂.": around the water itself; without what cannot be told. */
     static String slopes(OmegaField field, Reading first, Reading second) {
         String one = verb(field.first(), field);
         String other = verb(field.second(), field);
+        if (one.isEmpty() && other.isEmpty()) {
+            return "";
+        }
+        if (one.isEmpty() || other.isEmpty()) {
+            return "\u03a9 " + one + other + " with " + (one.isEmpty() ? second : first).name() + ".";
+        }
         return "\u03a9 " + one + " with " + first.name() + " and " + (one.equals(other) ? "" : other + " ") + "with "
                 + second.name() + ".";
     }
 
+    /** Empty where the next value to either side belongs to no water. */
     private static String verb(Quantity quantity, OmegaField field) {
         boolean first = quantity == field.first();
         double value = first ? field.firstValue() : field.secondValue();
         double step = Math.max(1e-3, 1e-3 * Math.abs(value));
         double here = field.at(field.firstValue(), field.secondValue());
-        double there = first ? field.at(value + step, field.secondValue()) : field.at(field.firstValue(), value + step);
-        return there > here ? "rises" : "falls";
+        double above = at(field, first, value + step) - here;
+        double rise = Double.isNaN(above) ? here - at(field, first, value - step) : above;
+        return Double.isNaN(rise) ? "" : rise > 0 ? "rises" : "falls";
+    }
+
+    private static double at(OmegaField field, boolean first, double value) {
+        return first ? field.at(value, field.secondValue()) : field.at(field.firstValue(), value);
     }
 
     /** "Ω 1.80, your limit, lies at pH 7.78 with this alkalinity, and at alkalinity 2 310 µmol/kg with this pH." */

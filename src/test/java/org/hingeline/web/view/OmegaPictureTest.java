@@ -23,6 +23,7 @@ import org.hingeline.web.view.OmegaPicture.Ring;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 class OmegaPictureTest {
     private static final Conditions WATER = Conditions.of(22, 30);
@@ -143,6 +144,62 @@ class OmegaPictureTest {
 
         assertThat(picture.box().width()).isEqualTo("5.00%"); // 2 x 0.02 of 0.8
         assertThat(picture.box().x()).isEqualTo("47.50%");
+    }
+
+    @Test
+    void however_large_omega_is_a_handful_of_rings_is_drawn() {
+        Conditions rich = new Conditions(
+                25,
+                0,
+                0,
+                0,
+                0.1,
+                Conditions.of(25, 0).fit(),
+                Conditions.of(25, 0).boron());
+        CarbonateState state = CarbonateSystem.solve(rich, new KnownPair.PhAndAlkalinity(10, 0.1))
+                .orElseThrow();
+
+        assertThat(state.omegaAragonite()).isGreaterThan(1000);
+        assertThat(draw(state, null).rings()).hasSizeBetween(2, 20);
+    }
+
+    @ParameterizedTest
+    @ValueSource(doubles = {1e-3, 0.3, 3, 69, 71, 800, 1e5, 1e12, 1e300})
+    void at_most_eight_values_are_told_apart_whatever_the_span(double span) {
+        double[][] slope = new double[41][61];
+        for (double[] row : slope) {
+            for (int column = 0; column < row.length; column++) {
+                row[column] = 0.5 + span * column / 60;
+            }
+        }
+
+        List<Ring> rings = PictureRings.of(slope, null, 0.5, 0.5);
+
+        assertThat(rings).hasSizeLessThanOrEqualTo(9);
+        if (span >= 3) {
+            assertThat(rings).hasSizeGreaterThanOrEqualTo(3);
+        }
+    }
+
+    @Test
+    void finds_the_dic_nearest_to_the_water_where_omega_both_rises_and_falls_with_it() {
+        OmegaField field = new OmegaField(solved(new KnownPair.AlkalinityAndDic(2080e-6, 1500e-6)));
+        Range wide = new Range(50, 2600);
+        double omega = field.at(2080, 1500);
+
+        assertThat(field.at(2080, wide.low())).isLessThan(omega);
+        assertThat(field.at(2080, wide.high())).isLessThan(omega);
+        assertThat(field.secondFor(omega, wide)).isCloseTo(1500, within(1e-6));
+        assertThat(new OmegaField(solved(new KnownPair.AlkalinityAndDic(2080e-6, 700e-6))).secondFor(1.8, wide))
+                .isLessThan(1000);
+    }
+
+    @Test
+    void says_rises_or_falls_of_a_water_at_the_edge_of_what_can_be_and_nothing_it_does_not_know() {
+        CarbonateState edge = solved(new KnownPair.PhAndDic(12.999, 2000e-6));
+
+        assertThat(new OmegaField(edge).at(13.012, 2000)).isNaN();
+        assertThat(draw(edge, null).summary()).contains("\u03a9 rises with pH");
     }
 
     private static Range around(double value) {
