@@ -16,6 +16,7 @@ import org.jspecify.annotations.Nullable;
  * @param omegaAragoniteGain how far the dose lifts Ω; its range leaves out the constants' share, which moves before and
  *     after alike; null unless there is a plan
  * @param steps the additions; empty unless there is a plan
+ * @param stock how to make up the stock; null when no strength was given, or there is no plan
  * @param before the water now; null when there is none
  * @param after the water when all is mixed in, closed to the air; null unless there is a plan
  * @param afterAeration the dosed water in balance with the air it is aerated with; null unless there is a plan
@@ -28,6 +29,7 @@ public record DosePlan(
         @Nullable Amount massG,
         @Nullable Amount omegaAragoniteGain,
         List<DoseStep> steps,
+        @Nullable StockRecipe stock,
         @Nullable CarbonateState before,
         @Nullable CarbonateState after,
         @Nullable CarbonateState afterAeration,
@@ -74,6 +76,7 @@ public record DosePlan(
                 massG,
                 omegaAragoniteGain,
                 steps,
+                stock,
                 before,
                 after,
                 afterAeration,
@@ -87,6 +90,6 @@ public record DosePlan(
             @Nullable CarbonateState before,
             List<Remedy> remedies,
             List<Caution> cautions) {
-        return new DosePlan(outcome, reasons, null, null, List.of(), before, null, null, remedies, cautions);
+        return new DosePlan(outcome, reasons, null, null, List.of(), null, before, null, null, remedies, cautions);
     }
 }

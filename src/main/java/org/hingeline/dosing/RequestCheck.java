@@ -5,7 +5,6 @@ import java.util.List;
 import org.hingeline.seawater.CarbonateResult;
 import org.hingeline.seawater.CarbonateResult.Solved;
 import org.hingeline.seawater.CarbonateResult.Unsolvable;
-import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.Caution;
 import org.hingeline.seawater.Coverage;
 
@@ -15,8 +14,9 @@ final class RequestCheck {
     private static final double AERATION_MIN_ATM = 100e-6;
     private static final double AERATION_MAX_ATM = 5000e-6;
     private static final double ALKALINITY_MAX = 0.01;
-    /** A stock is to stay clear of saturation by a fifth, or it falls out when it cools. */
-    private static final double SOLUBILITY_SHARE = 0.8;
+    private static final double STOCK_MAX_C = 40;
+    private static final double SALINITY_MIN = 1;
+    private static final double SALINITY_MAX = 42;
 
     private final DoseRequest request;
     private final List<Reason> reasons = new ArrayList<>();
@@ -66,6 +66,13 @@ final class RequestCheck {
                                 + " µmol/kg is no water of a hatchery.",
                         "Titrate again: 0 to " + Words.number(ALKALINITY_MAX * 1e6, 0) + " µmol/kg is accepted.");
             }
+            double salinity = solved.state().conditions().salinity();
+            if (!(salinity >= SALINITY_MIN && salinity <= SALINITY_MAX)) {
+                refuse(
+                        "salinity-implausible",
+                        "A salinity of " + Words.number(salinity, 1) + " is no sea water of a hatchery.",
+                        "Check the value and its unit: practical salinity, 1 to 42, not conductivity in mS/cm.");
+            }
             for (Caution caution : Coverage.ofDecisiveFits(solved.state().conditions())) {
                 refuse(
                         "outside-fits",
@@ -86,46 +93,39 @@ final class RequestCheck {
     }
 
     private void product() {
-        if (!(request.assayPercent() >= 1 && request.assayPercent() <= 100)) {
+        Product product = request.product();
+        if (!(product.assayPercent() >= 1 && product.assayPercent() <= 100)) {
             refuse(
                     "assay-implausible",
-                    "An assay of " + request.assayPercent() + " % cannot be.",
+                    "An assay of " + product.assayPercent() + " % cannot be.",
                     "Read the assay from the label or the certificate: 1 to 100 %.");
+        }
+        if (request.larvae() && product.agent().corrosive()) {
+            refuse(
+                    "corrosive-with-larvae",
+                    product.agent().words() + " is labelled corrosive, and larvae are in the water.",
+                    "Use sodium carbonate or bicarbonate, or dose a header tank or storage without larvae.");
         }
     }
 
     private void stock() {
-        Double strength = request.stockGramsPerLitre();
-        if (strength == null) {
+        Stock stock = request.stock();
+        if (stock == null) {
             return;
         }
-        if (!(strength > 0 && Double.isFinite(strength))) {
+        if (!(stock.gramsPerLitre() > 0 && Double.isFinite(stock.gramsPerLitre()))) {
             refuse(
                     "stock-implausible",
-                    "A stock of " + strength + " g/L cannot be.",
+                    "A stock of " + stock.gramsPerLitre() + " g/L cannot be.",
                     "Give the strength of the stock in g per litre, above 0.");
-            return;
         }
-        if (request.water() instanceof Solved solved) {
-            double most = strongestStock(solved.state());
-            if (strength > most) {
-                refuse(
-                        "stock-too-strong",
-                        "A stock of " + Words.number(strength, 1) + " g/L does not stay dissolved at "
-                                + Words.number(solved.state().conditions().temperatureC(), 1)
-                                + " °C, the temperature of the water.",
-                        "Make the stock no stronger than " + Words.number(Math.floor(most), 0) + " g/L.");
-            }
+        Double temperatureC = stock.temperatureC();
+        if (temperatureC != null && !(temperatureC >= 0 && temperatureC <= STOCK_MAX_C)) {
+            refuse(
+                    "stock-implausible",
+                    "A stock at " + temperatureC + " °C cannot be planned for.",
+                    "Give the temperature of the stock, 0 to " + Words.number(STOCK_MAX_C, 0) + " °C.");
         }
-    }
-
-    /** g of what is weighed per L of stock, at the water's temperature; a litre of stock holds less than 1 kg of water. */
-    private double strongestStock(CarbonateState water) {
-        double anhydrousPerLitre = 10
-                * request.agent()
-                        .solubility()
-                        .gramsPer100GWater(water.conditions().temperatureC());
-        return SOLUBILITY_SHARE * anhydrousPerLitre / request.agent().anhydrousShare(request.form());
     }
 
     private void target() {

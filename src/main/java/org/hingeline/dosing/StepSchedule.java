@@ -31,7 +31,7 @@ final class StepSchedule {
         int fewest = Math.max(1, (int) Math.ceil(whole / bounds.phPerHourMax()));
         for (int n = fewest; n <= Math.min(STEPS_MAX, units); n++) {
             List<DoseStep> steps = split(units, n);
-            if (keepsTheStep(steps)) {
+            if (keepsTheBounds(steps)) {
                 return Optional.of(steps);
             }
         }
@@ -76,10 +76,12 @@ final class StepSchedule {
         return low;
     }
 
-    private boolean keepsTheStep(List<DoseStep> steps) {
+    private boolean keepsTheBounds(List<DoseStep> steps) {
         double ph = water.before().phTotal();
         for (DoseStep step : steps) {
-            if (Math.abs(step.phTotal() - ph) > bounds.phPerHourMax()) {
+            if (Math.abs(step.phTotal() - ph) > bounds.phPerHourMax()
+                    || step.phTotal() > bounds.phTotalMax()
+                    || step.omegaAragonite() > bounds.omegaAragoniteMax()) {
                 return false;
             }
             ph = step.phTotal();

@@ -7,11 +7,16 @@ import org.hingeline.dosing.Bounds;
 import org.hingeline.dosing.DosePlan;
 import org.hingeline.dosing.DosePlanner;
 import org.hingeline.dosing.DoseRequest;
+import org.hingeline.dosing.Product;
 import org.hingeline.dosing.Receiver;
+import org.hingeline.dosing.Stock;
 import org.hingeline.dosing.Target;
 import org.hingeline.hatchery.Point;
+import org.hingeline.hatchery.PointKind;
 import org.hingeline.hatchery.Site;
 import org.hingeline.measure.Quantity;
+import org.hingeline.seawater.CarbonateResult;
+import org.hingeline.seawater.CarbonateResult.Solved;
 import org.hingeline.seawater.Caution;
 import org.jspecify.annotations.Nullable;
 
@@ -78,6 +83,10 @@ public final class DoseDesk {
                 "agent/assayPercent", wish.agent() == null ? null : wish.agent().assayPercent(), 100, faults);
         Bounds bounds = bounds(wish.bounds(), faults);
         double stock = number("stockGramsPerLitre", wish.stockGramsPerLitre(), defaults.stockGramsPerLitre(), faults);
+        Double stockC = wish.stockTemperatureC();
+        if (stockC != null && !(stockC >= 0 && stockC <= 40)) {
+            faults.add("stockTemperatureC", "stockTemperatureC " + stockC + " must be 0 to 40 °C");
+        }
         double air = number("aerateToUatm", wish.aerateToUatm(), defaults.aerateToUatm(), faults);
         if (!(air >= 100 && air <= 5000)) {
             faults.add("aerateToUatm", "aerateToUatm " + air + " must be 100 to 5000 \u00b5atm");
@@ -89,18 +98,16 @@ public final class DoseDesk {
         if (water == null || target == null || agent == null || form == null || bounds == null || volumeL == null) {
             throw new IllegalStateException("a fault was not told");
         }
-        DosePlan plan = DosePlanner.plan(new DoseRequest(
-                water.result(),
-                water.uncertainty(),
-                water.notes(),
-                new Receiver.Tank(volumeL),
-                target,
-                agent,
-                form,
-                assay,
-                bounds,
-                stock,
-                air * 1e-6));
+        Product product = new Product(agent, form, assay);
+        DosePlan plan =
+                DosePlanner.plan(DoseRequest.of(water.result(), water.uncertainty(), new Receiver.Tank(volumeL), target)
+                        .inputNotes(water.notes())
+                        .product(product)
+                        .bounds(bounds)
+                        .stock(stock(wish, product, stock, stockC, water.result()))
+                        .aerationPco2Atm(air * 1e-6)
+                        .larvae(larvae(wish, status))
+                        .build());
         if (plan.outcome() != DosePlan.Outcome.PLAN) {
             return plan;
         }
@@ -108,6 +115,30 @@ public final class DoseDesk {
             plan = plan.withCaution(caution);
         }
         return status.flatMap(DoseDesk::aboutAlkalinity).map(plan::withCaution).orElse(plan);
+    }
+
+    /** As wished; the setting is for soda ash, and what dissolves less takes the strongest stock that stays dissolved. */
+    private static Stock stock(
+            DoseWish wish,
+            Product product,
+            double gramsPerLitre,
+            @Nullable Double temperatureC,
+            @Nullable CarbonateResult water) {
+        if (wish.stockGramsPerLitre() != null || !(water instanceof Solved solved)) {
+            return new Stock(gramsPerLitre, temperatureC);
+        }
+        double most = product.strongestStockGramsPerLitre(
+                temperatureC == null ? solved.state().conditions().temperatureC() : temperatureC);
+        return new Stock(Math.min(gramsPerLitre, most), temperatureC);
+    }
+
+    /** Of a larval tank nobody has to say that larvae are in it; that there are none, somebody has. */
+    private static boolean larvae(DoseWish wish, Optional<PointStatus> status) {
+        Boolean said = wish.larvaeInWater();
+        return said != null
+                ? said
+                : status.map(s -> s.batch().isPresent() || s.point().kind() == PointKind.LARVAL)
+                        .orElse(false);
     }
 
     /** The plan stands on an alkalinity that a dose or an exchange of water since then has changed. */
@@ -180,11 +211,17 @@ public final class DoseDesk {
         String accepted =
                 String.join(", ", agent.forms().stream().map(Agent.Form::code).toList());
         String hydration = wish == null ? null : wish.hydration();
+        if (hydration == null && agent.forms().size() == 1) {
+            return agent.forms().get(0);
+        }
         if (hydration == null) {
             faults.add(
                     "agent/hydration",
-                    "hydration is missing: decahydrate taken for anhydrous gives 2.7 times too little. Read the label;"
-                            + " accepted: " + accepted);
+                    "hydration is missing: "
+                            + (agent.equals(Agent.SODIUM_CARBONATE)
+                                    ? "decahydrate taken for anhydrous gives 2.7 times too little. "
+                                    : "")
+                            + "Read the label; accepted: " + accepted);
             return null;
         }
         Optional<Agent.Form> form = agent.form(hydration);

@@ -8,6 +8,9 @@ import org.jspecify.annotations.Nullable;
  * @param point code of the tank whose water is meant; either this or {@code water}
  * @param water a water given by its numbers, without wishes about what it becomes
  * @param volumeL of the tank, L; of the point where absent
+ * @param stockTemperatureC of the stock, °C; of the water where absent
+ * @param larvaeInWater whether larvae are in the water that is dosed; where absent, so it is in a larval tank and where a
+ *     batch is
  */
 public record DoseWish(
         @Nullable String point,
@@ -17,7 +20,22 @@ public record DoseWish(
         @Nullable Agent agent,
         @Nullable Bounds bounds,
         @Nullable Double stockGramsPerLitre,
-        @Nullable Double aerateToUatm) {
+        @Nullable Double stockTemperatureC,
+        @Nullable Double aerateToUatm,
+        @Nullable Boolean larvaeInWater) {
+
+    /** A wish for a tank that says nothing more. */
+    public DoseWish(
+            @Nullable String point,
+            @Nullable WaterWish water,
+            @Nullable Double volumeL,
+            @Nullable Target target,
+            @Nullable Agent agent,
+            @Nullable Bounds bounds,
+            @Nullable Double stockGramsPerLitre,
+            @Nullable Double aerateToUatm) {
+        this(point, water, volumeL, target, agent, bounds, stockGramsPerLitre, null, aerateToUatm, null);
+    }
 
     /** Exactly one of them. */
     public record Target(

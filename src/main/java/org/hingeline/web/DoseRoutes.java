@@ -41,6 +41,7 @@ final class DoseRoutes {
         json.put("massHighG", mass == null ? null : mass.high());
         json.put("omegaAragoniteGain", plan.omegaAragoniteGain());
         json.put("steps", plan.steps().stream().map(DoseRoutes::step).toList());
+        json.put("stock", plan.stock());
         json.put("before", state(plan.before()));
         json.put("after", state(plan.after()));
         json.put("afterAeration", state(plan.afterAeration()));

@@ -15,6 +15,8 @@ import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 import tools.jackson.databind.JsonNode;
 
 /** Dose plans asked for through HTTP. */
@@ -103,6 +105,66 @@ class DosePlanTest {
         JsonNode plan = plan(OF_A_WATER, 200);
         assertThat(plan.get("outcome").asString()).isEqualTo("plan");
         assertThat(plan.get("massG").asDouble()).isCloseTo(37, within(1.0));
+    }
+
+    /** 22 °C, salinity 30, TA 2078 µmol/kg, pCO2 900 µatm, in a volume that the balance hardly rounds. */
+    private static String worked(String agent, String target) {
+        return """
+                {"water":{"temperatureC":22,"salinity":30,"pco2Uatm":900,"totalAlkalinityUmolKg":2078},
+                 "volumeL":290000,"target":%s,"agent":{"code":"%s","hydration":"anhydrous"},
+                 "bounds":{"phTotalMax":9,"omegaAragoniteMax":7}}""".formatted(target, agent);
+    }
+
+    @ParameterizedTest
+    @CsvSource({"sodium-carbonate, 7.845, 1.830", "sodium-bicarbonate, 7.706, 1.379", "sodium-hydroxide, 7.965, 2.317"})
+    void a_hundred_umol_kg_of_each_agent_lead_where_the_worked_case_says(String agent, double ph, double omega) {
+        JsonNode plan = plan(worked(agent, "{\"totalAlkalinityUmolKg\":2178}"), 200);
+        assertThat(plan.get("outcome").asString()).isEqualTo("plan");
+        assertThat(plan.at("/before/phTotal").asDouble()).isCloseTo(7.7144, within(0.00005));
+        assertThat(plan.at("/before/dicUmolKg").asDouble()).isCloseTo(1983.4, within(0.05));
+        assertThat(plan.at("/before/omegaAragonite").asDouble()).isCloseTo(1.336, within(0.0005));
+        // half a unit of the last digit, and the balance: 1 g is 0.05 µmol/kg of alkalinity
+        assertThat(plan.at("/after/phTotal").asDouble()).isCloseTo(ph, within(0.0006));
+        assertThat(plan.at("/after/omegaAragonite").asDouble()).isCloseTo(omega, within(0.0008));
+        assertThat(plan.at("/remedies/0/reaches/phTotal").asDouble()).isCloseTo(8.006, within(0.0005));
+        assertThat(plan.at("/remedies/0/reaches/omegaAragonite").asDouble()).isCloseTo(2.388, within(0.0005));
+    }
+
+    @ParameterizedTest
+    @CsvSource({"sodium-carbonate, 312.3, 8.050, 430", "sodium-hydroxide, 163.6, 8.086, 365"})
+    void omega_three_takes_what_the_worked_case_says(String agent, double added, double ph, double pco2) {
+        JsonNode plan = plan(worked(agent, "{\"omegaAragonite\":3.0}"), 200);
+        assertThat(plan.at("/after/totalAlkalinityUmolKg").asDouble() - 2078).isCloseTo(added, within(0.1));
+        assertThat(plan.at("/after/phTotal").asDouble()).isCloseTo(ph, within(0.0006));
+        assertThat(plan.at("/after/pco2Uatm").asDouble()).isCloseTo(pco2, within(0.8));
+    }
+
+    @Test
+    void bicarbonate_for_omega_three_is_refused_with_what_it_would_take() {
+        JsonNode plan = plan(worked("sodium-bicarbonate", "{\"omegaAragonite\":3.0}"), 200);
+        assertRefused(plan, "agent-cannot-reach");
+        assertThat(plan.at("/reasons/0/detail").asString()).contains("4143 µmol/kg", "pH 7.57", "3871 µatm");
+    }
+
+    @Test
+    void no_corrosive_agent_is_planned_for_a_larval_tank_unless_somebody_says_that_it_is_empty() {
+        water(7.8);
+        String caustic = OF_A_POINT.replace("sodium-carbonate", "sodium-hydroxide");
+        assertRefused(plan(caustic, 200), "corrosive-with-larvae");
+        JsonNode empty = plan(caustic.replace("{\"point\"", "{\"larvaeInWater\":false,\"point\""), 200);
+        assertThat(empty.get("outcome").asString()).isEqualTo("plan");
+    }
+
+    @Test
+    void lime_without_a_stock_given_is_made_up_as_strong_as_it_dissolves() {
+        JsonNode plan = plan(
+                OF_A_WATER.replace(
+                        "{\"hydration\":\"anhydrous\"}", "{\"code\":\"calcium-hydroxide\"},\"stockTemperatureC\":20"),
+                200);
+        assertThat(plan.get("outcome").asString()).isEqualTo("plan");
+        assertThat(plan.at("/stock/gramsPerLitre").asDouble()).isCloseTo(1.318, within(0.001));
+        assertThat(plan.at("/stock/litres").asDouble())
+                .isCloseTo(plan.get("massG").asDouble() / 1.318, within(0.05));
     }
 
     @Test
