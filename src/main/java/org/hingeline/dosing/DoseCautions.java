@@ -2,9 +2,11 @@ package org.hingeline.dosing;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalDouble;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.Caution;
 import org.hingeline.seawater.CleggWhitfield1995;
+import org.jspecify.annotations.Nullable;
 
 /** What a person should know before putting a chemical into water with animals in it. */
 final class DoseCautions {
@@ -17,14 +19,27 @@ final class DoseCautions {
         this.request = request;
     }
 
-    static List<Caution> of(DoseRequest request, CarbonateState before, CarbonateState after, double massG) {
+    static List<Caution> of(DoseRequest request, DosedWater water, CarbonateState after, double... massesG) {
         DoseCautions all = new DoseCautions(request);
         all.add(
                 "suggestion",
                 "This is a suggestion from a calculation: a person who knows the tank confirms it first.");
-        all.cautions.addAll(ProductCautions.of(request.product(), request.stock()));
-        all.inTheWater(before, after);
-        all.stock(massG);
+        for (int i = 0; i < massesG.length; i++) {
+            ProductCautions.of(water.products().get(i), request.stockOf(i)).stream()
+                    .filter(c -> !all.cautions.contains(c))
+                    .forEach(all.cautions::add);
+        }
+        if (massesG.length > 1) {
+            all.add(
+                    "two-products",
+                    "Make up and add the two products apart, each as its own stock, in the same steps.");
+        }
+        all.inTheWater(water.before(), after);
+        all.flow();
+        for (int i = 0; i < massesG.length; i++) {
+            all.plume(water.before(), water.products().get(i), request.stockOf(i));
+            all.stock(request.stockOf(i), massesG[i]);
+        }
         return all.cautions;
     }
 
@@ -32,10 +47,6 @@ final class DoseCautions {
         add(
                 "add-slowly",
                 "Add it slowly to strong flow, away from larvae: rather to a header tank than to the larvae's own.");
-        add(
-                "plume",
-                "Where the stock enters, the water passes the thresholds of precipitation long before the tank's mean"
-                        + " does. If it turns cloudy, stop: a runaway takes more alkalinity than was added.");
         add(
                 "measure-between",
                 "Mix for three turnovers and measure pH before each next addition; stop when it is not what the plan expects.");
@@ -64,10 +75,50 @@ final class DoseCautions {
                 state.conditions().salinity());
     }
 
-    private void stock(double massG) {
-        Stock stock = request.stock();
+    private void flow() {
+        if (request.receiver() instanceof Receiver.Tank) {
+            return;
+        }
+        add(
+                "flow-interlock",
+                "Measure the flow first, and let the injection stop by itself when the flow stops: undiluted stock in a"
+                        + " line is a danger to larvae and people.");
+        if (request.receiver() instanceof Receiver.FlowThrough through) {
+            add(
+                    "washout",
+                    "What flows in is counted as like the water in the tank now. Without make-up half of the dose is"
+                            + " washed out after " + Words.number(through.halfLifeMinutes(), 0) + " min, and "
+                            + Words.number(100 * through.leftAfter(60), 0) + " % of it is left after an hour.");
+        }
+    }
+
+    private void plume(CarbonateState before, Product product, @Nullable Stock stock) {
+        StringBuilder detail = new StringBuilder("Where the stock enters, the water passes the thresholds of"
+                + " precipitation long before the tank's mean does.");
+        if (stock != null) {
+            DosedWater water = new DosedWater(before, request, List.of(product), Mix.OF_FIRST);
+            Plume plume = Plume.of(water, stock);
+            OptionalDouble calm = plume.litresPerLitreTo(Plume.OMEGA_ARAGONITE_FORMS);
+            OptionalDouble spontaneous = plume.litresPerLitreTo(Plume.OMEGA_SPONTANEOUS);
+            if (calm.isPresent()) {
+                detail.append(" A litre of stock of " + product.agent().words() + " needs "
+                        + Words.number(Math.ceil(calm.getAsDouble()), 0)
+                        + " L of this water around it before Ω aragonite is down to 7, above which aragonite forms");
+                if (spontaneous.isPresent()) {
+                    detail.append(" (" + Words.number(Math.ceil(spontaneous.getAsDouble()), 0)
+                            + " L to 12.3, where it forms by itself)");
+                }
+                detail.append(": let it into a stream that carries so many times as much.");
+            }
+        }
+        add("plume", detail + " If it turns cloudy, stop: a runaway takes more alkalinity than was added.");
+    }
+
+    private void stock(@Nullable Stock stock, double massG) {
         if (stock == null) {
-            add("no-stock-given", "No stock strength was given: its solubility was not checked.");
+            if (cautions.stream().noneMatch(c -> c.code().equals("no-stock-given"))) {
+                add("no-stock-given", "No stock strength was given: its solubility was not checked.");
+            }
             return;
         }
         double share = massG / stock.gramsPerLitre() / request.receiver().litresDosed();

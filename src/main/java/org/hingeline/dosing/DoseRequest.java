@@ -20,6 +20,7 @@ import org.jspecify.annotations.Nullable;
  * @param stock the solution it is added as; null when none is given
  * @param aerationPco2Atm what aeration reaches, atm
  * @param larvae whether larvae are in the water that is dosed
+ * @param companion a second agent, to hold pH or pCO2 with; null for one agent alone
  */
 public record DoseRequest(
         @Nullable CarbonateResult water,
@@ -31,7 +32,8 @@ public record DoseRequest(
         Bounds bounds,
         @Nullable Stock stock,
         double aerationPco2Atm,
-        boolean larvae) {
+        boolean larvae,
+        @Nullable Companion companion) {
     /** 420 µatm, today's air. */
     public static final double AIR_PCO2_ATM = 420e-6;
 
@@ -58,6 +60,20 @@ public record DoseRequest(
                 .bounds(bounds)
                 .stock(stock)
                 .aerationPco2Atm(aerationPco2Atm)
-                .larvae(larvae);
+                .larvae(larvae)
+                .companion(companion);
+    }
+
+    /** What may be weighed: one product, or two. */
+    List<Product> products() {
+        Companion second = companion;
+        return second == null ? List.of(product) : List.of(product, second.product());
+    }
+
+    /** The stock of the first product (0) or the second (1). */
+    @Nullable
+    Stock stockOf(int index) {
+        Companion second = companion;
+        return index == 0 ? stock : second == null ? null : second.stock();
     }
 }

@@ -17,6 +17,7 @@ public final class DoseRequestBuilder {
     private @Nullable Stock stock;
     private double aerationPco2Atm = DoseRequest.AIR_PCO2_ATM;
     private boolean larvae;
+    private @Nullable Companion companion;
 
     DoseRequestBuilder(
             @Nullable CarbonateResult water, InputUncertainty uncertainty, Receiver receiver, Target target) {
@@ -76,8 +77,23 @@ public final class DoseRequestBuilder {
         return this;
     }
 
+    public DoseRequestBuilder companion(@Nullable Companion given) {
+        companion = given;
+        return this;
+    }
+
     public DoseRequest build() {
         return new DoseRequest(
-                water, uncertainty, inputNotes, receiver, target, product, bounds, stock, aerationPco2Atm, larvae);
+                water,
+                uncertainty,
+                inputNotes,
+                receiver,
+                target,
+                product,
+                bounds,
+                stock,
+                aerationPco2Atm,
+                larvae,
+                companion);
     }
 }

@@ -1,5 +1,6 @@
 package org.hingeline.dosing;
 
+import java.util.List;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.CarbonateSystem;
 import org.hingeline.seawater.Conditions;
@@ -8,55 +9,113 @@ import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
 
 /**
- * A body of water and what a product makes of it, closed to the air: alkalinity, inorganic carbon and calcium add up, all
- * else follows. The water of the stock solution is not counted.
+ * A body of water and what one product, or two in a fixed proportion, make of it, closed to the air: alkalinity, inorganic
+ * carbon and calcium add up, all else follows. The water of the stock solution is not counted.
  */
 final class DosedWater {
     private final CarbonateState before;
-    private final Product product;
+    private final List<Product> products;
+    private final double[] molPerAlkalinity;
     private final double kilograms;
     private final double aerationPco2Atm;
 
+    /** With the first product alone. */
     DosedWater(CarbonateState before, DoseRequest request) {
+        this(before, request, List.of(request.product()), Mix.OF_FIRST);
+    }
+
+    DosedWater(CarbonateState before, DoseRequest request, List<Product> products, Mix mix) {
         this.before = before;
-        this.product = request.product();
+        this.products = List.copyOf(products);
         this.kilograms = request.receiver().litresDosed() / 1000 * before.densityKgM3();
         this.aerationPco2Atm = request.aerationPco2Atm();
+        this.molPerAlkalinity = new double[products.size()];
+        double alkalinity = 0;
+        for (int i = 0; i < molPerAlkalinity.length; i++) {
+            alkalinity += mix.of(i) * products.get(i).agent().alkalinityPerMol();
+        }
+        for (int i = 0; i < molPerAlkalinity.length; i++) {
+            molPerAlkalinity[i] = mix.of(i) / alkalinity;
+        }
     }
 
     CarbonateState before() {
         return before;
     }
 
-    /** Alkalinity that a mass in g adds, mol/kg-seawater. */
-    double alkalinityOf(double massG) {
-        return massG * product.molPerGram() * product.agent().alkalinityPerMol() / kilograms;
+    List<Product> products() {
+        return products;
     }
 
-    /** The mass in g that adds that much alkalinity, mol/kg-seawater. */
-    double massOf(double alkalinity) {
-        return alkalinity * kilograms / (product.molPerGram() * product.agent().alkalinityPerMol());
+    /** The mass in g of a product when all add that much alkalinity, mol/kg-seawater. */
+    double massOf(int product, double alkalinity) {
+        return alkalinity
+                * molPerAlkalinity[product]
+                * kilograms
+                / products.get(product).molPerGram();
     }
 
-    /** The water with that much alkalinity added by the agent, mol/kg-seawater. */
+    /** The water with that much alkalinity added, mol/kg-seawater. */
     CarbonateState with(double alkalinity) {
-        double mol = alkalinity / product.agent().alkalinityPerMol();
-        return solve(
-                mol,
-                new AlkalinityAndDic(
-                        before.totalAlkalinity() + alkalinity,
-                        before.dic() + mol * product.agent().dicPerMol()));
+        return closed(mols(alkalinity));
     }
 
     /** The water with that much alkalinity added, then aerated. */
     CarbonateState aeratedWith(double alkalinity) {
-        return solve(
-                alkalinity / product.agent().alkalinityPerMol(),
-                new AlkalinityAndPco2(before.totalAlkalinity() + alkalinity, aerationPco2Atm));
+        return aerated(mols(alkalinity));
     }
 
-    private CarbonateState solve(double mol, KnownPair known) {
-        double calcium = mol * product.agent().calciumPerMol();
+    /** The water with a mass of each product, g. */
+    CarbonateState withMasses(double... grams) {
+        return closed(molsOf(grams));
+    }
+
+    /** The water with a mass of each product, g, then aerated. */
+    CarbonateState aeratedWithMasses(double... grams) {
+        return aerated(molsOf(grams));
+    }
+
+    private double[] mols(double alkalinity) {
+        double[] mols = molPerAlkalinity.clone();
+        for (int i = 0; i < mols.length; i++) {
+            mols[i] *= alkalinity;
+        }
+        return mols;
+    }
+
+    private double[] molsOf(double... grams) {
+        double[] mols = grams.clone();
+        for (int i = 0; i < mols.length; i++) {
+            mols[i] *= products.get(i).molPerGram() / kilograms;
+        }
+        return mols;
+    }
+
+    private CarbonateState closed(double[] mols) {
+        double dic = before.dic();
+        for (int i = 0; i < mols.length; i++) {
+            dic += mols[i] * products.get(i).agent().dicPerMol();
+        }
+        return solve(mols, new AlkalinityAndDic(alkalinity(mols), dic));
+    }
+
+    private CarbonateState aerated(double[] mols) {
+        return solve(mols, new AlkalinityAndPco2(alkalinity(mols), aerationPco2Atm));
+    }
+
+    private double alkalinity(double[] mols) {
+        double alkalinity = before.totalAlkalinity();
+        for (int i = 0; i < mols.length; i++) {
+            alkalinity += mols[i] * products.get(i).agent().alkalinityPerMol();
+        }
+        return alkalinity;
+    }
+
+    private CarbonateState solve(double[] mols, KnownPair known) {
+        double calcium = 0;
+        for (int i = 0; i < mols.length; i++) {
+            calcium += mols[i] * products.get(i).agent().calciumPerMol();
+        }
         Conditions conditions = before.conditions();
         return CarbonateSystem.solve(
                         before.constants(),

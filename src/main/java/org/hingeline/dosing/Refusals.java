@@ -1,5 +1,7 @@
 package org.hingeline.dosing;
 
+import java.util.ArrayList;
+import java.util.List;
 import org.hingeline.seawater.CarbonateState;
 
 /** The reasons against a dose for a water that could be dosed, in words. */
@@ -68,12 +70,18 @@ final class Refusals {
                         + ": ask for less; the bounds are the site's to edit.");
     }
 
-    static Reason notWeighable(DoseRequest request, double massG, Balance balance) {
+    static Reason notWeighable(DoseRequest request, double... massesG) {
+        List<String> doses = new ArrayList<>();
+        for (double massG : massesG) {
+            doses.add(Words.number(massG, 3) + " g in whole units of "
+                    + Balance.forLoad(massG).grams(1) + " g");
+        }
         return new Reason(
                 "no-steps",
-                "The dose of " + Words.number(massG, 3) + " g cannot be split into at most " + StepSchedule.STEPS_MAX
-                        + " hourly additions of whole units of " + balance.grams(1) + " g that keep to "
-                        + request.bounds().phPerHourMax() + " pH per hour.",
+                "The dose of " + String.join(" and ", doses) + " cannot be split into at most "
+                        + StepSchedule.STEPS_MAX + " hourly steps that keep to "
+                        + request.bounds().phPerHourMax() + " pH per hour and "
+                        + request.bounds().words() + ".",
                 "Dose a larger volume, ask for less, aerate first, or have the site's bound on pH per hour edited.");
     }
 
@@ -88,8 +96,11 @@ final class Refusals {
     }
 
     private static String amount(DosedWater water, double alkalinity) {
-        return Words.number(alkalinity * 1e6, 0) + " µmol/kg of alkalinity (" + Words.mass(water.massOf(alkalinity))
-                + ")";
+        List<String> masses = new ArrayList<>();
+        for (int i = 0; i < water.products().size(); i++) {
+            masses.add(Words.mass(water.massOf(i, alkalinity)));
+        }
+        return Words.number(alkalinity * 1e6, 0) + " µmol/kg of alkalinity (" + String.join(" and ", masses) + ")";
     }
 
     private static String uatm(CarbonateState state) {

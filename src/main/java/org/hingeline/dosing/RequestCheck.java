@@ -11,6 +11,8 @@ import org.hingeline.seawater.Coverage;
 /** Everything that refuses a request before any dose is looked for; all reasons are given at once. */
 final class RequestCheck {
     private static final double VOLUME_MAX_L = 1e7;
+    private static final double FLOW_MAX_L_MIN = 1e6;
+    private static final double HOLD_PCO2_MAX_ATM = 10_000e-6;
     private static final double AERATION_MIN_ATM = 100e-6;
     private static final double AERATION_MAX_ATM = 5000e-6;
     private static final double ALKALINITY_MAX = 0.01;
@@ -30,10 +32,15 @@ final class RequestCheck {
         check.inputs();
         check.water();
         check.receiver();
-        check.product();
-        check.stock();
+        for (int i = 0; i < request.products().size(); i++) {
+            check.product(i);
+        }
         check.target();
         check.aeration();
+        Companion companion = request.companion();
+        if (companion != null) {
+            check.companion(companion);
+        }
         return check.reasons;
     }
 
@@ -83,17 +90,35 @@ final class RequestCheck {
     }
 
     private void receiver() {
-        if (request.receiver() instanceof Receiver.Tank tank
-                && !(tank.volumeL() > 0 && tank.volumeL() <= VOLUME_MAX_L)) {
+        double volumeL = request.receiver() instanceof Receiver.Tank tank
+                ? tank.volumeL()
+                : request.receiver() instanceof Receiver.FlowThrough through ? through.volumeL() : 1;
+        if (!(volumeL > 0 && volumeL <= VOLUME_MAX_L)) {
             refuse(
                     "volume-implausible",
-                    "A tank of " + tank.volumeL() + " L cannot be planned for.",
+                    "A tank of " + volumeL + " L cannot be planned for.",
                     "Give the volume in litres, above 0 and at most 10,000,000 (10,000 m³).");
+        }
+        double flowLMin = request.receiver() instanceof Receiver.Flow flow
+                ? flow.flowLMin()
+                : request.receiver() instanceof Receiver.FlowThrough through ? through.flowLMin() : 1;
+        if (!(flowLMin > 0 && flowLMin <= FLOW_MAX_L_MIN)) {
+            refuse(
+                    "flow-implausible",
+                    "A flow of " + flowLMin + " L/min cannot be planned for.",
+                    "Give the flow in litres per minute, above 0 and at most 1,000,000.");
+        }
+        if (request.receiver() instanceof Receiver.FlowThrough && volumeL < flowLMin) {
+            refuse(
+                    "flow-implausible",
+                    "A tank of " + volumeL + " L that " + flowLMin
+                            + " L/min flow through holds its water for less than a minute.",
+                    "Check both, or plan for the flow alone.");
         }
     }
 
-    private void product() {
-        Product product = request.product();
+    private void product(int index) {
+        Product product = request.products().get(index);
         if (!(product.assayPercent() >= 1 && product.assayPercent() <= 100)) {
             refuse(
                     "assay-implausible",
@@ -106,13 +131,13 @@ final class RequestCheck {
                     product.agent().words() + " is labelled corrosive, and larvae are in the water.",
                     "Use sodium carbonate or bicarbonate, or dose a header tank or storage without larvae.");
         }
+        Stock stock = request.stockOf(index);
+        if (stock != null) {
+            stock(stock);
+        }
     }
 
-    private void stock() {
-        Stock stock = request.stock();
-        if (stock == null) {
-            return;
-        }
+    private void stock(Stock stock) {
         if (!(stock.gramsPerLitre() > 0 && Double.isFinite(stock.gramsPerLitre()))) {
             refuse(
                     "stock-implausible",
@@ -125,6 +150,35 @@ final class RequestCheck {
                     "stock-implausible",
                     "A stock at " + temperatureC + " °C cannot be planned for.",
                     "Give the temperature of the stock, 0 to " + Words.number(STOCK_MAX_C, 0) + " °C.");
+        }
+    }
+
+    private void companion(Companion companion) {
+        Hold hold = companion.hold();
+        boolean plausible = hold instanceof Hold.PhAtMost ph
+                ? ph.phTotalMax() > 6 && ph.phTotalMax() <= 9
+                : ((Hold.Pco2) hold).pco2Atm() >= AERATION_MIN_ATM && ((Hold.Pco2) hold).pco2Atm() <= HOLD_PCO2_MAX_ATM;
+        if (!plausible) {
+            refuse(
+                    "hold-implausible",
+                    hold.words() + " cannot be held.",
+                    "Give a ceiling of pH above 6 and at most 9, or a pCO2 of 100 to 10,000 µatm.");
+        }
+        if (!(request.target() instanceof Target.OmegaAragonite)) {
+            refuse(
+                    "hold-needs-omega",
+                    "Two agents are planned for a target of Ω aragonite, not for "
+                            + request.target().words() + ".",
+                    "Give the target as Ω aragonite, or ask for one agent.");
+        }
+        Agent first = request.product().agent();
+        Agent second = companion.product().agent();
+        if (first.alkalinityPerMol() * second.dicPerMol() == first.dicPerMol() * second.alkalinityPerMol()) {
+            refuse(
+                    "agents-alike",
+                    first.words() + " and " + second.words()
+                            + " add alkalinity and carbon in the same proportion: nothing can be held with them.",
+                    "Choose two that differ, such as sodium carbonate and sodium bicarbonate.");
         }
     }
 

@@ -12,46 +12,77 @@ import org.jspecify.annotations.Nullable;
 /** A request whose every number can be stood on, and whose target is not met yet. */
 record SoundRequest(DoseRequest request, CarbonateState before) {
     DosePlan plan() {
-        DosedWater water = new DosedWater(before, request);
         Bounds bounds = request.bounds();
         if (!bounds.hold(before)) {
             return refused(Refusals.beyondBounds(request, before));
         }
+        DosedWater alone = new DosedWater(before, request);
         OptionalDouble needed = DoseSearch.alkalinityFor(
-                water, request.target(), request.target().value());
-        if (needed.isEmpty()) {
-            return refused(Refusals.outOfReach(request, water));
+                alone, request.target(), request.target().value());
+        Companion companion = request.companion();
+        if (companion != null
+                && (needed.isEmpty()
+                        || companion.hold() instanceof Hold.Pco2
+                        || !companion.hold().keptBy(alone.with(needed.getAsDouble())))) {
+            return planOfTwo(companion);
         }
-        double most = DoseSearch.alkalinityWithin(water, bounds);
-        if (needed.getAsDouble() > most) {
-            return refused(Refusals.breaksBounds(request, water, needed.getAsDouble(), most));
-        }
-        double massG = water.massOf(needed.getAsDouble());
-        Stock stock = request.stock();
-        if (stock != null && stock.gramsPerLitre() > strongest(stock)) {
-            return refused(
-                    Refusals.stockTooStrong(request.product(), stock.gramsPerLitre(), temperatureC(stock), massG));
-        }
-        Balance balance = Balance.forLoad(massG);
-        long units = balance.nearest(massG);
-        if (balance.grams(units) > water.massOf(most)) {
-            units = balance.notAbove(water.massOf(most));
-        }
-        StepSchedule schedule = new StepSchedule(water, bounds, balance, stock == null ? null : stock.gramsPerLitre());
-        Optional<List<DoseStep>> steps = units < 1 ? Optional.empty() : schedule.of(units);
-        if (steps.isEmpty()) {
-            return refused(Refusals.notWeighable(request, massG, balance));
-        }
-        return plan(water, balance.grams(units), most, steps.get());
+        return needed.isEmpty()
+                ? refused(Refusals.outOfReach(request, alone))
+                : plan(alone, needed.getAsDouble(), null);
     }
 
-    private DosePlan plan(DosedWater water, double massG, double most, List<DoseStep> steps) {
-        double added = water.alkalinityOf(massG);
-        CarbonateState after = water.with(added);
-        CarbonateState aerated = water.aeratedWith(added);
-        DoseUncertainty uncertainty = new DoseUncertainty(water.before(), after, request.uncertainty());
-        double againstTarget = uncertainty.afterAgainst(request.target());
-        List<Caution> cautions = new ArrayList<>(DoseCautions.of(request, before, after, massG));
+    private DosePlan planOfTwo(Companion companion) {
+        PairSolver solver = new PairSolver(
+                before, request.product().agent(), companion.product().agent());
+        Optional<Mix> mix = solver.solve(request.target().value(), companion.hold());
+        if (mix.isEmpty() || mix.get().first() < 0 || mix.get().second() < 0) {
+            return refused(PairRefusal.of(request, companion, before, mix));
+        }
+        DosedWater water = new DosedWater(before, request, request.products(), mix.get());
+        double alkalinity = mix.get().first() * request.product().agent().alkalinityPerMol()
+                + mix.get().second() * companion.product().agent().alkalinityPerMol();
+        return plan(water, alkalinity, companion.hold());
+    }
+
+    private DosePlan plan(DosedWater water, double needed, @Nullable Hold hold) {
+        Bounds bounds = request.bounds();
+        double most = DoseSearch.alkalinityWithin(water, bounds);
+        if (needed > most) {
+            return refused(Refusals.breaksBounds(request, water, needed, most));
+        }
+        double[] massesG = new double[water.products().size()];
+        for (int i = 0; i < massesG.length; i++) {
+            massesG[i] = water.massOf(i, needed);
+            Stock stock = request.stockOf(i);
+            double temperatureC =
+                    stock == null ? 0 : stock.temperatureIn(before.conditions().temperatureC());
+            Product product = water.products().get(i);
+            if (stock != null && stock.gramsPerLitre() > product.strongestStockGramsPerLitre(temperatureC)) {
+                return refused(Refusals.stockTooStrong(product, stock.gramsPerLitre(), temperatureC, massesG[i]));
+            }
+        }
+        Optional<Weighing> weighing = Weighing.nearest(massesG, grams -> {
+            CarbonateState after = water.withMasses(grams);
+            return bounds.hold(after)
+                    && bounds.hold(water.aeratedWithMasses(grams))
+                    && (hold == null || hold.keptBy(after));
+        });
+        Optional<List<DoseStep>> steps = weighing.flatMap(w -> new StepSchedule(water, request, w).steps());
+        if (weighing.isEmpty() || steps.isEmpty()) {
+            return refused(Refusals.notWeighable(request, massesG));
+        }
+        return plan(water, weighing.get().grams(weighing.get().parcels()), most, steps.get());
+    }
+
+    private DosePlan plan(DosedWater water, double[] massesG, double most, List<DoseStep> steps) {
+        CarbonateState after = water.withMasses(massesG);
+        CarbonateState aerated = water.aeratedWithMasses(massesG);
+        Optional<Reason> discharge = Discharge.refusal(request.receiver(), after, aerated);
+        if (discharge.isPresent()) {
+            return refused(discharge.get());
+        }
+        DoseUncertainty uncertainty = new DoseUncertainty(before, after, request.uncertainty());
+        List<Caution> cautions = new ArrayList<>(DoseCautions.of(request, water, after, massesG));
         if (nearABound(uncertainty, after)) {
             cautions.add(new Caution(
                     "bound-within-uncertainty",
@@ -64,13 +95,9 @@ record SoundRequest(DoseRequest request, CarbonateState before) {
         return new DosePlan(
                 Outcome.PLAN,
                 List.of(),
-                new Amount(
-                        massG,
-                        Math.min(massG, massFor(water, request.target().value() - againstTarget, most)),
-                        Math.max(massG, massFor(water, request.target().value() + againstTarget, most))),
+                products(water, massesG, most, uncertainty.afterAgainst(request.target())),
                 new Amount(gain, gain - ofGain, gain + ofGain),
                 steps,
-                recipe(massG),
                 before,
                 after,
                 aerated,
@@ -78,26 +105,26 @@ record SoundRequest(DoseRequest request, CarbonateState before) {
                 cautions);
     }
 
-    private double massFor(DosedWater water, double value, double most) {
+    private List<PlannedProduct> products(DosedWater water, double[] massesG, double most, double againstTarget) {
+        double target = request.target().value();
+        double low = alkalinityFor(water, target - againstTarget, most);
+        double high = alkalinityFor(water, target + againstTarget, most);
+        List<PlannedProduct> products = new ArrayList<>();
+        for (int i = 0; i < massesG.length; i++) {
+            double massG = massesG[i];
+            products.add(PlannedProduct.of(
+                    water.products().get(i),
+                    request.receiver(),
+                    new Amount(massG, Math.min(massG, water.massOf(i, low)), Math.max(massG, water.massOf(i, high))),
+                    request.stockOf(i),
+                    before.conditions().temperatureC()));
+        }
+        return products;
+    }
+
+    private double alkalinityFor(DosedWater water, double value, double most) {
         double added = DoseSearch.alkalinityFor(water, request.target(), value).orElse(most);
-        return water.massOf(Math.min(added, most));
-    }
-
-    private @Nullable StockRecipe recipe(double massG) {
-        Stock stock = request.stock();
-        return stock == null
-                ? null
-                : new StockRecipe(
-                        stock.gramsPerLitre(), temperatureC(stock), strongest(stock), massG / stock.gramsPerLitre());
-    }
-
-    private double strongest(Stock stock) {
-        return request.product().strongestStockGramsPerLitre(temperatureC(stock));
-    }
-
-    private double temperatureC(Stock stock) {
-        Double own = stock.temperatureC();
-        return own == null ? before.conditions().temperatureC() : own;
+        return Math.min(added, most);
     }
 
     private boolean nearABound(DoseUncertainty uncertainty, CarbonateState after) {

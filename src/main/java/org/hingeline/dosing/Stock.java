@@ -8,4 +8,8 @@ import org.jspecify.annotations.Nullable;
  * @param gramsPerLitre strength, g of what is weighed per L
  * @param temperatureC of the stock, °C; null takes the water's
  */
-public record Stock(double gramsPerLitre, @Nullable Double temperatureC) {}
+public record Stock(double gramsPerLitre, @Nullable Double temperatureC) {
+    double temperatureIn(double waterTemperatureC) {
+        return temperatureC == null ? waterTemperatureC : temperatureC;
+    }
+}

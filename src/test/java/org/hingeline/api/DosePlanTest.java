@@ -168,6 +168,69 @@ class DosePlanTest {
     }
 
     @Test
+    void a_flow_is_dosed_by_steady_injection() {
+        JsonNode plan = plan(OF_A_WATER.replace("\"volumeL\":4000", "\"flowLMin\":60"), 200);
+        assertThat(plan.get("outcome").asString()).isEqualTo("plan");
+        assertThat(plan.get("massG").isNull()).isTrue();
+        double gramsPerHour = plan.get("gramsPerHour").asDouble();
+        double kgPerHour = 3600 * plan.at("/before/densityKgM3").asDouble() / 1000;
+        assertThat(plan.at("/after/totalAlkalinityUmolKg").asDouble()
+                        - plan.at("/before/totalAlkalinityUmolKg").asDouble())
+                .isCloseTo(2e6 * gramsPerHour / 105.99 / kgPerHour, within(1e-6));
+        assertThat(plan.get("gramsPerHourLow").asDouble()).isLessThan(gramsPerHour);
+        assertThat(plan.get("gramsPerHourHigh").asDouble()).isGreaterThan(gramsPerHour);
+        assertThat(plan.get("stockMlPerMinute").asDouble()).isCloseTo(gramsPerHour / 50 * 1000 / 60, within(1e-9));
+        assertThat(plan.at("/steps/0/massG").isNull()).isTrue();
+        assertThat(plan.at("/steps/0/stockMlPerMinute").asDouble()).isPositive();
+    }
+
+    @Test
+    void a_tank_with_a_flow_through_it_gets_a_first_charge_and_make_up() {
+        water(7.8);
+        JsonNode plan = plan(OF_A_POINT.replace("{\"point\"", "{\"flowLMin\":200,\"point\""), 200);
+        assertThat(plan.get("outcome").asString()).isEqualTo("plan");
+        assertThat(plan.get("gramsPerHour").asDouble())
+                .as("the tank's 20 000 L change 0.6 times an hour")
+                .isCloseTo(plan.get("massG").asDouble() * 0.6, within(1e-6));
+        assertThat(plan.get("cautions").valueStream().map(c -> c.get("code").asString()))
+                .contains("flow-interlock", "washout");
+    }
+
+    @Test
+    void two_agents_hold_a_ceiling_of_ph() {
+        JsonNode plan = plan(OF_A_WATER.replace("\"volumeL\"", "\"hold\":{\"phTotalMax\":7.9},\"volumeL\""), 200);
+        assertThat(plan.get("outcome").asString()).isEqualTo("plan");
+        assertThat(plan.at("/second/agent").asString()).isEqualTo("sodium-bicarbonate");
+        assertThat(plan.at("/second/massG").asDouble()).isPositive();
+        assertThat(plan.at("/steps/0/second/massG").asDouble()).isPositive();
+        assertThat(plan.at("/after/phTotal").asDouble())
+                .isCloseTo(7.9, within(0.002))
+                .isLessThanOrEqualTo(7.9);
+        assertThat(plan.at("/after/omegaAragonite").asDouble()).isCloseTo(2.5, within(0.01));
+    }
+
+    @Test
+    void a_hold_must_be_one_thing_and_a_second_agent_must_be_for_something() {
+        assertThat(plan(
+                                OF_A_WATER.replace(
+                                        "\"volumeL\"",
+                                        "\"hold\":{\"phTotalMax\":7.9,\"pco2Uatm\":500},\"flowLMin\":1e999,\"volumeL\""),
+                                422)
+                        .get("errors")
+                        .valueStream()
+                        .map(e -> e.get("pointer").asString()))
+                .containsExactlyInAnyOrder("/hold", "/flowLMin");
+        assertThat(plan(OF_A_WATER.replace("\"volumeL\"", "\"secondAgent\":{\"code\":\"chalk\"},\"volumeL\""), 422)
+                        .get("errors")
+                        .valueStream()
+                        .map(e -> e.get("pointer").asString()))
+                .containsExactlyInAnyOrder("/hold", "/secondAgent/code");
+        assertRefused(
+                plan(OF_A_WATER.replace("\"volumeL\"", "\"hold\":{\"pco2Uatm\":200},\"volumeL\""), 200),
+                "two-agents-cannot");
+    }
+
+    @Test
     void is_refused_when_nothing_was_read() {
         assertRefused(plan(OF_A_POINT.replace("larval-3", "larval-4"), 200), "input-missing");
     }

@@ -164,7 +164,8 @@ class AgentsTest {
                 .stock(new Stock(1.39, 10.0))
                 .build());
         assertThat(weaker.outcome()).isEqualTo(Outcome.PLAN);
-        assertThat(weaker.stock().litres()).isCloseTo(weaker.massG().value() / 1.39, within(1e-9));
+        assertThat(weaker.products().get(0).stock().litres())
+                .isCloseTo(weaker.massG().value() / 1.39, within(1e-9));
     }
 
     private static String caution(DosePlan plan, String code) {

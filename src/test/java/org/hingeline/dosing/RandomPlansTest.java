@@ -80,9 +80,11 @@ class RandomPlansTest {
                 .isCloseTo(added, within(1e-12));
         // the rounding of the balance is all that parts the mass from the exact one
         DosedWater water = new DosedWater(plan.before(), request);
-        double exact = water.massOf(DoseSearch.alkalinityFor(
-                        water, request.target(), request.target().value())
-                .orElseThrow());
+        double exact = water.massOf(
+                0,
+                DoseSearch.alkalinityFor(
+                                water, request.target(), request.target().value())
+                        .orElseThrow());
         double unit = Balance.forLoad(exact).grams(1);
         assertThat(mass.value()).as(as).isCloseTo(exact, within(unit * 1.000001));
     }

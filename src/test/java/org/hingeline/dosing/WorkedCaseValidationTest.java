@@ -52,7 +52,8 @@ class WorkedCaseValidationTest {
                 Waters.towards(
                         new Target.OmegaAragonite(3.0), Agent.ofCode(agent).orElseThrow()),
                 1000);
-        assertThat(new DosedWater(Waters.worked(), cubicMetre).massOf(100e-6)).isCloseTo(grams, within(0.05));
+        assertThat(new DosedWater(Waters.worked(), cubicMetre).massOf(0, 100e-6))
+                .isCloseTo(grams, within(0.05));
     }
 
     @Test
