@@ -54,6 +54,7 @@
   const charts = make("div", { class: "charts", tabindex: "0", role: "group", "aria-label": `Course of the water at ${place.dataset.name}. Left and right arrows move through time.` });
   place.append(buttons, words, charts);
   const summary = document.getElementById("history-words") ?? place.parentNode.appendChild(make("p", { id: "history-words" }));
+  const summaryHow = document.getElementById("history-how");
 
   const colour = name => getComputedStyle(document.documentElement).getPropertyValue(`--${name}`).trim();
   const fixed = (value, digits) => value == null ? null : value.toFixed(digits);
@@ -97,15 +98,23 @@
     const known = found.filter(s => s.omegaAragonite != null);
     if (known.length === 0) {
       summary.textContent = `No Ω is known for the last ${range.label}.`;
+      if (summaryHow) summaryHow.hidden = true;
       return;
     }
     const lowest = known.reduce((a, b) => b.omegaAragonite < a.omegaAragonite ? b : a);
     const highest = known.reduce((a, b) => b.omegaAragonite > a.omegaAragonite ? b : a);
     const gaps = states.length - found.length;
+    if (summaryHow) {
+      summaryHow.hidden = false;
+      summaryHow.href = how(lowest.at).href;
+    }
     summary.textContent = `In the last ${range.label}: lowest Ω ${fixed(lowest.omegaAragonite, 2)} on ${clock.format(new Date(lowest.at))}, `
       + `highest Ω ${fixed(highest.omegaAragonite, 2)} on ${clock.format(new Date(highest.at))}`
       + (gaps === 0 ? ", no gaps." : gaps === 1 ? ", one gap without measurements." : `, ${gaps} gaps without measurements.`);
   }
+
+  /* the state of that moment, with where each of its inputs came from */
+  const how = iso => make("a", { href: place.dataset.how.replace("MOMENT", encodeURIComponent(iso)) }, "How was this computed?");
 
   function say(index) {
     const s = states[index];
@@ -120,7 +129,8 @@
       s.temperatureC == null ? null : `${fixed(s.temperatureC, 1)} °C`,
       s.salinity == null ? null : `salinity ${fixed(s.salinity, 1)}`,
     ];
-    words.textContent = `${clock.format(new Date(s.at))}: ${parts.filter(Boolean).join(", ")}.`;
+    words.textContent = `${clock.format(new Date(s.at))}: ${parts.filter(Boolean).join(", ")}. `;
+    words.append(how(s.at));
   }
 
   function hatch(context) {

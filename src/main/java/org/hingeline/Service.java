@@ -35,6 +35,7 @@ import org.hingeline.monitor.PlaceDesk;
 import org.hingeline.monitor.ReadingIntake;
 import org.hingeline.monitor.Secrets;
 import org.hingeline.monitor.Signals;
+import org.hingeline.monitor.StateWishes;
 import org.hingeline.monitor.StatusBoard;
 import org.hingeline.monitor.Storage;
 import org.hingeline.monitor.WaterRules;
@@ -145,6 +146,7 @@ final class Service implements AutoCloseable {
                 alerts,
                 doses(settings, database, board, water),
                 place,
+                new StateWishes(database, water),
                 checks);
         try {
             WebServer web = WebServer.start(

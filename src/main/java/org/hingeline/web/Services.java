@@ -9,6 +9,7 @@ import org.hingeline.monitor.DoseDesk;
 import org.hingeline.monitor.LimitDesk;
 import org.hingeline.monitor.PlaceDesk;
 import org.hingeline.monitor.ReadingIntake;
+import org.hingeline.monitor.StateWishes;
 import org.hingeline.monitor.StatusBoard;
 
 /** The use cases the routes call. */
@@ -21,7 +22,7 @@ public record Services(
         AlertDesk alerts,
         DoseDesk doses,
         PlaceDesk place,
-
+        StateWishes states,
         List<Check> checks) {
     public Services {
         checks = List.copyOf(checks);
