@@ -19,7 +19,12 @@ final class DoseCautions {
         this.request = request;
     }
 
-    static List<Caution> of(DoseRequest request, DosedWater water, CarbonateState after, double... massesG) {
+    static List<Caution> of(
+            DoseRequest request,
+            DosedWater water,
+            CarbonateState after,
+            @Nullable AmmoniaShift ammonia,
+            double... massesG) {
         DoseCautions all = new DoseCautions(request);
         all.add(
                 "suggestion",
@@ -35,6 +40,7 @@ final class DoseCautions {
                     "Make up and add the two products apart, each as its own stock, in the same steps.");
         }
         all.inTheWater(water.before(), after);
+        all.ammonia(water.before(), after, ammonia);
         all.flow();
         for (int i = 0; i < massesG.length; i++) {
             all.plume(water.before(), water.products().get(i), request.stockOf(i));
@@ -56,16 +62,31 @@ final class DoseCautions {
                     "The dose raises pCO2 from " + Words.number(before.pco2Atm() * 1e6, 0) + " to "
                             + Words.number(after.pco2Atm() * 1e6, 0) + " µatm until the water is aerated.");
         }
-        add(
-                "ammonia",
-                "The un-ionised, toxic share of ammonia rises with pH: here from "
-                        + Words.number(100 * share(before), 1) + " % to " + Words.number(100 * share(after), 1)
-                        + " %. Measure total ammonia first.");
         add("discharge", "Before the water is let out, check its pH and solids against the site's own permit.");
         add(
                 "no-larval-limit",
                 "No published larval limit for pH steps was found: the bounds are engineering defaults for the site to"
                         + " edit.");
+    }
+
+    private void ammonia(CarbonateState before, CarbonateState after, @Nullable AmmoniaShift shift) {
+        add(
+                "ammonia",
+                "The un-ionised, toxic share of ammonia moves with pH: here from "
+                        + Words.number(100 * share(before), 1) + " % to " + Words.number(100 * share(after), 1) + " %. "
+                        + (shift == null ? "Measure total ammonia first." : shift.words() + "."));
+        if (shift == null && request.receiver() instanceof Receiver.Tank) {
+            add(
+                    "ammonia-unknown",
+                    "Total ammonia of this still tank is not known, and it gathers where water stands: measure it and"
+                            + " plan again with its value.");
+        }
+        if (shift != null && shift.chronic()) {
+            add(
+                    "ammonia-above-criterion",
+                    "Un-ionised ammonia would be above the " + (shift.acute() ? "acute" : "chronic")
+                            + " criterion: exchange water before raising pH.");
+        }
     }
 
     private static double share(CarbonateState state) {

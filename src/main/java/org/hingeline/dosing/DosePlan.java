@@ -20,6 +20,7 @@ import org.jspecify.annotations.Nullable;
  * @param before the water now; null when there is none
  * @param after the water when all is mixed in, closed to the air; null unless there is a plan
  * @param afterAeration the dosed water in balance with the air it is aerated with; null unless there is a plan
+ * @param ammonia what the dose makes of the ammonia in the water; null unless there is a plan and total ammonia is known
  * @param remedies what needs no chemical, to be considered first
  * @param cautions what to know before acting
  */
@@ -32,6 +33,7 @@ public record DosePlan(
         @Nullable CarbonateState before,
         @Nullable CarbonateState after,
         @Nullable CarbonateState afterAeration,
+        @Nullable AmmoniaShift ammonia,
         List<Remedy> remedies,
         List<Caution> cautions) {
     /** What came of the question. */
@@ -84,6 +86,7 @@ public record DosePlan(
                 before,
                 after,
                 afterAeration,
+                ammonia,
                 remedies,
                 Stream.concat(Stream.of(caution), cautions.stream()).toList());
     }
@@ -94,6 +97,6 @@ public record DosePlan(
             @Nullable CarbonateState before,
             List<Remedy> remedies,
             List<Caution> cautions) {
-        return new DosePlan(outcome, reasons, List.of(), null, List.of(), before, null, null, remedies, cautions);
+        return new DosePlan(outcome, reasons, List.of(), null, List.of(), before, null, null, null, remedies, cautions);
     }
 }

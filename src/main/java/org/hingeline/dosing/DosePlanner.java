@@ -27,7 +27,7 @@ public final class DosePlanner {
         }
         CarbonateState before = solved.state();
         if (!reasons.isEmpty()) {
-            boolean sound = request.inputNotes().isEmpty();
+            boolean sound = request.inputNotes().isEmpty() && Refusals.aboutTheDoseOnly(reasons);
             List<Remedy> remedies = sound ? remedies(request, before) : List.of();
             return DosePlan.without(Outcome.REFUSED, reasons, before, remedies, before.cautions());
         }
@@ -43,6 +43,6 @@ public final class DosePlanner {
     }
 
     static List<Remedy> remedies(DoseRequest request, CarbonateState before) {
-        return Remedies.of(before, request.target(), request.aerationPco2Atm());
+        return Remedies.of(request, before);
     }
 }

@@ -21,6 +21,8 @@ import org.jspecify.annotations.Nullable;
  * @param aerationPco2Atm what aeration reaches, atm
  * @param larvae whether larvae are in the water that is dosed
  * @param companion a second agent, to hold pH or pCO2 with; null for one agent alone
+ * @param ammoniaMgL total ammonia in the water, mg/L as N; null when it is not known
+ * @param surroundings where the water is; null for one that is known by its numbers alone
  */
 public record DoseRequest(
         @Nullable CarbonateResult water,
@@ -33,7 +35,9 @@ public record DoseRequest(
         @Nullable Stock stock,
         double aerationPco2Atm,
         boolean larvae,
-        @Nullable Companion companion) {
+        @Nullable Companion companion,
+        @Nullable Double ammoniaMgL,
+        @Nullable Surroundings surroundings) {
     /** 420 µatm, today's air. */
     public static final double AIR_PCO2_ATM = 420e-6;
 
@@ -61,7 +65,9 @@ public record DoseRequest(
                 .stock(stock)
                 .aerationPco2Atm(aerationPco2Atm)
                 .larvae(larvae)
-                .companion(companion);
+                .companion(companion)
+                .ammoniaMgL(ammoniaMgL)
+                .surroundings(surroundings);
     }
 
     /** What may be weighed: one product, or two. */

@@ -18,6 +18,8 @@ public final class DoseRequestBuilder {
     private double aerationPco2Atm = DoseRequest.AIR_PCO2_ATM;
     private boolean larvae;
     private @Nullable Companion companion;
+    private @Nullable Double ammoniaMgL;
+    private @Nullable Surroundings surroundings;
 
     DoseRequestBuilder(
             @Nullable CarbonateResult water, InputUncertainty uncertainty, Receiver receiver, Target target) {
@@ -82,6 +84,16 @@ public final class DoseRequestBuilder {
         return this;
     }
 
+    public DoseRequestBuilder ammoniaMgL(@Nullable Double given) {
+        ammoniaMgL = given;
+        return this;
+    }
+
+    public DoseRequestBuilder surroundings(@Nullable Surroundings given) {
+        surroundings = given;
+        return this;
+    }
+
     public DoseRequest build() {
         return new DoseRequest(
                 water,
@@ -94,6 +106,8 @@ public final class DoseRequestBuilder {
                 stock,
                 aerationPco2Atm,
                 larvae,
-                companion);
+                companion,
+                ammoniaMgL,
+                surroundings);
     }
 }

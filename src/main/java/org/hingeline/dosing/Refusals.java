@@ -2,11 +2,26 @@ package org.hingeline.dosing;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
 import org.hingeline.seawater.CarbonateState;
 
 /** The reasons against a dose for a water that could be dosed, in words. */
 final class Refusals {
     private Refusals() {}
+
+    private static final Set<String> ABOUT_WATER_OR_AIM = Set.of(
+            "water-implausible",
+            "salinity-implausible",
+            "outside-fits",
+            "volume-implausible",
+            "flow-implausible",
+            "target-implausible",
+            "aeration-implausible");
+
+    /** Whether the water, where it is and what it is to become can be stood on, so that remedies can. */
+    static boolean aboutTheDoseOnly(List<Reason> reasons) {
+        return reasons.stream().noneMatch(r -> ABOUT_WATER_OR_AIM.contains(r.code()));
+    }
 
     static Reason notNeeded(DoseRequest request, CarbonateState before) {
         return new Reason(

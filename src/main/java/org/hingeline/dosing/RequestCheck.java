@@ -13,6 +13,7 @@ final class RequestCheck {
     private static final double VOLUME_MAX_L = 1e7;
     private static final double FLOW_MAX_L_MIN = 1e6;
     private static final double HOLD_PCO2_MAX_ATM = 10_000e-6;
+    private static final double AMMONIA_MAX_MG_L = 100;
     private static final double AERATION_MIN_ATM = 100e-6;
     private static final double AERATION_MAX_ATM = 5000e-6;
     private static final double ALKALINITY_MAX = 0.01;
@@ -37,6 +38,7 @@ final class RequestCheck {
         }
         check.target();
         check.aeration();
+        check.ammonia();
         Companion companion = request.companion();
         if (companion != null) {
             check.companion(companion);
@@ -220,6 +222,16 @@ final class RequestCheck {
                     "aeration-implausible",
                     "Aeration to " + Words.number(pco2 * 1e6, 0) + " µatm cannot be.",
                     "Give the pCO2 that aeration reaches: 100 to 5000 µatm, 420 in open air.");
+        }
+    }
+
+    private void ammonia() {
+        Double totalMgL = request.ammoniaMgL();
+        if (totalMgL != null && !(totalMgL >= 0 && totalMgL <= AMMONIA_MAX_MG_L)) {
+            refuse(
+                    "ammonia-implausible",
+                    "Total ammonia of " + totalMgL + " mg/L cannot be.",
+                    "Give total ammonia in mg/L as N, 0 to " + Words.number(AMMONIA_MAX_MG_L, 0) + ".");
         }
     }
 

@@ -81,8 +81,10 @@ record SoundRequest(DoseRequest request, CarbonateState before) {
         if (discharge.isPresent()) {
             return refused(discharge.get());
         }
+        Double totalAmmonia = request.ammoniaMgL();
+        AmmoniaShift ammonia = totalAmmonia == null ? null : AmmoniaShift.of(totalAmmonia, before, after, aerated);
         DoseUncertainty uncertainty = new DoseUncertainty(before, after, request.uncertainty());
-        List<Caution> cautions = new ArrayList<>(DoseCautions.of(request, water, after, massesG));
+        List<Caution> cautions = new ArrayList<>(DoseCautions.of(request, water, after, ammonia, massesG));
         if (nearABound(uncertainty, after)) {
             cautions.add(new Caution(
                     "bound-within-uncertainty",
@@ -101,6 +103,7 @@ record SoundRequest(DoseRequest request, CarbonateState before) {
                 before,
                 after,
                 aerated,
+                ammonia,
                 DosePlanner.remedies(request, before),
                 cautions);
     }

@@ -35,7 +35,25 @@ final class StepSchedule {
                 return Optional.of(steps);
             }
         }
-        return Optional.empty();
+        List<DoseStep> steps = longest();
+        return steps.size() <= STEPS_MAX && keepsTheBounds(steps) ? Optional.of(steps) : Optional.empty();
+    }
+
+    /** Each step as long as the bound lets it be: where the balance is coarse, even steps may fail and these not. */
+    private List<DoseStep> longest() {
+        List<DoseStep> steps = new ArrayList<>();
+        long parcels = weighing.parcels();
+        boolean rising = at(parcels).phTotal() > water.before().phTotal();
+        long given = 0;
+        while (given < parcels && steps.size() <= STEPS_MAX) {
+            double reach = at(given).phTotal() + (rising ? 1 : -1) * bounds.phPerHourMax();
+            double whole = at(parcels).phTotal();
+            boolean last = rising ? whole <= reach : whole >= reach;
+            long sum = last ? parcels : Math.max(given + 1, parcelsAt(reach, given, parcels, rising));
+            steps.add(step(steps.size() * MINUTES_BETWEEN, given, sum));
+            given = sum;
+        }
+        return steps;
     }
 
     private List<DoseStep> split(int n) {

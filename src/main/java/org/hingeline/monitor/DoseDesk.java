@@ -1,6 +1,8 @@
 package org.hingeline.monitor;
 
 import java.time.Duration;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import org.hingeline.dosing.Agent;
 import org.hingeline.dosing.Bounds;
@@ -9,10 +11,13 @@ import org.hingeline.dosing.DosePlan;
 import org.hingeline.dosing.DosePlanner;
 import org.hingeline.dosing.DoseRequest;
 import org.hingeline.dosing.Hold;
+import org.hingeline.dosing.OtherWater;
 import org.hingeline.dosing.Product;
 import org.hingeline.dosing.Receiver;
 import org.hingeline.dosing.Stock;
+import org.hingeline.dosing.Surroundings;
 import org.hingeline.dosing.Target;
+import org.hingeline.dosing.WaterKind;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.PointKind;
 import org.hingeline.hatchery.Site;
@@ -91,6 +96,10 @@ public final class DoseDesk {
         if (stockC != null && !(stockC >= 0 && stockC <= 40)) {
             faults.add("stockTemperatureC", "stockTemperatureC " + stockC + " must be 0 to 40 °C");
         }
+        Double ammonia = wish.ammoniaMgL();
+        if (ammonia != null && !(ammonia >= 0 && ammonia <= 100)) {
+            faults.add("ammoniaMgL", "ammoniaMgL " + ammonia + " must be 0 to 100 mg/L as N");
+        }
         double air = reader.number("aerateToUatm", wish.aerateToUatm(), defaults.aerateToUatm());
         if (!(air >= 100 && air <= 5000)) {
             faults.add("aerateToUatm", "aerateToUatm " + air + " must be 100 to 5000 \u00b5atm");
@@ -121,6 +130,11 @@ public final class DoseDesk {
                                         hold))
                 .aerationPco2Atm(air * 1e-6)
                 .larvae(larvae(wish, status))
+                .ammoniaMgL(
+                        ammonia != null
+                                ? ammonia
+                                : status.flatMap(waters::ammoniaMgL).orElse(null))
+                .surroundings(status.map(s -> surroundings(site, s)).orElse(null))
                 .build());
         if (plan.outcome() != DosePlan.Outcome.PLAN) {
             return plan;
@@ -140,6 +154,33 @@ public final class DoseDesk {
         double most = product.strongestStockGramsPerLitre(
                 temperatureC == null ? solved.state().conditions().temperatureC() : temperatureC);
         return new Stock(Math.min(defaults.stockGramsPerLitre(), most), temperatureC);
+    }
+
+    /** The other points' waters, as far as a dose could be planned on them. */
+    private Surroundings surroundings(Site site, PointStatus here) {
+        List<OtherWater> others = new ArrayList<>();
+        for (PointStatus other : board.points(site)) {
+            if (other.point().id() != here.point().id() && other.point().kind() != PointKind.DISCHARGE) {
+                DoseWaters.Water water = waters.of(other);
+                if (water.notes().isEmpty() && water.result() instanceof Solved solved) {
+                    others.add(new OtherWater(
+                            other.point().code(),
+                            other.point().name(),
+                            kind(other.point()),
+                            solved.state(),
+                            water.uncertainty()));
+                }
+            }
+        }
+        return new Surroundings(kind(here.point()), here.point().feedsFrom(), others);
+    }
+
+    private static WaterKind kind(Point point) {
+        return switch (point.kind()) {
+            case INTAKE -> WaterKind.INTAKE;
+            case STORAGE, HEADER -> WaterKind.STORE;
+            case LARVAL, DISCHARGE -> WaterKind.TANK;
+        };
     }
 
     /** Of a larval tank nobody has to say that larvae are in it; that there are none, somebody has. */

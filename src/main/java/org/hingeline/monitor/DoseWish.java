@@ -11,6 +11,7 @@ import org.jspecify.annotations.Nullable;
  * @param flowLMin what flows, L/min: with a volume through the tank, without one past the injection
  * @param secondAgent to hold pH or pCO2 with; sodium bicarbonate where a hold is given and this is absent
  * @param stockTemperatureC of the stock, °C; of the water where absent
+ * @param ammoniaMgL total ammonia in the water, mg/L as N; where absent, a fresh reading of the point
  * @param larvaeInWater whether larvae are in the water that is dosed; where absent, so it is in a larval tank and where a
  *     batch is
  */
@@ -27,6 +28,7 @@ public record DoseWish(
         @Nullable Double stockGramsPerLitre,
         @Nullable Double stockTemperatureC,
         @Nullable Double aerateToUatm,
+        @Nullable Double ammoniaMgL,
         @Nullable Boolean larvaeInWater) {
 
     /** A wish for a tank that says nothing more. */
@@ -52,6 +54,7 @@ public record DoseWish(
                 stockGramsPerLitre,
                 null,
                 aerateToUatm,
+                null,
                 null);
     }
 

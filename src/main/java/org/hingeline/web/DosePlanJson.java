@@ -1,15 +1,17 @@
 package org.hingeline.web;
 
-import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.hingeline.dosing.Addition;
+import org.hingeline.dosing.AmmoniaShift;
 import org.hingeline.dosing.Amount;
 import org.hingeline.dosing.DosePlan;
 import org.hingeline.dosing.DoseStep;
 import org.hingeline.dosing.PlannedProduct;
+import org.hingeline.dosing.Remedy;
 import org.hingeline.seawater.CarbonateState;
+import org.hingeline.seawater.StateUncertainty;
 import org.jspecify.annotations.Nullable;
 
 /** A dose plan on the wire. */
@@ -33,16 +35,8 @@ final class DosePlanJson {
         json.put("before", state(plan.before()));
         json.put("after", state(plan.after()));
         json.put("afterAeration", state(plan.afterAeration()));
-        List<Map<String, @Nullable Object>> remedies = new ArrayList<>();
-        plan.remedies().forEach(remedy -> {
-            Map<String, @Nullable Object> each = new LinkedHashMap<>();
-            each.put("code", remedy.code());
-            each.put("detail", remedy.detail());
-            each.put("reachesTarget", remedy.reachesTarget());
-            each.put("reaches", state(remedy.reaches()));
-            remedies.add(each);
-        });
-        json.put("remedies", remedies);
+        json.put("ammonia", ammonia(plan.ammonia()));
+        json.put("remedies", plan.remedies().stream().map(DosePlanJson::remedy).toList());
         json.put("cautions", plan.cautions());
         return json;
     }
@@ -67,6 +61,39 @@ final class DosePlanJson {
         json.put("stockMl", addition.stockMl());
         json.put("gramsPerHour", addition.gramsPerHour());
         json.put("stockMlPerMinute", addition.stockMlPerMinute());
+    }
+
+    private static @Nullable Map<String, Object> ammonia(@Nullable AmmoniaShift shift) {
+        return shift == null
+                ? null
+                : Map.of(
+                        "totalMgL", shift.totalMgL(),
+                        "unionisedBeforeMgL", shift.unionisedBeforeMgL(),
+                        "unionisedAfterMgL", shift.unionisedAfterMgL(),
+                        "chronicCriterionMgL", AmmoniaShift.CHRONIC_MG_L,
+                        "acuteCriterionMgL", AmmoniaShift.ACUTE_MG_L);
+    }
+
+    private static Map<String, @Nullable Object> remedy(Remedy remedy) {
+        Map<String, @Nullable Object> json = new LinkedHashMap<>();
+        json.put("code", remedy.code());
+        json.put("detail", remedy.detail());
+        json.put("needs", remedy.needs());
+        json.put("fromPoint", remedy.fromPoint());
+        json.put("massShare", remedy.massShare());
+        json.put("reachesTarget", remedy.reachesTarget());
+        json.put("whyNot", remedy.whyNot());
+        json.put("reaches", state(remedy.reaches()));
+        StateUncertainty u = remedy.uncertainty();
+        json.put(
+                "standardUncertainty",
+                u == null
+                        ? null
+                        : Map.of(
+                                "omegaAragonite", u.omegaAragonite().total(),
+                                "phTotal", u.phTotal().total(),
+                                "pco2Uatm", u.pco2Atm().total() * 1e6));
+        return json;
     }
 
     private static Map<String, @Nullable Object> step(DoseStep step) {

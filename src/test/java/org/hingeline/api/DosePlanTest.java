@@ -230,6 +230,70 @@ class DosePlanTest {
                 "two-agents-cannot");
     }
 
+    private static JsonNode remedy(JsonNode plan, String code) {
+        return plan.get("remedies")
+                .valueStream()
+                .filter(r -> r.get("code").asString().equals(code))
+                .findFirst()
+                .orElseThrow();
+    }
+
+    @Test
+    void remedies_draw_on_the_fresh_waters_of_other_points() {
+        water(7.8);
+        service.postReadings(Rows.batch(Rows.water("storage", 8.1, CLOCK.instant())));
+        service.postReadings(Rows.batch(Rows.water("intake", 7.6, CLOCK.instant())));
+        JsonNode plan = plan(OF_A_POINT, 200);
+        assertThat(plan.at("/remedies/0/code").asString()).isEqualTo("hold");
+        assertThat(plan.at("/remedies/0/fromPoint").asString()).isEqualTo("storage");
+        assertThat(plan.at("/remedies/0/reaches/phTotal").asDouble()).isCloseTo(8.1, within(1e-6));
+        JsonNode blend = remedy(plan, "blend");
+        assertThat(blend.get("reachesTarget").asBoolean()).isTrue();
+        assertThat(blend.get("massShare").asDouble()).isBetween(0.3, 0.95);
+        assertThat(blend.at("/reaches/omegaAragonite").asDouble()).isCloseTo(2.5, within(1e-6));
+        assertThat(blend.at("/standardUncertainty/omegaAragonite").asDouble()).isPositive();
+        assertThat(blend.get("whyNot").isNull()).isTrue();
+    }
+
+    @Test
+    void a_stale_water_of_another_point_is_not_drawn_on() {
+        service.postReadings(Rows.batch(Rows.water("storage", 8.1, CLOCK.instant())));
+        CLOCK.pass(Duration.ofMinutes(30));
+        water(7.8);
+        JsonNode blend = remedy(plan(OF_A_POINT, 200), "blend");
+        assertThat(blend.get("reaches").isNull()).isTrue();
+        assertThat(blend.get("whyNot").asString()).contains("known at present");
+    }
+
+    @Test
+    void a_water_given_by_its_numbers_can_only_be_aerated() {
+        assertThat(plan(OF_A_WATER, 200)
+                        .get("remedies")
+                        .valueStream()
+                        .map(r -> r.get("code").asString()))
+                .containsExactly("aerate");
+    }
+
+    @Test
+    void ammonia_is_held_against_the_criteria_when_it_is_known_and_asked_for_when_not() {
+        JsonNode known = plan(OF_A_WATER.replace("\"volumeL\"", "\"ammoniaMgL\":1,\"volumeL\""), 200);
+        assertThat(known.at("/ammonia/unionisedAfterMgL").asDouble())
+                .isGreaterThan(known.at("/ammonia/unionisedBeforeMgL").asDouble())
+                .isGreaterThan(0.035);
+        assertThat(known.at("/ammonia/chronicCriterionMgL").asDouble()).isEqualTo(0.035);
+        assertThat(known.at("/ammonia/acuteCriterionMgL").asDouble()).isEqualTo(0.233);
+        assertThat(known.get("cautions").valueStream().map(c -> c.get("code").asString()))
+                .contains("ammonia-above-criterion");
+        JsonNode unknown = plan(OF_A_WATER, 200);
+        assertThat(unknown.get("ammonia").isNull()).isTrue();
+        assertThat(unknown.get("cautions").valueStream().map(c -> c.get("code").asString()))
+                .contains("ammonia-unknown");
+        assertThat(plan(OF_A_WATER.replace("\"volumeL\"", "\"ammoniaMgL\":-1,\"volumeL\""), 422)
+                        .at("/errors/0/pointer")
+                        .asString())
+                .isEqualTo("/ammoniaMgL");
+    }
+
     @Test
     void is_refused_when_nothing_was_read() {
         assertRefused(plan(OF_A_POINT.replace("larval-3", "larval-4"), 200), "input-missing");
