@@ -28,23 +28,8 @@ final class HydrogenIonRoot {
     static double fromDic(SeawaterConstants k, Conditions conditions, double totalAlkalinity, double dic) {
         double low = balance(k, k.kw, totalAlkalinity - Alkalinity.infimumWithoutWater(k, conditions));
         double high = balance(k, k.kw, totalAlkalinity - (Alkalinity.supremumWithoutWater(k, conditions) + 2 * dic));
-        double h = within(low, high, carbonateGuess(k, totalAlkalinity, dic));
-        for (int step = 0; step < MAX_STEPS; step++) {
-            double excess =
-                    Alkalinity.ofCarbon(k, h, dic) + Alkalinity.withoutCarbonate(k, conditions, h) - totalAlkalinity;
-            if (excess > 0) {
-                low = h;
-            } else {
-                high = h;
-            }
-            double slope = Alkalinity.slopeOfCarbon(k, h, dic) + Alkalinity.slopeWithoutCarbonate(k, conditions, h);
-            double move = -excess / slope;
-            h = moved(h, move, low, high);
-            if (Math.abs(move) <= LAST_STEP) {
-                return h;
-            }
-        }
-        return Double.NaN;
+        double guess = carbonateGuess(k, totalAlkalinity, dic);
+        return search(k, conditions, totalAlkalinity, dic, Double.NaN, low, high, guess);
     }
 
     /** [H], total scale, from total alkalinity and dissolved CO2; not a number when not converged. */
@@ -56,16 +41,33 @@ final class HydrogenIonRoot {
         double high = Math.max(
                 2 * co2 * k.k1 * k.k2 / a,
                 balance(k, 2 * a, totalAlkalinity - Alkalinity.supremumWithoutWater(k, conditions)));
-        double h = within(low, high, 1e-8);
+        return search(k, conditions, totalAlkalinity, Double.NaN, co2, low, high, 1e-8);
+    }
+
+    /** Either inorganic carbon or CO2 is a number. */
+    private static double search(
+            SeawaterConstants k,
+            Conditions conditions,
+            double totalAlkalinity,
+            double dic,
+            double co2,
+            double hLow,
+            double hHigh,
+            double guess) {
+        boolean closed = !Double.isNaN(dic);
+        double low = hLow;
+        double high = hHigh;
+        double h = within(low, high, guess);
         for (int step = 0; step < MAX_STEPS; step++) {
-            double excess =
-                    Alkalinity.ofCo2(k, h, co2) + Alkalinity.withoutCarbonate(k, conditions, h) - totalAlkalinity;
+            double ofCarbon = closed ? Alkalinity.ofCarbon(k, h, dic) : Alkalinity.ofCo2(k, h, co2);
+            double excess = ofCarbon + Alkalinity.withoutCarbonate(k, conditions, h) - totalAlkalinity;
             if (excess > 0) {
                 low = h;
             } else {
                 high = h;
             }
-            double slope = Alkalinity.slopeOfCo2(k, h, co2) + Alkalinity.slopeWithoutCarbonate(k, conditions, h);
+            double slope = (closed ? Alkalinity.slopeOfCarbon(k, h, dic) : Alkalinity.slopeOfCo2(k, h, co2))
+                    + Alkalinity.slopeWithoutCarbonate(k, conditions, h);
             double move = -excess / slope;
             h = moved(h, move, low, high);
             if (Math.abs(move) <= LAST_STEP) {

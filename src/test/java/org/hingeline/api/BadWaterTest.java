@@ -5,48 +5,23 @@ import static org.assertj.core.api.Assertions.assertThat;
 import java.net.http.HttpRequest;
 import java.net.http.HttpRequest.BodyPublishers;
 import java.net.http.HttpResponse;
-import java.nio.file.Path;
-import java.time.Instant;
 import java.util.List;
 import java.util.Random;
 import java.util.regex.Pattern;
-import org.hingeline.RunningService;
-import org.hingeline.SettableClock;
-import org.hingeline.monitor.Role;
-import org.junit.jupiter.api.AfterAll;
-import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 import tools.jackson.databind.JsonNode;
 
 /** A water that cannot be taken is told with the field, its value and what would be accepted; never with a failure. */
-class BadWaterTest {
+class BadWaterTest extends AskedByViewer {
     private static final String STATE = "/api/v1/seawater/state";
     private static final Description DESCRIPTION = new Description();
 
     /** Words of a program's inside, and the core's own units. */
     private static final Pattern INSIDE = Pattern.compile(
             "java|jackson|javalin|Exception|coerc|JsonToken|line -1| mol/kg| [0-9] atm", Pattern.CASE_INSENSITIVE);
-
-    @TempDir
-    private static Path data;
-
-    private static RunningService service;
-    private static String viewer;
-
-    @BeforeAll
-    static void start() {
-        service = RunningService.start(data, new SettableClock(Instant.parse("2026-05-14T12:00:00Z")));
-        viewer = service.token(Role.VIEWER);
-    }
-
-    @AfterAll
-    static void stop() {
-        service.close();
-    }
 
     private static JsonNode refused(String body, int status) {
         HttpResponse<String> answer = service.send("POST", STATE, viewer, body);

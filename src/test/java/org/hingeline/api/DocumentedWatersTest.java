@@ -7,42 +7,18 @@ import java.io.IOException;
 import java.net.http.HttpResponse;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.time.Instant;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.regex.MatchResult;
 import java.util.regex.Pattern;
-import org.hingeline.RunningService;
-import org.hingeline.SettableClock;
-import org.hingeline.monitor.Role;
-import org.junit.jupiter.api.AfterAll;
-import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.io.TempDir;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.json.JsonMapper;
 import tools.jackson.databind.node.ObjectNode;
 
 /** The examples of waters in the README and in the description are what the service answers. */
-class DocumentedWatersTest {
+class DocumentedWatersTest extends AskedByViewer {
     private static final JsonMapper JSON = new JsonMapper();
-
-    @TempDir
-    private static Path data;
-
-    private static RunningService service;
-    private static String viewer;
-
-    @BeforeAll
-    static void start() {
-        service = RunningService.start(data, new SettableClock(Instant.parse("2026-05-14T12:00:00Z")));
-        viewer = service.token(Role.VIEWER);
-    }
-
-    @AfterAll
-    static void stop() {
-        service.close();
-    }
 
     private static JsonNode answer(String path, String body) {
         HttpResponse<String> answer =

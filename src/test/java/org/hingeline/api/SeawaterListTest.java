@@ -4,26 +4,18 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import java.net.http.HttpResponse;
-import java.nio.file.Path;
-import java.time.Instant;
 import java.util.Locale;
 import java.util.function.IntFunction;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
-import org.hingeline.RunningService;
-import org.hingeline.SettableClock;
-import org.hingeline.monitor.Role;
-import org.junit.jupiter.api.AfterAll;
-import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.json.JsonMapper;
 
 /** Lists of waters through HTTP. */
-class SeawaterListTest {
+class SeawaterListTest extends AskedByViewer {
     private static final String STATES = "/api/v1/seawater/states";
     private static final Description DESCRIPTION = new Description();
     private static final String GOOD =
@@ -43,23 +35,6 @@ class SeawaterListTest {
             "constants":"millero2006","boron":"uppstrom1974","uncertainty":{"ph":0.0212345678,\
             "totalAlkalinityUmolKg":10.12345678,"dicUmolKg":10.12345678,"pco2Uatm":10.12345678,\
             "temperatureC":0.112345678,"salinity":0.112345678,"calciumMmolKg":0.112345678}}}}""";
-
-    @TempDir
-    private static Path data;
-
-    private static RunningService service;
-    private static String viewer;
-
-    @BeforeAll
-    static void start() {
-        service = RunningService.start(data, new SettableClock(Instant.parse("2026-05-14T12:00:00Z")));
-        viewer = service.token(Role.VIEWER);
-    }
-
-    @AfterAll
-    static void stop() {
-        service.close();
-    }
 
     private static String list(int count, IntFunction<String> water) {
         return "{\"waters\":[" + IntStream.range(0, count).mapToObj(water).collect(Collectors.joining(",")) + "]}";

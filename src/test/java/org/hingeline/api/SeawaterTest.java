@@ -6,42 +6,18 @@ import static org.assertj.core.api.Assertions.within;
 import java.net.http.HttpRequest;
 import java.net.http.HttpRequest.BodyPublishers;
 import java.net.http.HttpResponse;
-import java.nio.file.Path;
-import java.time.Instant;
 import java.util.List;
 import java.util.Locale;
-import org.hingeline.RunningService;
-import org.hingeline.SettableClock;
 import org.hingeline.monitor.Role;
-import org.junit.jupiter.api.AfterAll;
-import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import tools.jackson.databind.JsonNode;
 
 /** Waters computed through HTTP. */
-class SeawaterTest {
+class SeawaterTest extends AskedByViewer {
     private static final String STATE = "/api/v1/seawater/state";
     private static final Description DESCRIPTION = new Description();
-
-    @TempDir
-    private static Path data;
-
-    private static RunningService service;
-    private static String viewer;
-
-    @BeforeAll
-    static void start() {
-        service = RunningService.start(data, new SettableClock(Instant.parse("2026-05-14T12:00:00Z")));
-        viewer = service.token(Role.VIEWER);
-    }
-
-    @AfterAll
-    static void stop() {
-        service.close();
-    }
 
     private static JsonNode state(String water, Object... values) {
         HttpResponse<String> answer =
