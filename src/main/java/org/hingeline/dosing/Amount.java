@@ -7,4 +7,8 @@ package org.hingeline.dosing;
  * @param low its lower end
  * @param high its upper end
  */
-public record Amount(double value, double low, double high) {}
+public record Amount(double value, double low, double high) {
+    Amount times(double factor) {
+        return new Amount(value * factor, low * factor, high * factor);
+    }
+}

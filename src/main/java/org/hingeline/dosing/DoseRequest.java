@@ -15,12 +15,14 @@ import org.jspecify.annotations.Nullable;
  * @param inputNotes what is wrong with the inputs; empty when nothing is
  * @param receiver what receives the dose
  * @param target what it is to reach
- * @param agent the chemical
- * @param form its hydration, read from the label
- * @param assayPercent g of that form in 100 g of what is weighed, 1 to 100
+ * @param product what is weighed
  * @param bounds what the plan may not cross
- * @param stockGramsPerLitre strength of the stock solution, g of what is weighed per L; null when none is given
+ * @param stock the solution it is added as; null when none is given
  * @param aerationPco2Atm what aeration reaches, atm
+ * @param larvae whether larvae are in the water that is dosed
+ * @param companion a second agent, to hold pH or pCO2 with; null for one agent alone
+ * @param ammoniaMgL total ammonia in the water, mg/L as N; null when it is not known
+ * @param surroundings where the water is; null for one that is known by its numbers alone
  */
 public record DoseRequest(
         @Nullable CarbonateResult water,
@@ -28,12 +30,14 @@ public record DoseRequest(
         List<InputNote> inputNotes,
         Receiver receiver,
         Target target,
-        Agent agent,
-        Agent.Form form,
-        double assayPercent,
+        Product product,
         Bounds bounds,
-        @Nullable Double stockGramsPerLitre,
-        double aerationPco2Atm) {
+        @Nullable Stock stock,
+        double aerationPco2Atm,
+        boolean larvae,
+        @Nullable Companion companion,
+        @Nullable Double ammoniaMgL,
+        @Nullable Surroundings surroundings) {
     /** 420 µatm, today's air. */
     public static final double AIR_PCO2_ATM = 420e-6;
 
@@ -42,29 +46,40 @@ public record DoseRequest(
         inputNotes = List.copyOf(inputNotes);
         Objects.requireNonNull(receiver, "receiver");
         Objects.requireNonNull(target, "target");
-        Objects.requireNonNull(agent, "agent");
-        Objects.requireNonNull(form, "form");
+        Objects.requireNonNull(product, "product");
         Objects.requireNonNull(bounds, "bounds");
-        if (!agent.forms().contains(form)) {
-            throw new IllegalArgumentException(agent.words() + " has no form \"" + form.code() + "\"");
-        }
     }
 
-    /** Sound inputs, pure anhydrous sodium carbonate, default bounds, no stock given, aeration to today's air. */
-    public static DoseRequest ofSodiumCarbonate(
-            CarbonateResult water, InputUncertainty uncertainty, double volumeL, Target target) {
-        Agent agent = Agent.SODIUM_CARBONATE;
-        return new DoseRequest(
-                water,
-                uncertainty,
-                List.of(),
-                new Receiver.Tank(volumeL),
-                target,
-                agent,
-                agent.forms().get(0),
-                100,
-                Bounds.DEFAULTS,
-                null,
-                AIR_PCO2_ATM);
+    /** Sound inputs, pure sodium carbonate, default bounds, no stock given, aeration to today's air, no larvae. */
+    public static DoseRequestBuilder of(
+            @Nullable CarbonateResult water, InputUncertainty uncertainty, Receiver receiver, Target target) {
+        return new DoseRequestBuilder(water, uncertainty, receiver, target);
+    }
+
+    /** The same question, to be changed. */
+    public DoseRequestBuilder but() {
+        return new DoseRequestBuilder(water, uncertainty, receiver, target)
+                .inputNotes(inputNotes)
+                .product(product)
+                .bounds(bounds)
+                .stock(stock)
+                .aerationPco2Atm(aerationPco2Atm)
+                .larvae(larvae)
+                .companion(companion)
+                .ammoniaMgL(ammoniaMgL)
+                .surroundings(surroundings);
+    }
+
+    /** What may be weighed: one product, or two. */
+    List<Product> products() {
+        Companion second = companion;
+        return second == null ? List.of(product) : List.of(product, second.product());
+    }
+
+    /** The stock of the first product (0) or the second (1). */
+    @Nullable
+    Stock stockOf(int index) {
+        Companion second = companion;
+        return index == 0 ? stock : second == null ? null : second.stock();
     }
 }

@@ -1,62 +1,126 @@
 package org.hingeline.dosing;
 
+import java.util.List;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.CarbonateSystem;
+import org.hingeline.seawater.Conditions;
 import org.hingeline.seawater.KnownPair;
 import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
 
 /**
- * A body of water and what an agent makes of it, closed to the air: alkalinity and inorganic carbon add up, all else
- * follows. The water of the stock solution is not counted.
+ * A body of water and what one product, or two in a fixed proportion, make of it, closed to the air: alkalinity, inorganic
+ * carbon and calcium add up, all else follows. The water of the stock solution is not counted.
  */
 final class DosedWater {
     private final CarbonateState before;
-    private final Agent agent;
+    private final List<Product> products;
+    private final double[] molPerAlkalinity;
     private final double kilograms;
-    private final double molPerGram;
     private final double aerationPco2Atm;
 
+    /** With the first product alone. */
     DosedWater(CarbonateState before, DoseRequest request) {
-        this.before = before;
-        this.agent = request.agent();
-        this.kilograms = kilograms(before, request.receiver());
-        this.molPerGram = request.assayPercent() / 100 / request.form().gramsPerMol();
-        this.aerationPco2Atm = request.aerationPco2Atm();
+        this(before, request, List.of(request.product()), Mix.OF_FIRST);
     }
 
-    private static double kilograms(CarbonateState water, Receiver receiver) {
-        Receiver.Tank tank = (Receiver.Tank) receiver;
-        return tank.volumeL() / 1000 * water.densityKgM3();
+    DosedWater(CarbonateState before, DoseRequest request, List<Product> products, Mix mix) {
+        this.before = before;
+        this.products = List.copyOf(products);
+        this.kilograms = request.receiver().litresDosed() / 1000 * before.densityKgM3();
+        this.aerationPco2Atm = request.aerationPco2Atm();
+        this.molPerAlkalinity = new double[products.size()];
+        double alkalinity = 0;
+        for (int i = 0; i < molPerAlkalinity.length; i++) {
+            alkalinity += mix.of(i) * products.get(i).agent().alkalinityPerMol();
+        }
+        for (int i = 0; i < molPerAlkalinity.length; i++) {
+            molPerAlkalinity[i] = mix.of(i) / alkalinity;
+        }
     }
 
     CarbonateState before() {
         return before;
     }
 
-    /** Alkalinity that a mass in g adds, mol/kg-seawater. */
-    double alkalinityOf(double massG) {
-        return massG * molPerGram * agent.alkalinityPerMol() / kilograms;
+    List<Product> products() {
+        return products;
     }
 
-    /** The mass in g that adds that much alkalinity, mol/kg-seawater. */
-    double massOf(double alkalinity) {
-        return alkalinity * kilograms / (molPerGram * agent.alkalinityPerMol());
+    /** The mass in g of a product when all add that much alkalinity, mol/kg-seawater. */
+    double massOf(int product, double alkalinity) {
+        return alkalinity
+                * molPerAlkalinity[product]
+                * kilograms
+                / products.get(product).molPerGram();
     }
 
-    /** The water with that much alkalinity added by the agent, mol/kg-seawater. */
+    /** The water with that much alkalinity added, mol/kg-seawater. */
     CarbonateState with(double alkalinity) {
-        double carbon = alkalinity * agent.dicPerMol() / agent.alkalinityPerMol();
-        return solve(new AlkalinityAndDic(before.totalAlkalinity() + alkalinity, before.dic() + carbon));
+        return closed(mols(alkalinity));
     }
 
     /** The water with that much alkalinity added, then aerated. */
     CarbonateState aeratedWith(double alkalinity) {
-        return solve(new AlkalinityAndPco2(before.totalAlkalinity() + alkalinity, aerationPco2Atm));
+        return aerated(mols(alkalinity));
     }
 
-    private CarbonateState solve(KnownPair known) {
-        return CarbonateSystem.solve(before.constants(), before.conditions(), known)
+    /** The water with a mass of each product, g. */
+    CarbonateState withMasses(double... grams) {
+        return closed(molsOf(grams));
+    }
+
+    /** The water with a mass of each product, g, then aerated. */
+    CarbonateState aeratedWithMasses(double... grams) {
+        return aerated(molsOf(grams));
+    }
+
+    private double[] mols(double alkalinity) {
+        double[] mols = molPerAlkalinity.clone();
+        for (int i = 0; i < mols.length; i++) {
+            mols[i] *= alkalinity;
+        }
+        return mols;
+    }
+
+    private double[] molsOf(double... grams) {
+        double[] mols = grams.clone();
+        for (int i = 0; i < mols.length; i++) {
+            mols[i] *= products.get(i).molPerGram() / kilograms;
+        }
+        return mols;
+    }
+
+    private CarbonateState closed(double[] mols) {
+        double dic = before.dic();
+        for (int i = 0; i < mols.length; i++) {
+            dic += mols[i] * products.get(i).agent().dicPerMol();
+        }
+        return solve(mols, new AlkalinityAndDic(alkalinity(mols), dic));
+    }
+
+    private CarbonateState aerated(double[] mols) {
+        return solve(mols, new AlkalinityAndPco2(alkalinity(mols), aerationPco2Atm));
+    }
+
+    private double alkalinity(double[] mols) {
+        double alkalinity = before.totalAlkalinity();
+        for (int i = 0; i < mols.length; i++) {
+            alkalinity += mols[i] * products.get(i).agent().alkalinityPerMol();
+        }
+        return alkalinity;
+    }
+
+    private CarbonateState solve(double[] mols, KnownPair known) {
+        double calcium = 0;
+        for (int i = 0; i < mols.length; i++) {
+            calcium += mols[i] * products.get(i).agent().calciumPerMol();
+        }
+        Conditions conditions = before.conditions();
+        return CarbonateSystem.solve(
+                        before.constants(),
+                        calcium == 0 ? conditions : conditions.withCalcium(before.calcium() + calcium),
+                        known)
                 .orElseThrow();
     }
 }

@@ -5,18 +5,21 @@ import java.util.List;
 import org.hingeline.seawater.CarbonateResult;
 import org.hingeline.seawater.CarbonateResult.Solved;
 import org.hingeline.seawater.CarbonateResult.Unsolvable;
-import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.Caution;
 import org.hingeline.seawater.Coverage;
 
 /** Everything that refuses a request before any dose is looked for; all reasons are given at once. */
 final class RequestCheck {
     private static final double VOLUME_MAX_L = 1e7;
+    private static final double FLOW_MAX_L_MIN = 1e6;
+    private static final double HOLD_PCO2_MAX_ATM = 10_000e-6;
+    private static final double AMMONIA_MAX_MG_L = 100;
     private static final double AERATION_MIN_ATM = 100e-6;
     private static final double AERATION_MAX_ATM = 5000e-6;
     private static final double ALKALINITY_MAX = 0.01;
-    /** A stock is to stay clear of saturation by a fifth, or it falls out when it cools. */
-    private static final double SOLUBILITY_SHARE = 0.8;
+    private static final double STOCK_MAX_C = 40;
+    private static final double SALINITY_MIN = 1;
+    private static final double SALINITY_MAX = 42;
 
     private final DoseRequest request;
     private final List<Reason> reasons = new ArrayList<>();
@@ -30,10 +33,16 @@ final class RequestCheck {
         check.inputs();
         check.water();
         check.receiver();
-        check.product();
-        check.stock();
+        for (int i = 0; i < request.products().size(); i++) {
+            check.product(i);
+        }
         check.target();
         check.aeration();
+        check.ammonia();
+        Companion companion = request.companion();
+        if (companion != null) {
+            check.companion(companion);
+        }
         return check.reasons;
     }
 
@@ -66,6 +75,13 @@ final class RequestCheck {
                                 + " µmol/kg is no water of a hatchery.",
                         "Titrate again: 0 to " + Words.number(ALKALINITY_MAX * 1e6, 0) + " µmol/kg is accepted.");
             }
+            double salinity = solved.state().conditions().salinity();
+            if (!(salinity >= SALINITY_MIN && salinity <= SALINITY_MAX)) {
+                refuse(
+                        "salinity-implausible",
+                        "A salinity of " + Words.number(salinity, 1) + " is no sea water of a hatchery.",
+                        "Check the value and its unit: practical salinity, 1 to 42, not conductivity in mS/cm.");
+            }
             for (Caution caution : Coverage.ofDecisiveFits(solved.state().conditions())) {
                 refuse(
                         "outside-fits",
@@ -76,56 +92,96 @@ final class RequestCheck {
     }
 
     private void receiver() {
-        if (request.receiver() instanceof Receiver.Tank tank
-                && !(tank.volumeL() > 0 && tank.volumeL() <= VOLUME_MAX_L)) {
+        double volumeL = request.receiver() instanceof Receiver.Tank tank
+                ? tank.volumeL()
+                : request.receiver() instanceof Receiver.FlowThrough through ? through.volumeL() : 1;
+        if (!(volumeL > 0 && volumeL <= VOLUME_MAX_L)) {
             refuse(
                     "volume-implausible",
-                    "A tank of " + tank.volumeL() + " L cannot be planned for.",
+                    "A tank of " + volumeL + " L cannot be planned for.",
                     "Give the volume in litres, above 0 and at most 10,000,000 (10,000 m³).");
         }
+        double flowLMin = request.receiver() instanceof Receiver.Flow flow
+                ? flow.flowLMin()
+                : request.receiver() instanceof Receiver.FlowThrough through ? through.flowLMin() : 1;
+        if (!(flowLMin > 0 && flowLMin <= FLOW_MAX_L_MIN)) {
+            refuse(
+                    "flow-implausible",
+                    "A flow of " + flowLMin + " L/min cannot be planned for.",
+                    "Give the flow in litres per minute, above 0 and at most 1,000,000.");
+        }
+        if (request.receiver() instanceof Receiver.FlowThrough && volumeL < flowLMin) {
+            refuse(
+                    "flow-implausible",
+                    "A tank of " + volumeL + " L that " + flowLMin
+                            + " L/min flow through holds its water for less than a minute.",
+                    "Check both, or plan for the flow alone.");
+        }
     }
 
-    private void product() {
-        if (!(request.assayPercent() >= 1 && request.assayPercent() <= 100)) {
+    private void product(int index) {
+        Product product = request.products().get(index);
+        if (!(product.assayPercent() >= 1 && product.assayPercent() <= 100)) {
             refuse(
                     "assay-implausible",
-                    "An assay of " + request.assayPercent() + " % cannot be.",
+                    "An assay of " + product.assayPercent() + " % cannot be.",
                     "Read the assay from the label or the certificate: 1 to 100 %.");
         }
+        if (request.larvae() && product.agent().corrosive()) {
+            refuse(
+                    "corrosive-with-larvae",
+                    product.agent().words() + " is labelled corrosive, and larvae are in the water.",
+                    "Use sodium carbonate or bicarbonate, or dose a header tank or storage without larvae.");
+        }
+        Stock stock = request.stockOf(index);
+        if (stock != null) {
+            stock(stock);
+        }
     }
 
-    private void stock() {
-        Double strength = request.stockGramsPerLitre();
-        if (strength == null) {
-            return;
-        }
-        if (!(strength > 0 && Double.isFinite(strength))) {
+    private void stock(Stock stock) {
+        if (!(stock.gramsPerLitre() > 0 && Double.isFinite(stock.gramsPerLitre()))) {
             refuse(
                     "stock-implausible",
-                    "A stock of " + strength + " g/L cannot be.",
+                    "A stock of " + stock.gramsPerLitre() + " g/L cannot be.",
                     "Give the strength of the stock in g per litre, above 0.");
-            return;
         }
-        if (request.water() instanceof Solved solved) {
-            double most = strongestStock(solved.state());
-            if (strength > most) {
-                refuse(
-                        "stock-too-strong",
-                        "A stock of " + Words.number(strength, 1) + " g/L does not stay dissolved at "
-                                + Words.number(solved.state().conditions().temperatureC(), 1)
-                                + " °C, the temperature of the water.",
-                        "Make the stock no stronger than " + Words.number(Math.floor(most), 0) + " g/L.");
-            }
+        Double temperatureC = stock.temperatureC();
+        if (temperatureC != null && !(temperatureC >= 0 && temperatureC <= STOCK_MAX_C)) {
+            refuse(
+                    "stock-implausible",
+                    "A stock at " + temperatureC + " °C cannot be planned for.",
+                    "Give the temperature of the stock, 0 to " + Words.number(STOCK_MAX_C, 0) + " °C.");
         }
     }
 
-    /** g of what is weighed per L of stock, at the water's temperature; a litre of stock holds less than 1 kg of water. */
-    private double strongestStock(CarbonateState water) {
-        double anhydrousPerLitre = 10
-                * request.agent()
-                        .solubility()
-                        .gramsPer100GWater(water.conditions().temperatureC());
-        return SOLUBILITY_SHARE * anhydrousPerLitre / request.agent().anhydrousShare(request.form());
+    private void companion(Companion companion) {
+        Hold hold = companion.hold();
+        boolean plausible = hold instanceof Hold.PhAtMost ph
+                ? ph.phTotalMax() > 6 && ph.phTotalMax() <= 9
+                : ((Hold.Pco2) hold).pco2Atm() >= AERATION_MIN_ATM && ((Hold.Pco2) hold).pco2Atm() <= HOLD_PCO2_MAX_ATM;
+        if (!plausible) {
+            refuse(
+                    "hold-implausible",
+                    hold.words() + " cannot be held.",
+                    "Give a ceiling of pH above 6 and at most 9, or a pCO2 of 100 to 10,000 µatm.");
+        }
+        if (!(request.target() instanceof Target.OmegaAragonite)) {
+            refuse(
+                    "hold-needs-omega",
+                    "Two agents are planned for a target of Ω aragonite, not for "
+                            + request.target().words() + ".",
+                    "Give the target as Ω aragonite, or ask for one agent.");
+        }
+        Agent first = request.product().agent();
+        Agent second = companion.product().agent();
+        if (first.alkalinityPerMol() * second.dicPerMol() == first.dicPerMol() * second.alkalinityPerMol()) {
+            refuse(
+                    "agents-alike",
+                    first.words() + " and " + second.words()
+                            + " add alkalinity and carbon in the same proportion: nothing can be held with them.",
+                    "Choose two that differ, such as sodium carbonate and sodium bicarbonate.");
+        }
     }
 
     private void target() {
@@ -166,6 +222,16 @@ final class RequestCheck {
                     "aeration-implausible",
                     "Aeration to " + Words.number(pco2 * 1e6, 0) + " µatm cannot be.",
                     "Give the pCO2 that aeration reaches: 100 to 5000 µatm, 420 in open air.");
+        }
+    }
+
+    private void ammonia() {
+        Double totalMgL = request.ammoniaMgL();
+        if (totalMgL != null && !(totalMgL >= 0 && totalMgL <= AMMONIA_MAX_MG_L)) {
+            refuse(
+                    "ammonia-implausible",
+                    "Total ammonia of " + totalMgL + " mg/L cannot be.",
+                    "Give total ammonia in mg/L as N, 0 to " + Words.number(AMMONIA_MAX_MG_L, 0) + ".");
         }
     }
 

@@ -4,9 +4,8 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import org.hingeline.seawater.CarbonateState;
-import org.jspecify.annotations.Nullable;
 
-/** Splits a mass into hourly additions of about the same step in pH, none above the bound. */
+/** Splits a dose into hourly steps of about the same change in pH, none above the bound. */
 final class StepSchedule {
     /** Three days of hourly additions: beyond that the water has changed by itself. */
     static final int STEPS_MAX = 72;
@@ -14,54 +13,77 @@ final class StepSchedule {
     private static final int MINUTES_BETWEEN = 60;
 
     private final DosedWater water;
+    private final DoseRequest request;
     private final Bounds bounds;
-    private final Balance balance;
-    private final @Nullable Double stockGramsPerLitre;
+    private final Weighing weighing;
 
-    StepSchedule(DosedWater water, Bounds bounds, Balance balance, @Nullable Double stockGramsPerLitre) {
+    StepSchedule(DosedWater water, DoseRequest request, Weighing weighing) {
         this.water = water;
-        this.bounds = bounds;
-        this.balance = balance;
-        this.stockGramsPerLitre = stockGramsPerLitre;
+        this.request = request;
+        this.bounds = request.bounds();
+        this.weighing = weighing;
     }
 
-    /** The fewest additions that keep the step in pH; empty when the balance is too coarse or the time too long. */
-    Optional<List<DoseStep>> of(long units) {
-        double whole = Math.abs(at(units).phTotal() - water.before().phTotal());
+    /** The fewest steps that keep the bounds; empty when the balance is too coarse or the time too long. */
+    Optional<List<DoseStep>> steps() {
+        long parcels = weighing.parcels();
+        double whole = Math.abs(at(parcels).phTotal() - water.before().phTotal());
         int fewest = Math.max(1, (int) Math.ceil(whole / bounds.phPerHourMax()));
-        for (int n = fewest; n <= Math.min(STEPS_MAX, units); n++) {
-            List<DoseStep> steps = split(units, n);
-            if (keepsTheStep(steps)) {
+        for (int n = fewest; n <= Math.min(STEPS_MAX, parcels); n++) {
+            List<DoseStep> steps = split(n);
+            if (keepsTheBounds(steps)) {
                 return Optional.of(steps);
             }
         }
-        return Optional.empty();
+        List<DoseStep> steps = longest();
+        return steps.size() <= STEPS_MAX && keepsTheBounds(steps) ? Optional.of(steps) : Optional.empty();
     }
 
-    private List<DoseStep> split(long units, int n) {
+    /** Each step as long as the bound lets it be: where the balance is coarse, even steps may fail and these not. */
+    private List<DoseStep> longest() {
         List<DoseStep> steps = new ArrayList<>();
+        long parcels = weighing.parcels();
+        boolean rising = at(parcels).phTotal() > water.before().phTotal();
+        long given = 0;
+        while (given < parcels && steps.size() <= STEPS_MAX) {
+            double reach = at(given).phTotal() + (rising ? 1 : -1) * bounds.phPerHourMax();
+            double whole = at(parcels).phTotal();
+            boolean last = rising ? whole <= reach : whole >= reach;
+            long sum = last ? parcels : Math.max(given + 1, parcelsAt(reach, given, parcels, rising));
+            steps.add(step(steps.size() * MINUTES_BETWEEN, given, sum));
+            given = sum;
+        }
+        return steps;
+    }
+
+    private List<DoseStep> split(int n) {
+        List<DoseStep> steps = new ArrayList<>();
+        long parcels = weighing.parcels();
         double start = water.before().phTotal();
-        double whole = at(units).phTotal() - start;
+        double whole = at(parcels).phTotal() - start;
         long given = 0;
         for (int i = 1; i <= n; i++) {
-            long sum = i == n ? units : unitsAt(start + whole * i / n, given, units, whole > 0);
+            long sum = i == n ? parcels : parcelsAt(start + whole * i / n, given, parcels, whole > 0);
             if (sum > given) {
-                CarbonateState state = at(sum);
-                double massG = balance.grams(sum - given);
-                steps.add(new DoseStep(
-                        steps.size() * MINUTES_BETWEEN,
-                        massG,
-                        stockGramsPerLitre == null ? null : massG / stockGramsPerLitre * 1000,
-                        state.phTotal(),
-                        state.omegaAragonite()));
+                steps.add(step(steps.size() * MINUTES_BETWEEN, given, sum));
             }
             given = sum;
         }
         return steps;
     }
 
-    /** The largest sum of units whose pH has not passed the mark. */
-    private long unitsAt(double mark, long from, long to, boolean rising) {
+    private DoseStep step(int atMinutes, long given, long sum) {
+        CarbonateState state = at(sum);
+        List<Addition> additions = new ArrayList<>();
+        for (int i = 0; i < weighing.products(); i++) {
+            additions.add(Addition.of(
+                    request.receiver(), weighing.grams(i, given, sum), weighing.grams(i, 0, sum), request.stockOf(i)));
+        }
+        return new DoseStep(atMinutes, additions, state.phTotal(), state.omegaAragonite());
+    }
+
+    /** The largest sum of parcels whose pH has not passed the mark. */
+    private long parcelsAt(double mark, long from, long to, boolean rising) {
         long low = from;
         long high = to;
         while (high - low > 1) {
@@ -76,10 +98,14 @@ final class StepSchedule {
         return low;
     }
 
-    private boolean keepsTheStep(List<DoseStep> steps) {
+    private boolean keepsTheBounds(List<DoseStep> steps) {
+        double ceiling = ceilingHeld();
         double ph = water.before().phTotal();
         for (DoseStep step : steps) {
-            if (Math.abs(step.phTotal() - ph) > bounds.phPerHourMax()) {
+            if (Math.abs(step.phTotal() - ph) > bounds.phPerHourMax()
+                    || step.phTotal() > ceiling
+                    || step.phTotal() > bounds.phTotalMax()
+                    || step.omegaAragonite() > bounds.omegaAragoniteMax()) {
                 return false;
             }
             ph = step.phTotal();
@@ -87,7 +113,17 @@ final class StepSchedule {
         return true;
     }
 
-    private CarbonateState at(long units) {
-        return water.with(water.alkalinityOf(balance.grams(units)));
+    /** A ceiling of pH that two agents hold, unless the water comes down to it from above. */
+    private double ceilingHeld() {
+        Companion companion = request.companion();
+        return companion != null
+                        && companion.hold() instanceof Hold.PhAtMost ph
+                        && companion.hold().keptBy(water.before())
+                ? ph.phTotalMax()
+                : Double.POSITIVE_INFINITY;
+    }
+
+    private CarbonateState at(long some) {
+        return water.withMasses(weighing.grams(some));
     }
 }

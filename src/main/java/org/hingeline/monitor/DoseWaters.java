@@ -3,8 +3,10 @@ package org.hingeline.monitor;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.function.Function;
 import java.util.stream.Collectors;
 import org.hingeline.dosing.InputNote;
@@ -78,6 +80,19 @@ public final class DoseWaters {
                 .collect(Collectors.toMap(Sensor::code, Function.identity()));
         WaterAssessor.Inputs inputs = WaterAssessor.Inputs.of(state, sensors);
         return new Water(inputs.solve(rules), inputs.uncertainty(), notes);
+    }
+
+    /** The newest usable total ammonia of a point, mg/L as N, while it may stand for the present. */
+    Optional<Double> ammoniaMgL(PointStatus status) {
+        Instant now = status.now();
+        Duration age = Freshness.of(Quantity.AMMONIA, status.point());
+        return storage.read(books -> books.place().sensorsOf(status.point().id()).stream()
+                .filter(sensor -> sensor.quantity() == Quantity.AMMONIA)
+                .flatMap(sensor ->
+                        books.readings().newestBefore(sensor.id(), now.minus(age), now.plusMillis(1)).stream())
+                .max(Comparator.comparing(ReadingBook.StoredReading::at))
+                .filter(reading -> reading.flag() != Flag.SUSPECT)
+                .map(ReadingBook.StoredReading::value));
     }
 
     private static InputNote note(MissingInput missing, Instant now) {

@@ -45,6 +45,11 @@ public record CarbonateState(
         cautions = List.copyOf(cautions);
     }
 
+    /** Total calcium, mol/kg-seawater: measured where it was, otherwise from salinity. */
+    public double calcium() {
+        return constants.calcium(conditions);
+    }
+
     /** The same water, as what follows from that pair, with those cautions. */
     CarbonateState asKnownFrom(KnownPair pair, List<Caution> carried) {
         return new CarbonateState(

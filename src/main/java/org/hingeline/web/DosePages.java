@@ -192,7 +192,10 @@ final class DosePages {
                 mass == null ? "" : amounts.mass(mass.high()),
                 plan.steps().stream().map(step -> step(step, amounts)).toList(),
                 waters(plan),
-                plan.remedies().stream().map(remedy -> remedy.detail()).toList(),
+                plan.remedies().stream()
+                        .filter(remedy -> remedy.reaches() != null)
+                        .map(Remedy::detail)
+                        .toList(),
                 plan.cautions().stream().map(caution -> caution.detail()).toList(),
                 plan.reasons().stream()
                         .map(reason -> new DoseView.Reason(why(reason.detail()), reason.lift()))
@@ -211,7 +214,7 @@ final class DosePages {
                 mass == null || after == null
                         ? ""
                         : (plan.remedies().stream().anyMatch(Remedy::reachesTarget)
-                                        ? "Air first. If that cannot be: "
+                                        ? "First what needs no chemical, below. If that cannot be: "
                                         : "")
                                 + amounts.mass(mass.value()) + " of " + (agent == null ? "" : agent.hydration())
                                 + " sodium carbonate in "

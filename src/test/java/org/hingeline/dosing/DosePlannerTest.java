@@ -88,18 +88,9 @@ class DosePlannerTest {
 
     @Test
     void sure_inputs_leave_the_constants_in_the_range_of_the_mass_only() {
-        DoseRequest sure = new DoseRequest(
-                Waters.measured(),
-                new InputUncertainty(0, 0, 0, 0, 0, 0, 0),
-                List.of(),
-                TO_THREE.receiver(),
-                TO_THREE.target(),
-                TO_THREE.agent(),
-                TO_THREE.form(),
-                100,
-                Bounds.DEFAULTS,
-                null,
-                420e-6);
+        DoseRequest sure = TO_THREE.but()
+                .uncertainty(new InputUncertainty(0, 0, 0, 0, 0, 0, 0))
+                .build();
         DosePlan plan = DosePlanner.plan(sure);
         assertThat(plan.omegaAragoniteGain().high())
                 .isEqualTo(plan.omegaAragoniteGain().value());
@@ -121,24 +112,50 @@ class DosePlannerTest {
         CarbonateResult hot = CarbonateSystem.solve(Conditions.of(80, 30), new PhAndAlkalinity(8, 2e-3));
         CarbonateResult estuary = CarbonateSystem.solve(Conditions.of(15, 12), new PhAndAlkalinity(7.6, 1.2e-3));
         CarbonateResult strange = CarbonateSystem.solve(Conditions.of(15, 30), new PhAndAlkalinity(7.6, 50e-3));
+        CarbonateResult mistaken = CarbonateSystem.solve(Conditions.of(15, 46), new PhAndAlkalinity(7.6, 2e-3));
         return Stream.of(
-                refusal("water-unknown", r -> Waters.withWater(r, null)),
-                refusal("water-unsolvable", r -> Waters.withWater(r, hot)),
-                refusal("outside-fits", r -> Waters.withWater(r, estuary)),
-                refusal("water-implausible", r -> Waters.withWater(r, strange)),
+                refusal("water-unknown", r -> r.but().water(null).build()),
+                refusal("water-unsolvable", r -> r.but().water(hot).build()),
+                refusal("outside-fits", r -> r.but().water(estuary).build()),
+                refusal("water-implausible", r -> r.but().water(strange).build()),
                 refusal("volume-implausible", r -> Waters.withVolumeL(r, 0)),
                 refusal("volume-implausible", r -> Waters.withVolumeL(r, -4000)),
                 refusal("volume-implausible", r -> Waters.withVolumeL(r, 1.1e7)),
                 refusal("volume-implausible", r -> Waters.withVolumeL(r, Double.NaN)),
+                refusal("salinity-implausible", r -> r.but().water(mistaken).build()),
+                refusal(
+                        "stock-implausible",
+                        r -> r.but().stock(new Stock(50, 60.0)).build()),
+                refusal(
+                        "corrosive-with-larvae",
+                        r -> r.but()
+                                .product(Product.pure(Agent.SODIUM_HYDROXIDE))
+                                .larvae(true)
+                                .build()),
+                refusal(
+                        "corrosive-with-larvae",
+                        r -> r.but()
+                                .product(Product.pure(Agent.CALCIUM_HYDROXIDE))
+                                .larvae(true)
+                                .build()),
+                refusal(
+                        "water-beyond-bounds",
+                        r -> r.but().bounds(new Bounds(7.6, 4.5, 0.15)).build()),
                 refusal("no-steps", r -> Waters.withVolumeL(r, 0.001)),
-                refusal("no-steps", r -> Waters.withBounds(r, new Bounds(8.4, 4.5, 0.001))),
+                refusal(
+                        "no-steps",
+                        r -> r.but().bounds(new Bounds(8.4, 4.5, 0.001)).build()),
                 refusal("assay-implausible", r -> Waters.withProduct(r, "anhydrous", 0.5, null)),
                 refusal("assay-implausible", r -> Waters.withProduct(r, "anhydrous", 100.1, null)),
                 refusal("assay-implausible", r -> Waters.withProduct(r, "anhydrous", Double.NaN, null)),
                 refusal("stock-implausible", r -> Waters.withProduct(r, "anhydrous", 100, 0.0)),
                 refusal("stock-too-strong", r -> Waters.withProduct(r, "anhydrous", 100, 250.0)),
-                refusal("aeration-implausible", r -> Waters.withAeration(r, 420)),
-                refusal("would-break-bounds", r -> Waters.withBounds(r, new Bounds(8.0, 4.5, 0.15))));
+                refusal(
+                        "aeration-implausible",
+                        r -> r.but().aerationPco2Atm(420).build()),
+                refusal(
+                        "would-break-bounds",
+                        r -> r.but().bounds(new Bounds(8.0, 4.5, 0.15)).build()));
     }
 
     private static Arguments refusal(String code, UnaryOperator<DoseRequest> change) {
@@ -159,7 +176,8 @@ class DosePlannerTest {
     @EnumSource(InputNote.Problem.class)
     void refuses_inputs_that_cannot_be_stood_on_and_says_what_to_do(InputNote.Problem problem) {
         InputNote note = new InputNote("pH", problem, "sensor ph-3, last read 5 h ago.");
-        DosePlan plan = DosePlanner.plan(Waters.withNotes(TO_THREE, note));
+        DosePlan plan =
+                DosePlanner.plan(TO_THREE.but().inputNotes(List.of(note)).build());
         assertThat(plan.outcome()).isEqualTo(Outcome.REFUSED);
         assertThat(plan.reasons()).singleElement().satisfies(r -> {
             assertThat(r.code()).isEqualTo("input-" + problem.word());
@@ -185,7 +203,7 @@ class DosePlannerTest {
     @Test
     void refuses_to_dose_water_that_would_pass_the_bounds_once_its_co2_leaves() {
         CarbonateResult rich = CarbonateSystem.solve(Conditions.of(22, 33), new AlkalinityAndPco2(2600e-6, 4000e-6));
-        DosePlan plan = DosePlanner.plan(Waters.withWater(TO_THREE, rich));
+        DosePlan plan = DosePlanner.plan(TO_THREE.but().water(rich).build());
         assertThat(plan.outcome()).isEqualTo(Outcome.REFUSED);
         assertThat(plan.reasons()).singleElement().satisfies(r -> {
             assertThat(r.code()).isEqualTo("aeration-would-break-bounds");
@@ -205,12 +223,20 @@ class DosePlannerTest {
     @Test
     void a_stock_near_saturation_says_how_strong_it_may_be() {
         CarbonateResult cold = CarbonateSystem.solve(Conditions.of(10, 30), new PhAndAlkalinity(7.7, 2078e-6));
-        DoseRequest request = Waters.withWater(Waters.withProduct(TO_THREE, "anhydrous", 100, 100.0), cold);
-        // 12.2 g in 100 g of water at 10 °C, four fifths of it
+        DoseRequest request = Waters.withProduct(TO_THREE, "anhydrous", 100, 100.0)
+                .but()
+                .water(cold)
+                .build();
+        // 12.2 g in 112.2 g of solution at 10 °C, four fifths of it
         assertThat(DosePlanner.plan(request).reasons())
-                .extracting(Reason::lift)
-                .containsExactly("Make the stock no stronger than 97 g/L.");
-        DoseRequest crystals = Waters.withWater(Waters.withProduct(TO_THREE, "decahydrate", 100, 100.0), cold);
+                .singleElement()
+                .satisfies(r -> assertThat(r.lift())
+                        .startsWith("Make the stock no stronger than 86 g/L: ")
+                        .contains(" L or more for "));
+        DoseRequest crystals = Waters.withProduct(TO_THREE, "decahydrate", 100, 100.0)
+                .but()
+                .water(cold)
+                .build();
         assertThat(DosePlanner.plan(crystals).outcome()).isEqualTo(Outcome.PLAN);
     }
 

@@ -1,6 +1,5 @@
 package org.hingeline.dosing;
 
-import java.util.List;
 import org.hingeline.seawater.CarbonateResult;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.CarbonateSystem;
@@ -27,96 +26,24 @@ final class Waters {
     }
 
     static DoseRequest towards(Target target) {
-        return DoseRequest.ofSodiumCarbonate(measured(), UNCERTAINTY, 4000, target);
+        return DoseRequest.of(measured(), UNCERTAINTY, new Receiver.Tank(4000), target)
+                .build();
     }
 
-    static DoseRequest withWater(DoseRequest r, CarbonateResult water) {
-        return new DoseRequest(
-                water,
-                r.uncertainty(),
-                r.inputNotes(),
-                r.receiver(),
-                r.target(),
-                r.agent(),
-                r.form(),
-                r.assayPercent(),
-                r.bounds(),
-                r.stockGramsPerLitre(),
-                r.aerationPco2Atm());
-    }
-
-    static DoseRequest withNotes(DoseRequest r, InputNote... notes) {
-        return new DoseRequest(
-                r.water(),
-                r.uncertainty(),
-                List.of(notes),
-                r.receiver(),
-                r.target(),
-                r.agent(),
-                r.form(),
-                r.assayPercent(),
-                r.bounds(),
-                r.stockGramsPerLitre(),
-                r.aerationPco2Atm());
+    static DoseRequest towards(Target target, Agent agent) {
+        return towards(target).but().product(Product.pure(agent)).build();
     }
 
     static DoseRequest withVolumeL(DoseRequest r, double volumeL) {
-        return new DoseRequest(
-                r.water(),
-                r.uncertainty(),
-                r.inputNotes(),
-                new Receiver.Tank(volumeL),
-                r.target(),
-                r.agent(),
-                r.form(),
-                r.assayPercent(),
-                r.bounds(),
-                r.stockGramsPerLitre(),
-                r.aerationPco2Atm());
+        return r.but().receiver(new Receiver.Tank(volumeL)).build();
     }
 
+    /** Of the same agent; a stock of no strength is none. */
     static DoseRequest withProduct(DoseRequest r, String form, double assayPercent, Double stockGramsPerLitre) {
-        return new DoseRequest(
-                r.water(),
-                r.uncertainty(),
-                r.inputNotes(),
-                r.receiver(),
-                r.target(),
-                r.agent(),
-                r.agent().form(form).orElseThrow(),
-                assayPercent,
-                r.bounds(),
-                stockGramsPerLitre,
-                r.aerationPco2Atm());
-    }
-
-    static DoseRequest withBounds(DoseRequest r, Bounds bounds) {
-        return new DoseRequest(
-                r.water(),
-                r.uncertainty(),
-                r.inputNotes(),
-                r.receiver(),
-                r.target(),
-                r.agent(),
-                r.form(),
-                r.assayPercent(),
-                bounds,
-                r.stockGramsPerLitre(),
-                r.aerationPco2Atm());
-    }
-
-    static DoseRequest withAeration(DoseRequest r, double pco2Atm) {
-        return new DoseRequest(
-                r.water(),
-                r.uncertainty(),
-                r.inputNotes(),
-                r.receiver(),
-                r.target(),
-                r.agent(),
-                r.form(),
-                r.assayPercent(),
-                r.bounds(),
-                r.stockGramsPerLitre(),
-                pco2Atm);
+        Agent agent = r.product().agent();
+        return r.but()
+                .product(new Product(agent, agent.form(form).orElseThrow(), assayPercent))
+                .stock(stockGramsPerLitre == null ? null : new Stock(stockGramsPerLitre, null))
+                .build();
     }
 }

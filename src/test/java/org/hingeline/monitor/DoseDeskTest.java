@@ -5,9 +5,11 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.hingeline.monitor.AlertsTest.minutes;
 import static org.hingeline.monitor.Hatchery.T0;
 
+import java.time.Duration;
 import java.util.List;
 import org.hingeline.dosing.DosePlan;
 import org.hingeline.dosing.Reason;
+import org.hingeline.measure.Quantity;
 import org.hingeline.quality.Flag;
 import org.junit.jupiter.api.Test;
 
@@ -63,6 +65,25 @@ class DoseDeskTest {
         hatchery.read("t-1", 22, T0.plusSeconds(1));
 
         refused("ph-1", "suspect");
+    }
+
+    @Test
+    void total_ammonia_read_within_three_days_is_taken_up() {
+        hatchery.sensor("nh-1", Quantity.AMMONIA, 0.05);
+        hatchery.read("nh-1", 0.4, T0);
+        hatchery.clock.set(T0.plus(Duration.ofDays(2)));
+        hatchery.readAllButPh(hatchery.clock.instant());
+        hatchery.read("ph-1", 7.9, hatchery.clock.instant());
+
+        DosePlan fresh = hatchery.doses.plan(hatchery.site, wish("tank"));
+        assertThat(fresh.ammonia().totalMgL()).isEqualTo(0.4);
+
+        hatchery.clock.set(T0.plus(Duration.ofDays(4)));
+        hatchery.readAllButPh(hatchery.clock.instant());
+        hatchery.read("ph-1", 7.9, hatchery.clock.instant());
+
+        DosePlan old = hatchery.doses.plan(hatchery.site, wish("tank"));
+        assertThat(old.ammonia()).isNull();
     }
 
     @Test

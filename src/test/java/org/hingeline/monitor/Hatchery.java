@@ -179,6 +179,7 @@ final class Hatchery {
             case "c" -> "conductivity";
             case "ca" -> "calcium";
             case "o2" -> "dissolvedOxygen";
+            case "nh" -> "ammonia";
             default -> throw new IllegalArgumentException(sensor);
         };
     }
