@@ -59,6 +59,8 @@ public final class WebServer implements AutoCloseable {
             new LimitRoutes(services.board(), services.limits()).addTo(routes);
             new AlertRoutes(services.board(), services.alerts()).addTo(routes);
             new DoseRoutes(services.doses()).addTo(routes);
+            new DoseRecordRoutes(services.board(), services.doseRecords(), services.doseHistory(), services.clock())
+                    .addTo(routes);
             new SeawaterRoutes(new WaterCalculator(), meters).addTo(routes);
             new OperationRoutes(services.checks(), registry).addTo(routes);
             new SignInPages(services.accounts(), pages, secrets, rules.cookiesOverTlsOnly()).addTo(routes);
