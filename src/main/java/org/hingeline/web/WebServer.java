@@ -65,9 +65,11 @@ public final class WebServer implements AutoCloseable {
             new OperationRoutes(services.checks(), registry).addTo(routes);
             new SignInPages(services.accounts(), pages, secrets, rules.cookiesOverTlsOnly()).addTo(routes);
             new StatusPages(services.board(), pages).addTo(routes);
-            new PointPages(services.board(), services.limits(), pages).addTo(routes);
+            new PointPages(services.board(), services.limits(), new DoseRows(services.doseHistory()), pages)
+                    .addTo(routes);
             new AlertPages(services.board(), services.alerts(), pages).addTo(routes);
-            new DosePages(services.board(), services.doses(), pages).addTo(routes);
+            new DosePages(services.board(), services.doses(), services.doseRecords(), pages).addTo(routes);
+            new DoseRecordPages(services.board(), services.doseRecords(), services.doseHistory(), pages).addTo(routes);
             new MessagePages(services.board(), pages).addTo(routes);
             new SetupPages(services.place(), services.accounts(), pages).addTo(routes);
             live.addTo(routes);

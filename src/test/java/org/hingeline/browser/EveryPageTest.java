@@ -8,8 +8,10 @@ import java.time.Instant;
 import java.util.List;
 import java.util.function.Supplier;
 import org.hingeline.RunningService;
+import org.hingeline.monitor.Role;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
@@ -56,6 +58,13 @@ class EveryPageTest {
         }
         assertThat(service.postReadings("{\"readings\":[" + rows + "]}").statusCode())
                 .isEqualTo(200);
+        String dose = """
+                {"key":"every-page-1","point":"larval-3","massG":54,"lot":"SA-2291","at":"%s",
+                 "agent":{"code":"sodium-carbonate","hydration":"anhydrous","assayPercent":99}}
+                """.formatted(now.minusSeconds(3600));
+        assertThat(service.send("POST", "/api/v1/doses", service.token(Role.OPERATOR), dose)
+                        .statusCode())
+                .isEqualTo(201);
     }
 
     @AfterAll
@@ -90,6 +99,21 @@ class EveryPageTest {
                         .isEmpty();
                 assertThat(guest.console()).as("console of " + page).isEmpty();
             }
+        }
+    }
+
+    @Test
+    void a_dose_is_marked_on_the_course_of_its_tank_and_said_in_words() {
+        try (Browser browser = Browser.phone()) {
+            Guest guest = new Guest(browser, service).comeIn("ana").open("/points/larval-3");
+
+            guest.waitFor("#history-words", "Doses, marked on the chart: 54 g on ");
+
+            guest.element(".charts").click();
+            assertThat(guest.console()).isEmpty();
+            guest.open("/points/larval-4");
+            guest.until("the course", () -> guest.has(".charts h3"));
+            assertThat(guest.text("#history-words")).doesNotContain("Doses");
         }
     }
 }
