@@ -55,6 +55,7 @@
   const charts = make("div", { class: "charts", tabindex: "0", role: "group", "aria-label": `Course of the water at ${place.dataset.name}. Left and right arrows move through time.` });
   place.append(buttons, words, charts);
   const summary = document.getElementById("history-words") ?? place.parentNode.appendChild(make("p", { id: "history-words" }));
+  const summaryHow = document.getElementById("history-how");
 
   const colour = name => getComputedStyle(document.documentElement).getPropertyValue(`--${name}`).trim();
   const fixed = (value, digits) => value == null ? null : value.toFixed(digits);
@@ -116,15 +117,23 @@
     const put = doses.length === 0 ? "" : ` Doses, marked on the chart: ${doses.map(d => `${d.massG} g on ${clock.format(new Date(d.at))}`).join("; ")}.`;
     if (known.length === 0) {
       summary.textContent = `No Ω is known for the last ${range.label}.${put}`;
+      if (summaryHow) summaryHow.hidden = true;
       return;
     }
     const lowest = known.reduce((a, b) => b.omegaAragonite < a.omegaAragonite ? b : a);
     const highest = known.reduce((a, b) => b.omegaAragonite > a.omegaAragonite ? b : a);
     const gaps = states.length - found.length;
+    if (summaryHow) {
+      summaryHow.hidden = false;
+      summaryHow.href = how(lowest.at).href;
+    }
     summary.textContent = `In the last ${range.label}: lowest Ω ${fixed(lowest.omegaAragonite, 2)} on ${clock.format(new Date(lowest.at))}, `
       + `highest Ω ${fixed(highest.omegaAragonite, 2)} on ${clock.format(new Date(highest.at))}`
       + (gaps === 0 ? ", no gaps." : gaps === 1 ? ", one gap without measurements." : `, ${gaps} gaps without measurements.`) + put;
   }
+
+  /* the state of that moment, with where each of its inputs came from */
+  const how = iso => make("a", { href: place.dataset.how.replace("MOMENT", encodeURIComponent(iso)) }, "How was this computed?");
 
   function say(index) {
     const s = states[index];
@@ -139,7 +148,8 @@
       s.temperatureC == null ? null : `${fixed(s.temperatureC, 1)} °C`,
       s.salinity == null ? null : `salinity ${fixed(s.salinity, 1)}`,
     ];
-    words.textContent = `${clock.format(new Date(s.at))}: ${parts.filter(Boolean).join(", ")}.`;
+    words.textContent = `${clock.format(new Date(s.at))}: ${parts.filter(Boolean).join(", ")}. `;
+    words.append(how(s.at));
   }
 
   function hatch(context) {

@@ -37,6 +37,7 @@ import org.hingeline.monitor.PlaceDesk;
 import org.hingeline.monitor.ReadingIntake;
 import org.hingeline.monitor.Secrets;
 import org.hingeline.monitor.Signals;
+import org.hingeline.monitor.StateWishes;
 import org.hingeline.monitor.StatusBoard;
 import org.hingeline.monitor.Storage;
 import org.hingeline.monitor.WaterRules;
@@ -149,6 +150,7 @@ final class Service implements AutoCloseable {
                 doseRecords(settings, database, clock, water, signals),
                 new DoseHistory(database, clock, water),
                 place,
+                new StateWishes(database, water),
                 checks);
         try {
             WebServer web = WebServer.start(

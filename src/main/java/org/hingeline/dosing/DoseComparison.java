@@ -23,10 +23,11 @@ import org.hingeline.seawater.KnownPair.PhAndDic;
  * Holds a dose against what was foretold of it, once the tank is mixed.
  *
  * <p>What is compared is the alkalinity that arrived with the alkalinity that was to arrive. Where alkalinity was measured
- * again after mixing, it is the difference of the two. Otherwise it follows from pH: of all waters that the agent makes
- * out of the one before (for each mol of alkalinity its own share of carbon), the one that has the pH that was read, at the
- * temperature it was read. That is exact for a tank closed to the air; CO2 that leaves also raises pH, and then more seems
- * to have arrived. A stale alkalinity in the states after the dose is not used: it does not know of the dose.
+ * again after mixing, sharply enough for a dose of that size, it is the difference of the two. Otherwise it follows from
+ * pH: of all waters that the agent makes out of the one before (for each mol of alkalinity its own share of carbon), the one
+ * that has the pH that was read, at the temperature it was read. That is exact for a tank closed to the air; CO2 that
+ * leaves also raises pH, and then more seems to have arrived. A stale alkalinity in the states after the dose is not used:
+ * it does not know of the dose.
  *
  * <p>Two readings of one sensor are compared with each other, so neither the constants' share nor the sensor's common error
  * counts in full: the uncertainty is that of the foretold change, the scatter of the readings, and {@link #OF_WEIGHING}.
@@ -123,17 +124,26 @@ public final class DoseComparison {
         return List.copyOf(byReading.values());
     }
 
+    /** By the alkalinity measured since, if there is one and it is sharp enough for a dose of this size; else by pH. */
     private static DoseOutcome judged(Dosed dosed, List<After> settled) {
         List<After> titrated = settled.stream()
                 .filter(s -> !s.alkalinityAt().isBefore(dosed.mixedAt()))
                 .toList();
-        Basis basis = titrated.isEmpty() ? Basis.PH : Basis.TOTAL_ALKALINITY;
-        List<Arrival> arrivals = (titrated.isEmpty() ? settled : titrated)
-                .stream()
-                        .flatMap(s -> arrived(dosed, basis, s, s.phTotal()).stream()
-                                .mapToObj(alkalinity -> new Arrival(s, alkalinity)))
-                        .sorted(Comparator.comparingDouble(Arrival::alkalinity))
-                        .toList();
+        if (!titrated.isEmpty()) {
+            DoseOutcome byAlkalinity = judged(dosed, Basis.TOTAL_ALKALINITY, titrated);
+            if (byAlkalinity.verdict() != Verdict.CANNOT_TELL) {
+                return byAlkalinity;
+            }
+        }
+        return judged(dosed, Basis.PH, settled);
+    }
+
+    private static DoseOutcome judged(Dosed dosed, Basis basis, List<After> settled) {
+        List<Arrival> arrivals = settled.stream()
+                .flatMap(s -> arrived(dosed, basis, s, s.phTotal()).stream()
+                        .mapToObj(alkalinity -> new Arrival(s, alkalinity)))
+                .sorted(Comparator.comparingDouble(Arrival::alkalinity))
+                .toList();
         if (arrivals.isEmpty()) {
             return DoseOutcome.cannotTell("The readings after it do not make a water that can be worked out.");
         }

@@ -1,10 +1,12 @@
 package org.hingeline.monitor;
 
 import java.util.List;
+import java.util.Map;
 import java.util.Objects;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.Caution;
 import org.hingeline.seawater.InputUncertainty;
+import org.hingeline.seawater.Origin;
 import org.hingeline.seawater.StateUncertainty;
 import org.jspecify.annotations.Nullable;
 
@@ -13,6 +15,8 @@ import org.jspecify.annotations.Nullable;
  *
  * @param state the water
  * @param uncertainty of its quantities; null when none was asked for
+ * @param omegaAragoniteByOrigin the uncertainty of Ω of aragonite that each origin alone would give; empty when none was
+ *     asked for
  * @param inputs the standard uncertainties counted with, the usual ones where the wish named none
  * @param warmed the water at another temperature; null when not asked for
  * @param equilibrated the water in balance with a gas; null when not asked for
@@ -24,6 +28,7 @@ import org.jspecify.annotations.Nullable;
 public record CalculatedWater(
         CarbonateState state,
         @Nullable StateUncertainty uncertainty,
+        Map<Origin, Double> omegaAragoniteByOrigin,
         InputUncertainty inputs,
         @Nullable Treated warmed,
         @Nullable Treated equilibrated,
@@ -33,6 +38,7 @@ public record CalculatedWater(
         WaterMethod method) {
     public CalculatedWater {
         Objects.requireNonNull(state, "state");
+        omegaAragoniteByOrigin = Map.copyOf(omegaAragoniteByOrigin);
         Objects.requireNonNull(inputs, "inputs");
         cautions = List.copyOf(cautions);
         Objects.requireNonNull(method, "method");

@@ -23,8 +23,6 @@ public final class DoseRecords {
     /** How long a record can be undone; and how long ago a dose still counts as put in now. */
     public static final Duration UNDO = Duration.ofMinutes(10);
 
-    private static final Duration DAY = Duration.ofHours(24);
-
     /**
      * What the site allows.
      *
@@ -99,8 +97,8 @@ public final class DoseRecords {
         }
         double massG = sound.given().massG();
         boolean past = corrected != null || past(sound.at(), now);
-        requireWithinDay(books, point, sound.at(), massG, corrects, past && manager(caller, site));
-        boolean secondPerson = needsSecondPerson(massG);
+        DoseBounds.requireWithinDay(books, rules, point, sound.at(), massG, corrects, past && manager(caller, site));
+        boolean secondPerson = DoseBounds.needsSecondPerson(rules, massG);
         if (secondPerson && !caller.browser()) {
             throw new FieldFaultsException(
                     "massG",
@@ -153,34 +151,6 @@ public final class DoseRecords {
 
     private static boolean past(Instant at, Instant now) {
         return Duration.between(at, now).compareTo(UNDO) > 0;
-    }
-
-    private boolean needsSecondPerson(double massG) {
-        return rules.secondPersonAboveG() < Rules.OFF && massG > rules.secondPersonAboveG();
-    }
-
-    /**
-     * Within 24 hours before or after it: a calendar day would allow twice as much around midnight. What is in the water
-     * already has to go on record all the same, so a manager may record it past the bound.
-     */
-    private void requireWithinDay(
-            Books books, Point point, Instant at, double massG, @Nullable Long without, boolean allowed) {
-        if (rules.maxGramsPerTankAndDay() >= Rules.OFF || allowed || massG == 0) {
-            return;
-        }
-        double given = books.doses().between(point.id(), at.minus(DAY), at.plus(DAY)).stream()
-                .filter(Dose::counts)
-                .filter(dose -> without == null || dose.id() != without)
-                .mapToDouble(dose -> dose.given().massG())
-                .sum();
-        if (given + massG > rules.maxGramsPerTankAndDay()) {
-            throw new FieldFaultsException(
-                    "massG",
-                    "massG " + massG + " is too much: " + point.name() + " has " + given
-                            + " g within 24 hours, and at most "
-                            + rules.maxGramsPerTankAndDay()
-                            + " g are allowed; what was put in already, more than ten minutes ago, a manager can record");
-        }
     }
 
     /**
@@ -254,7 +224,8 @@ public final class DoseRecords {
             Point point = books.place().pointById(dose.pointId()).orElseThrow();
             boolean putInNow = dose.corrects() == null && !past(dose.at(), dose.recordedAt());
             if (putInNow) {
-                requireWithinDay(books, point, now, dose.given().massG(), id, false);
+                DoseBounds.requireWithinDay(
+                        books, rules, point, now, dose.given().massG(), id, false);
             }
             books.doses()
                     .confirm(

@@ -22,6 +22,8 @@ public final class StatusBoard {
     /** Rows answered to one question for history. */
     private static final int MOST_STATES = 10_000;
 
+    private static final Duration SHORTEST_LOOK_BACK = Duration.ofHours(3);
+
     private final Storage storage;
     private final InstantSource clock;
 
@@ -52,6 +54,13 @@ public final class StatusBoard {
                         books.alerts().openAlerts(site.id()),
                         books.place().batchesNow(site.id(), now),
                         now)));
+    }
+
+    /** The newest water state of a point at or before a moment, if there was one in the hours before it. */
+    public Optional<WaterState> stateAt(Point point, Instant at) {
+        Duration back = point.maxGap().compareTo(SHORTEST_LOOK_BACK) < 0 ? SHORTEST_LOOK_BACK : point.maxGap();
+        return storage.read(books -> books.water().newestOfEach(point.id(), at.minus(back), at, back)).stream()
+                .reduce((earlier, later) -> later);
     }
 
     private static PointStatus status(Books books, Point point, List<Alert> alerts, List<Batch> batches, Instant now) {

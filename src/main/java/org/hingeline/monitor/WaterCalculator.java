@@ -1,6 +1,7 @@
 package org.hingeline.monitor;
 
 import java.util.List;
+import java.util.Map;
 import java.util.stream.Stream;
 import org.hingeline.monitor.CalculatedWater.Treated;
 import org.hingeline.monitor.CalculatedWater.UnionisedAmmonia;
@@ -65,6 +66,7 @@ public final class WaterCalculator {
         return new CalculatedWater(
                 state,
                 uncertainty == null ? null : uncertainty.ofState(),
+                uncertainty == null ? Map.of() : uncertainty.ofOmegaAragoniteByOrigin(),
                 water.wished().uncertainty(),
                 warmed,
                 equilibrated,

@@ -1,6 +1,8 @@
 package org.hingeline.monitor;
 
 import java.util.List;
+import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import org.hingeline.seawater.CarbonateResult;
 import org.hingeline.seawater.CarbonateResult.Unsolvable;
 import org.hingeline.seawater.CarbonateSystem;
@@ -48,27 +50,50 @@ record WishedWater(
                     reason,
                     "totalAlkalinityUmolKg",
                     alkalinity + " is too low for " + ph + ": a higher one is accepted");
-        } else if (reason == UnsolvableReason.INPUTS_CONTRADICT && known instanceof DicAndPco2) {
-            String dic = given(faults, "dicUmolKg", wish.dicUmolKg());
-            String pco2 = given(faults, "pco2Uatm", wish.pco2Uatm());
-            faults.addImpossible(
-                    reason,
-                    "dicUmolKg",
-                    dic + " and " + pco2 + " contradict each other: dissolved CO2 alone would exceed the inorganic"
-                            + " carbon; a higher dicUmolKg is accepted");
-            faults.addImpossible(reason, "pco2Uatm", pco2 + " is too high for " + dic + ": a lower one is accepted");
-        } else {
+        } else if (reason == UnsolvableReason.INPUTS_CONTRADICT && known instanceof DicAndPco2 pair) {
+            tellOfCo2(pair, faults);
+        } else if (reason == UnsolvableReason.TOO_MUCH_CARBON) {
             faults.addImpossible(
                     reason,
                     "",
-                    "no state was found for this water (" + reason.code() + "): "
-                            + String.join(
-                                    " ",
-                                    given(faults, "ph", wish.ph()),
-                                    given(faults, "totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg()),
-                                    given(faults, "dicUmolKg", wish.dicUmolKg()),
-                                    given(faults, "pco2Uatm", wish.pco2Uatm())));
+                    given(faults) + " would need more inorganic carbon than any water holds: at most 1000000 µmol/kg is"
+                            + " accepted");
+        } else {
+            faults.addImpossible(
+                    reason, "", "no state was found for this water (" + reason.code() + "): " + given(faults));
         }
+    }
+
+    /** A mole of CO2 in a kilogram of water needs more than an atmosphere, so the two are told apart by their size. */
+    private void tellOfCo2(DicAndPco2 pair, WaterFaults faults) {
+        String dic = given(faults, "dicUmolKg", wish.dicUmolKg());
+        String pco2 = given(faults, "pco2Uatm", wish.pco2Uatm());
+        boolean tooMuch = pair.pco2Atm() > pair.dic();
+        faults.addImpossible(
+                UnsolvableReason.INPUTS_CONTRADICT,
+                "dicUmolKg",
+                dic + " and " + pco2 + " contradict each other: "
+                        + (tooMuch
+                                ? "dissolved CO2 alone would exceed the inorganic carbon; a higher dicUmolKg is accepted"
+                                : "with so little CO2 the water would be above pH 14; a lower dicUmolKg is accepted"));
+        faults.addImpossible(
+                UnsolvableReason.INPUTS_CONTRADICT,
+                "pco2Uatm",
+                pco2
+                        + (tooMuch ? " is too high for " : " is too low for ")
+                        + dic
+                        + (tooMuch ? ": a lower one is accepted" : ": a higher one is accepted"));
+    }
+
+    /** The two that are known, with their values. */
+    private String given(WaterFaults faults) {
+        return Stream.of(
+                        given(faults, "ph", wish.ph()),
+                        given(faults, "totalAlkalinityUmolKg", wish.totalAlkalinityUmolKg()),
+                        given(faults, "dicUmolKg", wish.dicUmolKg()),
+                        given(faults, "pco2Uatm", wish.pco2Uatm()))
+                .filter(each -> !each.isEmpty())
+                .collect(Collectors.joining(" and "));
     }
 
     private static String given(WaterFaults faults, String name, @Nullable Double value) {

@@ -18,6 +18,12 @@ import org.hingeline.seawater.KnownPair.PhAndPco2;
  * ({@link PhReadElsewhere}).
  */
 public final class CarbonateSystem {
+    /** Bicarbonate and carbonate over CO2: beyond it the water would be above pH 14. */
+    private static final double IONISED_MAX = 1e14;
+
+    /** Ten times what is accepted as an input, mol/kg-seawater: no equilibrium constant holds there. */
+    private static final double DIC_MAX = 1;
+
     private CarbonateSystem() {}
 
     /** The state of the water, or why there is none; never throws for a bad number. */
@@ -41,9 +47,12 @@ public final class CarbonateSystem {
             return refusal;
         }
         KnownPh ph = known.ph();
-        return ph != null && ph.readAtC(conditions.temperatureC()) != conditions.temperatureC()
+        CarbonateResult result = ph != null && ph.readAtC(conditions.temperatureC()) != conditions.temperatureC()
                 ? PhReadElsewhere.solve(constants, conditions, known, ph)
                 : here(constants, conditions, known);
+        return result instanceof Solved solved && solved.state().dic() > DIC_MAX
+                ? tooMuchCarbon(solved.state())
+                : result;
     }
 
     /** With pH, if it is known, read at the water's own temperature, and every input judged before. */
@@ -77,7 +86,7 @@ public final class CarbonateSystem {
         }
         DicAndPco2 pair = (DicAndPco2) known;
         double ionised = pair.dic() / k.co2(pair.pco2Atm()) - 1;
-        return ionised > 0
+        return ionised > 0 && ionised <= IONISED_MAX
                 ? solvedFromCarbon(k, conditions, pair, hydrogenIonOfIonised(k, ionised), pair.dic())
                 : contradiction(pair);
     }
@@ -114,7 +123,15 @@ public final class CarbonateSystem {
         return new Unsolvable(
                 UnsolvableReason.INPUTS_CONTRADICT,
                 "dissolved inorganic carbon " + pair.dic() + " mol/kg and pCO2 " + pair.pco2Atm()
-                        + " atm contradict each other: dissolved CO2 alone would exceed the inorganic carbon");
+                        + " atm contradict each other: dissolved CO2 would be as much as the inorganic carbon or more, or so"
+                        + " little of it that the water would be above pH 14");
+    }
+
+    private static Unsolvable tooMuchCarbon(CarbonateState state) {
+        return new Unsolvable(
+                UnsolvableReason.TOO_MUCH_CARBON,
+                state.known() + " would need " + state.dic()
+                        + " mol/kg of inorganic carbon, and no water holds more than " + DIC_MAX);
     }
 
     static Unsolvable notConverged(KnownPair pair) {

@@ -18,6 +18,7 @@ final class Cautions {
 
     private final SeawaterConstants k;
     private @Nullable List<Caution> found;
+    private @Nullable String place;
 
     private Cautions(SeawaterConstants k, @Nullable List<Caution> found) {
         this.k = k;
@@ -60,7 +61,10 @@ final class Cautions {
 
     private void add(FitRange range) {
         if (!range.covers(k.temperatureC, k.salinity)) {
-            add(range.outside(k.temperatureC, k.salinity));
+            if (place == null) {
+                place = FitRange.place(k.temperatureC, k.salinity);
+            }
+            add(range.outside(place));
         }
     }
 

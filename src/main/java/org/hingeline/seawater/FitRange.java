@@ -47,11 +47,17 @@ public final class FitRange {
 
     /** A caution naming the fit and its range when the water lies outside. */
     public Optional<Caution> caution(double temperatureC, double salinity) {
-        return covers(temperatureC, salinity) ? Optional.empty() : Optional.of(outside(temperatureC, salinity));
+        return covers(temperatureC, salinity) ? Optional.empty() : Optional.of(outside(place(temperatureC, salinity)));
     }
 
-    Caution outside(double temperatureC, double salinity) {
-        return new Caution(CAUTION_CODE, words + plain(salinity) + ", " + plain(temperatureC) + " °C.");
+    /** The caution for a water outside, told by its {@link #place}. */
+    Caution outside(String place) {
+        return new Caution(CAUTION_CODE, words + place);
+    }
+
+    /** The end of the sentence, the same for every fit. */
+    static String place(double temperatureC, double salinity) {
+        return plain(salinity) + ", " + plain(temperatureC) + " °C.";
     }
 
     private static String plain(double value) {

@@ -13,7 +13,7 @@ package org.hingeline.seawater;
  */
 final class HydrogenIonRoot {
     /** Relative in [H]. */
-    static final double TOLERANCE = 1e-12;
+    static final double TOLERANCE = 1e-14;
 
     static final int MAX_STEPS = 100;
 
@@ -100,6 +100,10 @@ final class HydrogenIonRoot {
     /** h moved by that much in ln h, or the middle of the bracket in ln h where that would leave it. */
     private static double moved(double h, double move, double low, double high) {
         double next = h * (Math.abs(move) < SMALL_STEP ? 1 + move * (1 + move / 2) : Math.exp(move));
+        if (Math.abs(move) <= LAST_STEP) {
+            // rounding alone can carry the last step across a bound
+            return Math.max(low, Math.min(high, next));
+        }
         return next >= low && next <= high ? next : Math.sqrt(low) * Math.sqrt(high);
     }
 }

@@ -12,7 +12,7 @@ import org.hingeline.seawater.KnownPair.PhAndPco2;
  */
 final class PhReadElsewhere {
     private static final int MAX_STEPS = 50;
-    private static final double TOLERANCE = 1e-13;
+    private static final double TOLERANCE = 1e-12;
 
     private PhReadElsewhere() {}
 
@@ -41,18 +41,23 @@ final class PhReadElsewhere {
      */
     private static CarbonateResult withPco2OfTheWater(
             SeawaterConstants water, Conditions conditions, SeawaterConstants k, Conditions sample, PhAndPco2 pair) {
-        double pco2OfSample = pair.pco2Atm();
+        double x = Math.log(pair.pco2Atm());
+        double lastX = Double.NaN;
+        double lastMiss = Double.NaN;
         for (int step = 0; step < MAX_STEPS; step++) {
-            CarbonateResult result = CarbonateSystem.here(k, sample, new PhAndPco2(pair.ph(), pco2OfSample))
+            CarbonateResult result = CarbonateSystem.here(k, sample, new PhAndPco2(pair.ph(), Math.exp(x)))
                     .then(read -> carriedOver(water, conditions, read));
             if (!(result instanceof Solved solved)) {
                 return result;
             }
-            double ratio = pair.pco2Atm() / solved.state().pco2Atm();
-            if (Math.abs(ratio - 1) <= TOLERANCE) {
+            double miss = Math.log(pair.pco2Atm() / solved.state().pco2Atm());
+            if (Math.abs(miss) <= TOLERANCE) {
                 return result;
             }
-            pco2OfSample *= ratio;
+            double slope = -(miss - lastMiss) / (x - lastX);
+            lastX = x;
+            lastMiss = miss;
+            x += slope > 0.05 ? miss / slope : miss;
         }
         return CarbonateSystem.notConverged(pair);
     }

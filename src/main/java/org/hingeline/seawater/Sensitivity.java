@@ -5,8 +5,9 @@ package org.hingeline.seawater;
  * temperature, salinity and measured calcium.
  *
  * <p>Slopes with [H], carbon, the constants and calcium are closed forms. Those with temperature and salinity pass
- * through every fit at once and are central differences of smooth functions over a step that leaves about ten correct
- * digits; next to salinity 0, where the fits go with its square root, the step is one-sided.
+ * through every fit at once and are differences of smooth functions over a step so small that curvature leaves about
+ * six correct digits, and so large that rounding does. Next to salinity 0, where the fits go with its square root, no
+ * slope holds for long, and the step is that of a good salinometer.
  */
 final class Sensitivity {
     // quantities, the rows
@@ -37,8 +38,10 @@ final class Sensitivity {
     static final int CALCIUM = 10;
     static final int PARAMETERS = 11;
 
-    private static final double STEP_C = 0.01;
-    private static final double STEP_S = 0.01;
+    private static final double STEP_C = 1e-5;
+    private static final double STEP_S = 1e-5;
+    private static final double NEARLY_FRESH = 1;
+    private static final double STEP_S_NEARLY_FRESH = 0.01;
 
     /** d quantity / d ln [H]. */
     final double[] withLnH = new double[QUANTITIES];
@@ -68,15 +71,13 @@ final class Sensitivity {
         withCarbon(share);
         withConstants(share);
         withCalcium();
-        SeawaterConstants cooler = k.near(k.temperatureC - STEP_C, k.salinity);
         SeawaterConstants warmer = k.near(k.temperatureC + STEP_C, k.salinity);
-        difference(with[TEMPERATURE], cooler, warmer, 2 * STEP_C);
-        scaleWithTemperature = scaleStep(cooler, warmer, scale) / (2 * STEP_C);
-        double below = k.salinity >= STEP_S ? STEP_S : 0;
-        SeawaterConstants fresher = k.near(k.temperatureC, k.salinity - below);
-        SeawaterConstants saltier = k.near(k.temperatureC, k.salinity + STEP_S);
-        difference(with[SALINITY], fresher, saltier, below + STEP_S);
-        scaleWithSalinity = scaleStep(fresher, saltier, scale) / (below + STEP_S);
+        difference(with[TEMPERATURE], warmer, STEP_C);
+        scaleWithTemperature = scaleStep(warmer, scale) / STEP_C;
+        double stepS = k.salinity < NEARLY_FRESH ? STEP_S_NEARLY_FRESH : STEP_S;
+        SeawaterConstants saltier = k.near(k.temperatureC, k.salinity + stepS);
+        difference(with[SALINITY], saltier, stepS);
+        scaleWithSalinity = scaleStep(saltier, scale) / stepS;
     }
 
     private void withHydrogenIon(double[] share) {
@@ -133,24 +134,23 @@ final class Sensitivity {
         }
     }
 
-    private void difference(double[] row, SeawaterConstants lower, SeawaterConstants upper, double step) {
-        Speciation a = Speciation.of(lower, conditions, s.h(), s.dic());
-        Speciation b = Speciation.of(upper, conditions, s.h(), s.dic());
-        row[TA] = (alkalinity(upper) - alkalinity(lower)) / step;
-        row[CO2] = (b.co2() - a.co2()) / step;
-        row[BICARBONATE] = (b.bicarbonate() - a.bicarbonate()) / step;
-        row[CARBONATE] = (b.carbonate() - a.carbonate()) / step;
-        row[FCO2] = (b.fco2Atm() - a.fco2Atm()) / step;
-        row[PCO2] = (b.pco2Atm() - a.pco2Atm()) / step;
-        row[OMEGA_ARAGONITE] = (b.omegaAragonite() - a.omegaAragonite()) / step;
-        row[OMEGA_CALCITE] = (b.omegaCalcite() - a.omegaCalcite()) / step;
+    private void difference(double[] row, SeawaterConstants near, double step) {
+        Speciation moved = Speciation.of(near, conditions, s.h(), s.dic());
+        row[TA] = (alkalinity(near) - alkalinity(k)) / step;
+        row[CO2] = (moved.co2() - s.co2()) / step;
+        row[BICARBONATE] = (moved.bicarbonate() - s.bicarbonate()) / step;
+        row[CARBONATE] = (moved.carbonate() - s.carbonate()) / step;
+        row[FCO2] = (moved.fco2Atm() - s.fco2Atm()) / step;
+        row[PCO2] = (moved.pco2Atm() - s.pco2Atm()) / step;
+        row[OMEGA_ARAGONITE] = (moved.omegaAragonite() - s.omegaAragonite()) / step;
+        row[OMEGA_CALCITE] = (moved.omegaCalcite() - s.omegaCalcite()) / step;
     }
 
     private double alkalinity(SeawaterConstants near) {
         return Alkalinity.ofCarbon(near, s.h(), s.dic()) + Alkalinity.withoutCarbonate(near, conditions, s.h());
     }
 
-    private static double scaleStep(SeawaterConstants lower, SeawaterConstants upper, PhScale scale) {
-        return scale == PhScale.TOTAL ? 0 : upper.scales.offsetToTotal(scale) - lower.scales.offsetToTotal(scale);
+    private double scaleStep(SeawaterConstants near, PhScale scale) {
+        return scale == PhScale.TOTAL ? 0 : near.scales.offsetToTotal(scale) - k.scales.offsetToTotal(scale);
     }
 }

@@ -18,6 +18,8 @@ public enum UnsolvableReason {
     PCO2_OUT_OF_RANGE("pco2-out-of-range"),
     /** The two inputs contradict each other: together they would need a negative amount of carbon. */
     INPUTS_CONTRADICT("inputs-contradict"),
+    /** The two inputs would need more inorganic carbon than any water holds, 1 mol/kg. */
+    TOO_MUCH_CARBON("too-much-carbon"),
     /** The root finder ran out of steps. */
     NOT_CONVERGED("not-converged");
 

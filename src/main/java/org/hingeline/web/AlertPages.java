@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.Site;
+import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.AlertBook.Alert;
 import org.hingeline.monitor.AlertDesk;
 import org.hingeline.monitor.MessageDesk;
@@ -73,6 +74,7 @@ final class AlertPages {
                 PathPoints.acknowledged(alert, now, zone),
                 closed == null ? Moment.never() : Moment.of(closed, now, zone),
                 alert.returnedAt() == null ? alert.action() : "",
+                !alert.quantity().measured() && alert.quantity() != Quantity.SILENCE,
                 board.messagesOf(alert).stream()
                         .map(message -> told(message, now, zone))
                         .toList());

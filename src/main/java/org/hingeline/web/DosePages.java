@@ -23,6 +23,7 @@ import org.hingeline.monitor.FieldFaults;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.PointStatus;
 import org.hingeline.monitor.StatusBoard;
+import org.hingeline.monitor.WaterState;
 import org.hingeline.seawater.CarbonateState;
 import org.hingeline.web.view.DoseView;
 import org.hingeline.web.view.DoseView.Outcome;
@@ -118,7 +119,14 @@ final class DosePages {
                 status,
                 "dose",
                 "water",
-                new DoseView(point.point().code(), point.point().name(), waterNow(point, zone), form, result, record),
+                new DoseView(
+                        point.point().code(),
+                        point.point().name(),
+                        waterNow(point, zone),
+                        waterAt(point),
+                        form,
+                        result,
+                        record),
                 "");
     }
 
@@ -170,6 +178,11 @@ final class DosePages {
                 Words.plain(defaults.omegaAragoniteMax()),
                 "phPerHourMax",
                 Words.plain(defaults.phPerHourMax())));
+    }
+
+    private static String waterAt(PointStatus point) {
+        WaterState state = point.newest();
+        return state == null ? "" : state.at().toString();
     }
 
     private static String waterNow(PointStatus point, ZoneId zone) {

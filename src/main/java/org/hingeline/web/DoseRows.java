@@ -113,7 +113,7 @@ final class DoseRows {
                 + Words.number(foretold.phChangeUncertainty(), 3) + "), \u03a9 "
                 + Words.number(foretold.before().omegaAragonite(), 2) + " to "
                 + Words.number(foretold.after().omegaAragonite(), 2) + " (change \u00b1"
-                + Words.number(foretold.omegaChangeUncertainty(), 2) + "), mixed after "
+                + Words.number(foretold.omegaChangeUncertainty(), 3) + "), mixed after "
                 + Moment.span(Duration.ofMinutes(foretold.mixingMin())) + ".";
     }
 

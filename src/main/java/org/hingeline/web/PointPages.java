@@ -62,12 +62,14 @@ final class PointPages {
     private void page(Context ctx, int status, PointStatus point, Flash flash, Form refused, String refusedLimit) {
         ZoneId zone = PageMaker.zone(ctx);
         WaterState state = point.newest();
+        Optional<WaterState> lowest = lowest(point);
         PointView view = new PointView(
                 PathPoints.of(point, zone),
                 point.numbers().map(PointPages::lines).orElse(List.of()),
                 state == null ? List.of() : inputs(point, state, zone),
                 List.of(),
-                lowest(point, zone),
+                lowest.map(l -> words(l, point, zone)).orElse(""),
+                lowest.map(l -> l.at().toString()).orElse(""),
                 point.limits().stream()
                         .map(limit -> row(limit, limit.name().equals(refusedLimit) ? refused : Form.of(values(limit))))
                         .toList(),
@@ -199,7 +201,7 @@ final class PointPages {
                 .toList();
     }
 
-    private static String flag(Flag flag) {
+    static String flag(Flag flag) {
         return switch (flag) {
             case PASS -> "passed the range test";
             case NOT_EVALUATED -> "not tested";
@@ -209,16 +211,18 @@ final class PointPages {
         };
     }
 
-    private String lowest(PointStatus point, ZoneId zone) {
+    private Optional<WaterState> lowest(PointStatus point) {
         return board.history(point.point(), point.now().minus(COURSE), point.now(), Duration.ofMinutes(2)).stream()
                 .filter(state -> state.numbers() != null)
                 .min(Comparator.comparingDouble(
-                        state -> Objects.requireNonNull(state.numbers()).omegaAragonite()))
-                .map(state -> "Lowest \u03a9 in the last 48 h: "
-                        + Words.number(
-                                Quantity.OMEGA_ARAGONITE,
-                                Objects.requireNonNull(state.numbers()).omegaAragonite())
-                        + " at " + Moment.of(state.at(), point.now(), zone).clock() + ".")
-                .orElse("");
+                        state -> Objects.requireNonNull(state.numbers()).omegaAragonite()));
+    }
+
+    private static String words(WaterState lowest, PointStatus point, ZoneId zone) {
+        return "Lowest \u03a9 in the last 48 h: "
+                + Words.number(
+                        Quantity.OMEGA_ARAGONITE,
+                        Objects.requireNonNull(lowest.numbers()).omegaAragonite())
+                + " at " + Moment.of(lowest.at(), point.now(), zone).clock() + ".";
     }
 }

@@ -11,6 +11,7 @@ import org.hingeline.monitor.DoseRecords;
 import org.hingeline.monitor.LimitDesk;
 import org.hingeline.monitor.PlaceDesk;
 import org.hingeline.monitor.ReadingIntake;
+import org.hingeline.monitor.StateWishes;
 import org.hingeline.monitor.StatusBoard;
 
 /** The use cases the routes call. */
@@ -25,7 +26,7 @@ public record Services(
         DoseRecords doseRecords,
         DoseHistory doseHistory,
         PlaceDesk place,
-
+        StateWishes states,
         List<Check> checks) {
     public Services {
         checks = List.copyOf(checks);

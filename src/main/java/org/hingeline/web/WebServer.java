@@ -70,6 +70,8 @@ public final class WebServer implements AutoCloseable {
             new AlertPages(services.board(), services.alerts(), pages).addTo(routes);
             new DosePages(services.board(), services.doses(), services.doseRecords(), pages).addTo(routes);
             new DoseRecordPages(services.board(), services.doseRecords(), services.doseHistory(), pages).addTo(routes);
+            new CalculatorPages(services.board(), services.states(), new WaterCalculator(), pages).addTo(routes);
+            new ElectrodePages(pages).addTo(routes);
             new MessagePages(services.board(), pages).addTo(routes);
             new SetupPages(services.place(), services.accounts(), pages).addTo(routes);
             live.addTo(routes);

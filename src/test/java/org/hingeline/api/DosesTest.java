@@ -11,6 +11,7 @@ import java.time.Duration;
 import java.time.Instant;
 import java.util.List;
 import java.util.Locale;
+import java.util.stream.IntStream;
 import org.hingeline.RunningService;
 import org.hingeline.SettableClock;
 import org.hingeline.hatchery.Site;
@@ -95,6 +96,22 @@ class DosesTest {
                         .get("detail")
                         .asString())
                 .contains("another dose");
+    }
+
+    @Test
+    void two_taps_at_the_same_moment_record_once() {
+        String entry = entry("larval-3", 50);
+
+        List<Integer> answers = IntStream.range(0, 6)
+                .parallel()
+                .mapToObj(i ->
+                        service.send("POST", "/api/v1/doses", operator, entry).statusCode())
+                .sorted()
+                .toList();
+
+        assertThat(answers).containsExactly(200, 200, 200, 200, 200, 201);
+        assertThat(get("/api/v1/points/larval-3/doses", viewer, 200).get("doses"))
+                .hasSize(1);
     }
 
     @Test

@@ -19,7 +19,19 @@ import org.junit.jupiter.params.provider.EnumSource;
 /** Every page in both sizes: nothing blocked, nothing failed, nothing wider than the screen. */
 class EveryPageTest {
     private static final List<String> PAGES = List.of(
-            "/", "/alerts", "/messages", "/setup", "/points/larval-3", "/points/larval-4", "/points/larval-3/dose");
+            "/",
+            "/alerts",
+            "/messages",
+            "/setup",
+            "/points/larval-3",
+            "/points/larval-4",
+            "/points/larval-3/dose",
+            "/calculator",
+            "/calculator?point=larval-3",
+            "/calculator?temp=8&salt=12&pair=dic-pco2&dic=1500&pco2=90&pco2Unit=Pa&limit=1.5&warmTo=20&airTo=420"
+                    + "&blendShare=30&blendTemp=12&blendSalt=28&blendPh=7.8&blendTa=2000&ammonia=0.5&calcium=4",
+            "/calculator/electrode",
+            "/calculator/electrode?temp=21.5&salt=35&ph=8.36&phUnit=total");
 
     enum Size {
         PHONE(Browser::phone),

@@ -101,6 +101,19 @@ class DoseComparisonTest {
     }
 
     @Test
+    void an_alkalinity_too_coarse_for_a_small_dose_leaves_it_to_ph() {
+        Dosed small = new Dosed(SODA, BEFORE.totalAlkalinity(), BEFORE.dic(), 30, 25e-6, 0.001, 10e-6, MIXED, UNTIL);
+        List<After> states = new ArrayList<>(readings(3, 25.0 / 300, 22, 30));
+        states.replaceAll(
+                s -> new After(s.phAt(), s.phTotal(), s.conditions(), MIXED.plusSeconds(60), BEFORE.totalAlkalinity()));
+
+        DoseOutcome outcome = DoseComparison.compare(small, states, false, UNTIL);
+
+        assertThat(outcome.verdict()).as(outcome.detail()).isEqualTo(Verdict.AS_FORETOLD);
+        assertThat(outcome.seen().basis()).isEqualTo(Basis.PH);
+    }
+
+    @Test
     void the_middle_of_the_readings_counts_and_one_wild_one_does_not() {
         List<After> states = new ArrayList<>(readings(4, 1, 22, 30));
         After wild = states.get(2);

@@ -165,7 +165,7 @@ class WaterCalculatorTest {
             case "ph" -> any.ph(value).dicUmolKg(2000.0);
             case "totalAlkalinityUmolKg" -> any.totalAlkalinityUmolKg(value).dicUmolKg(2000.0);
             case "dicUmolKg" -> any.ph(8.0).dicUmolKg(value);
-            case "pco2Uatm" -> any.ph(8.0).pco2Uatm(value);
+            case "pco2Uatm" -> any.totalAlkalinityUmolKg(2000.0).pco2Uatm(value);
             case "phosphateUmolKg" -> measured().phosphateUmolKg(value);
             case "silicateUmolKg" -> measured().silicateUmolKg(value);
             case "calciumMmolKg" -> measured().calciumMmolKg(value);

@@ -41,6 +41,31 @@ class HardWatersTest {
         }
     }
 
+    @Test
+    void a_trace_of_co2_in_acid_fresh_water_leaves_the_acid_as_it_is() {
+        // the two bounds of the search all but meet here: a step may leave them by rounding alone
+        Conditions fresh = Conditions.of(0, 0).with(CarbonicAcidFit.MILLERO_2006, BoronRatio.UPPSTROM_1974);
+        double acid = 3.6788172305459506e-4;
+        for (double pco2 : new double[] {1e-12, 1e-11, 1e-10, 1e-9}) {
+            CarbonateState state = solve(fresh, new AlkalinityAndPco2(-acid, pco2));
+            double h = new IndependentWater(fresh).hFromPco2(-acid, pco2).doubleValue();
+            assertThat(state.phTotal()).as("pCO2 %s", pco2).isCloseTo(-Math.log10(h), within(1e-11));
+        }
+    }
+
+    @Test
+    void inputs_that_would_need_more_carbon_than_any_water_holds_are_refused() {
+        for (KnownPair absurd : new KnownPair[] {
+            new KnownPair.PhAndPco2(12.9, 911e-6), new KnownPair.PhAndAlkalinity(2.3, 0.038),
+        }) {
+            assertThat(CarbonateSystem.solve(Conditions.of(15, 30), absurd))
+                    .as(absurd.toString())
+                    .isInstanceOfSatisfying(
+                            CarbonateResult.Unsolvable.class,
+                            refusal -> assertThat(refusal.reason()).isEqualTo(UnsolvableReason.TOO_MUCH_CARBON));
+        }
+    }
+
     private static double cube(Random random) {
         double x = random.nextDouble();
         return x * x * x;

@@ -11,12 +11,15 @@ import static org.hingeline.seawater.HighPrecision.tenTo;
 import static org.hingeline.seawater.HighPrecision.times;
 
 import java.math.BigDecimal;
+import java.util.function.UnaryOperator;
 
 /**
- * The same equilibria written a second time from the publications, to 34 digits, with the default fits, and solved by
- * bisection. It shares no line with the product, so agreement speaks for both.
+ * The same equilibria written a second time from the publications, to 34 digits, and solved by bisection. It shares no line
+ * with the product, so agreement speaks for both.
  */
 final class IndependentWater {
+    private static final BigDecimal[] STEPS = steps();
+
     private final BigDecimal k0;
     private final BigDecimal fugacity;
     private final BigDecimal k1;
@@ -31,6 +34,9 @@ final class IndependentWater {
     private final BigDecimal ksi;
     private final BigDecimal kspAragonite;
     private final BigDecimal kspCalcite;
+    private final BigDecimal totalOverFree;
+    private final BigDecimal seawaterOverFree;
+    private final BigDecimal electrode;
     private final BigDecimal boron;
     private final BigDecimal sulfate;
     private final BigDecimal fluoride;
@@ -38,18 +44,20 @@ final class IndependentWater {
     private final BigDecimal phosphate;
     private final BigDecimal silicate;
 
-    IndependentWater(double temperatureC, double salinity, double phosphate, double silicate) {
-        BigDecimal t = num(temperatureC).add(num("273.15"));
-        BigDecimal s = num(salinity);
+    IndependentWater(Conditions c) {
+        BigDecimal t = num(c.temperatureC()).add(num("273.15"));
+        BigDecimal s = num(c.salinity());
         BigDecimal rs = sqrt(s);
         BigDecimal lnT = ln(t);
         BigDecimal cl = over(s, num("1.80655"));
-        boron = over(times(num("0.0002414"), cl), num("10.811"));
+        String boronPerChlorinity = c.boron() == BoronRatio.LEE_2010 ? "0.0002414" : "0.000232";
+        boron = over(times(num(boronPerChlorinity), cl), num("10.811"));
         sulfate = over(times(num("0.14"), cl), num("96.062"));
         fluoride = over(times(num("0.000067"), cl), num("18.998"));
-        calcium = over(times(num("0.02128"), cl), num("40.087"));
-        this.phosphate = num(phosphate);
-        this.silicate = num(silicate);
+        Double measured = c.calcium();
+        calcium = measured == null ? over(times(num("0.02128"), cl), num("40.087")) : num(measured);
+        phosphate = num(c.phosphate());
+        silicate = num(c.silicate());
 
         BigDecimal t100 = over(t, num("100"));
         k0 = exp(sum(
@@ -67,20 +75,6 @@ final class IndependentWater {
         BigDecimal cross = sum(num("57.7"), times(num("-0.118"), t));
         fugacity = exp(over(sum(virial, cross, cross), times(num("82.05736"), t)));
 
-        k1 = tenTo(sum(
-                        over(num("3633.86"), t),
-                        num("-61.2172"),
-                        times(num("9.67770"), lnT),
-                        times(num("-0.011555"), s),
-                        times(num("0.0001152"), s, s))
-                .negate());
-        k2 = tenTo(sum(
-                        over(num("471.78"), t),
-                        num("25.9290"),
-                        times(num("-3.16967"), lnT),
-                        times(num("-0.01781"), s),
-                        times(num("0.0001122"), s, s))
-                .negate());
         kb = exp(sum(
                 over(
                         sum(
@@ -115,6 +109,17 @@ final class IndependentWater {
                 times(over(num("-2698"), t), i, ri),
                 times(over(num("1776"), t), i, i),
                 perKgSeawater));
+        totalOverFree = sum(BigDecimal.ONE, over(sulfate, ks));
+        seawaterOverFree = sum(totalOverFree, over(fluoride, over(kf, totalOverFree)));
+        electrode = sum(
+                num("1.2948"),
+                times(num("-0.002036"), t),
+                times(num("0.0004607"), s, s),
+                times(num("-0.000001475"), t, s, s));
+        IndependentCarbonicAcid acid = IndependentCarbonicAcid.of(c.fit(), t, s);
+        BigDecimal toTotal = acid.onSeawaterScale() ? over(totalOverFree, seawaterOverFree) : BigDecimal.ONE;
+        k1 = times(acid.k1(), toTotal);
+        k2 = times(acid.k2(), toTotal);
         ksi = exp(sum(
                 over(num("-8904.2"), t),
                 num("117.385"),
@@ -157,12 +162,33 @@ final class IndependentWater {
                 times(num("0.0041249"), s, rs)));
     }
 
-    static BigDecimal hydrogenIon(double ph) {
-        return tenTo(num(ph).negate());
+    /** [H] on the total scale of a pH on another. */
+    BigDecimal hydrogenIon(double ph, PhScale scale) {
+        BigDecimal h = tenTo(num(ph).negate());
+        return switch (scale) {
+            case TOTAL -> h;
+            case FREE -> times(h, totalOverFree);
+            case SEAWATER -> over(times(h, totalOverFree), seawaterOverFree);
+            case NBS -> over(times(over(h, electrode), totalOverFree), seawaterOverFree);
+        };
+    }
+
+    /** pH on a scale of [H] on the total scale. */
+    BigDecimal ph(BigDecimal h, PhScale scale) {
+        BigDecimal free = over(h, totalOverFree);
+        BigDecimal seawater = times(free, seawaterOverFree);
+        return log10(
+                        switch (scale) {
+                            case TOTAL -> h;
+                            case FREE -> free;
+                            case SEAWATER -> seawater;
+                            case NBS -> times(seawater, electrode);
+                        })
+                .negate();
     }
 
     private BigDecimal withoutCarbonate(BigDecimal h) {
-        BigDecimal free = over(h, sum(BigDecimal.ONE, over(sulfate, ks)));
+        BigDecimal free = over(h, totalOverFree);
         BigDecimal h2 = times(h, h);
         BigDecimal h3 = times(h2, h);
         BigDecimal p12 = times(kp1, kp2);
@@ -180,8 +206,9 @@ final class IndependentWater {
                 over(fluoride, sum(BigDecimal.ONE, over(kf, h))).negate());
     }
 
-    BigDecimal dic(BigDecimal h, double totalAlkalinity) {
-        BigDecimal carbonateAlkalinity = num(totalAlkalinity).subtract(withoutCarbonate(h));
+    /** Inorganic carbon from [H] and alkalinity. */
+    BigDecimal dic(BigDecimal h, BigDecimal totalAlkalinity) {
+        BigDecimal carbonateAlkalinity = totalAlkalinity.subtract(withoutCarbonate(h));
         return over(times(carbonateAlkalinity, carbonSum(h)), sum(times(k1, h), times(num("2"), k1, k2)));
     }
 
@@ -213,42 +240,54 @@ final class IndependentWater {
         return over(times(carbonate(h, dic), calcium), kspCalcite);
     }
 
-    /** [H] from alkalinity and inorganic carbon, by bisection between pH 1 and 14. */
-    BigDecimal bisectFromDic(double totalAlkalinity, double dic) {
-        BigDecimal low = num("1e-14");
-        BigDecimal high = num("0.1");
-        for (int i = 0; i < 55; i++) {
-            BigDecimal middle = sqrt(times(low, high));
-            if (dic(middle, totalAlkalinity).compareTo(num(dic)) > 0) {
-                high = middle;
-            } else {
-                low = middle;
-            }
-        }
-        return low;
+    BigDecimal totalAlkalinity(BigDecimal h, BigDecimal dic) {
+        BigDecimal carbonate = carbonate(h, dic);
+        return sum(bicarbonate(h, dic), carbonate, carbonate, withoutCarbonate(h));
     }
 
-    /** [H] from alkalinity and pCO2 in atm, by bisection between pH 1 and 14. */
-    BigDecimal bisectFromPco2(double totalAlkalinity, double pco2) {
+    BigDecimal fco2(BigDecimal h, BigDecimal dic) {
+        return over(co2(h, dic), k0);
+    }
+
+    /** Inorganic carbon from [H] and pCO2 in atm. */
+    BigDecimal dicOfPco2(BigDecimal h, double pco2) {
         BigDecimal co2 = times(num(pco2), k0, fugacity);
-        BigDecimal low = num("1e-14");
-        BigDecimal high = num("0.1");
-        for (int i = 0; i < 55; i++) {
-            BigDecimal h = sqrt(times(low, high));
-            BigDecimal bicarbonate = over(times(co2, k1), h);
-            BigDecimal carbonate = over(times(bicarbonate, k2), h);
-            BigDecimal excess = sum(
-                    bicarbonate,
-                    carbonate,
-                    carbonate,
-                    withoutCarbonate(h),
-                    num(totalAlkalinity).negate());
-            if (excess.signum() < 0) {
-                high = h;
-            } else {
-                low = h;
-            }
+        BigDecimal bicarbonate = over(times(co2, k1), h);
+        return sum(co2, bicarbonate, over(times(bicarbonate, k2), h));
+    }
+
+    /** [H] from alkalinity and inorganic carbon. */
+    BigDecimal hFromDic(BigDecimal totalAlkalinity, BigDecimal dic) {
+        return bisect(h -> totalAlkalinity(h, dic).subtract(totalAlkalinity));
+    }
+
+    /** [H] from alkalinity and pCO2 in atm. */
+    BigDecimal hFromPco2(double totalAlkalinity, double pco2) {
+        return bisect(h -> totalAlkalinity(h, dicOfPco2(h, pco2)).subtract(num(totalAlkalinity)));
+    }
+
+    /** [H] from inorganic carbon and pCO2 in atm. */
+    BigDecimal hFromDicAndPco2(double dic, double pco2) {
+        return bisect(h -> dicOfPco2(h, pco2).subtract(num(dic)));
+    }
+
+    /** Where a function that falls with [H] crosses zero between pH 1 and 14, to 1 in 10¹³. */
+    private static BigDecimal bisect(UnaryOperator<BigDecimal> falling) {
+        BigDecimal h = num("3.1622776601683793e-8");
+        for (BigDecimal step : STEPS) {
+            h = falling.apply(h).signum() > 0 ? times(h, step) : over(h, step);
         }
-        return low;
+        return h;
+    }
+
+    /** From the middle of the range each step goes half as far, in the logarithm, as the one before. */
+    private static BigDecimal[] steps() {
+        BigDecimal[] steps = new BigDecimal[48];
+        BigDecimal step = sqrt(num("3.1622776601683793e6"));
+        for (int i = 0; i < steps.length; i++) {
+            steps[i] = step;
+            step = sqrt(step);
+        }
+        return steps;
     }
 }

@@ -17,7 +17,7 @@ class SingleConstantsValidationTest {
                 .isCloseTo(value, within(tolerance));
     }
 
-    private static double evaluate(String quantity, double temperatureC, double s) {
+    static double evaluate(String quantity, double temperatureC, double s) {
         double t = temperatureC + 273.15;
         SeawaterConstants k =
                 SeawaterConstants.of(temperatureC, s, CarbonicAcidFit.LUEKER_2000, BoronRatio.UPPSTROM_1974);

@@ -16,16 +16,16 @@ class Teos10ValidationTest {
      * Millero and Poisson 1981 give 0.0036 kg/m³ as the standard error of their fit; TEOS-10 rests on the same
      * measurements and later ones. Three standard errors, four for the salinities above 40 at the edge of the fit.
      */
-    private static final double DENSITY_STANDARD_ERROR = 0.0036;
+    static final double DENSITY_STANDARD_ERROR = 0.0036;
 
     /**
      * The heat capacity of pure water that the 1973 fit starts from is 2 to 3.3 J/(kg K) below today's; the fit itself
      * was good to about 1 J/(kg K). Together 5, which is 0.12 %.
      */
-    private static final Offset<Double> HEAT_CAPACITY = within(5.0);
+    static final Offset<Double> HEAT_CAPACITY = within(5.0);
 
     /** Both sides use PSS-78 with the same extension; the tables have 12 digits. */
-    private static final Offset<Double> SAME_EQUATION = within(1e-9);
+    static final Offset<Double> SAME_EQUATION = within(1e-9);
 
     @ParameterizedTest
     @CsvFileSource(resources = "/reference/teos10-density.csv", useHeadersInDisplayName = true)

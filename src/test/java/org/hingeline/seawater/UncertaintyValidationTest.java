@@ -4,7 +4,6 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import java.util.Map;
-import java.util.Random;
 import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
 import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
@@ -12,9 +11,8 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvFileSource;
 import org.junit.jupiter.params.provider.EnumSource;
-import org.junit.jupiter.params.provider.ValueSource;
 
-/** First-order propagation against published shares, against stepping and against chance. */
+/** First-order propagation against published shares and against stepping. */
 class UncertaintyValidationTest {
     private static final Conditions WATER = Conditions.of(22, 30);
     private static final InputUncertainty NOTHING = only(0, 0, 0, 0, 0, 0);
@@ -72,64 +70,6 @@ class UncertaintyValidationTest {
         return CarbonateSystem.solve(Conditions.of(t, s), new PhAndAlkalinity(ph, ta))
                 .orElseThrow()
                 .omegaAragonite();
-    }
-
-    @ParameterizedTest
-    @ValueSource(strings = {"phTotal", "dic", "co2", "bicarbonate", "carbonate", "pco2", "omegaAragonite"})
-    void a_seeded_play_of_chance_gives_the_same_spread_from_ph_and_alkalinity(String quantity) {
-        InputUncertainty u = InputUncertainty.ofPhAndAlkalinity(0.01, 8e-6, 0.1, 0.2);
-        CarbonateState state = CarbonateSystem.solve(WATER, PAIR).orElseThrow();
-        double expected = fromInputs(Uncertainty.of(state, u), quantity);
-        Spread spread = new Spread();
-        Random random = new Random(1981);
-        for (int i = 0; i < 20_000; i++) {
-            Conditions c = Conditions.of(
-                    22 + u.temperatureC() * random.nextGaussian(), 30 + u.salinity() * random.nextGaussian());
-            spread.add(quantity(
-                    c,
-                    new PhAndAlkalinity(7.9 + u.ph() * random.nextGaussian(), 2078e-6 + 8e-6 * random.nextGaussian()),
-                    quantity));
-        }
-        // 20,000 draws know a standard deviation to 0.5 %; three times that, and a little curvature
-        assertThat(spread.standardDeviation() / expected).isCloseTo(1, within(0.02));
-    }
-
-    @ParameterizedTest
-    @ValueSource(strings = {"phTotal", "co2", "bicarbonate", "carbonate", "pco2", "omegaAragonite"})
-    void a_seeded_play_of_chance_gives_the_same_spread_from_alkalinity_and_carbon(String quantity) {
-        InputUncertainty u = InputUncertainty.ofAlkalinityAndDic(4e-6, 3e-6, 0.1, 0.2);
-        AlkalinityAndDic pair = new AlkalinityAndDic(2200e-6, 2000e-6);
-        CarbonateState state = CarbonateSystem.solve(WATER, pair).orElseThrow();
-        double expected = fromInputs(Uncertainty.of(state, u), quantity);
-        Spread spread = new Spread();
-        Random random = new Random(2018);
-        for (int i = 0; i < 20_000; i++) {
-            Conditions c = Conditions.of(
-                    22 + u.temperatureC() * random.nextGaussian(), 30 + u.salinity() * random.nextGaussian());
-            spread.add(quantity(
-                    c,
-                    new AlkalinityAndDic(
-                            2200e-6 + 4e-6 * random.nextGaussian(), 2000e-6 + 3e-6 * random.nextGaussian()),
-                    quantity));
-        }
-        assertThat(spread.standardDeviation() / expected).isCloseTo(1, within(0.02));
-    }
-
-    @Test
-    void a_seeded_play_of_chance_with_the_constants_gives_their_share() {
-        CarbonateState state = CarbonateSystem.solve(WATER, PAIR).orElseThrow();
-        InputUncertainty none = InputUncertainty.ofPhAndAlkalinity(0, 0, 0, 0);
-        double expected = Uncertainty.of(state, none).omegaAragonite().fromConstants();
-        Spread spread = new Spread();
-        Random random = new Random(1990);
-        for (int i = 0; i < 20_000; i++) {
-            double[] off = new double[Perturbed.CONSTANTS];
-            for (int j = 0; j < off.length; j++) {
-                off[j] = random.nextGaussian();
-            }
-            spread.add(Perturbed.omegaAragonite(WATER, 7.9, 2078e-6, off));
-        }
-        assertThat(spread.standardDeviation() / expected).isCloseTo(1, within(0.025));
     }
 
     @ParameterizedTest
@@ -235,22 +175,5 @@ class UncertaintyValidationTest {
             case "omegaAragonite" -> u.omegaAragonite().fromInputs();
             default -> throw new IllegalArgumentException("no such quantity: " + name);
         };
-    }
-
-    private static final class Spread {
-        private int n;
-        private double mean;
-        private double squares;
-
-        void add(double value) {
-            n++;
-            double off = value - mean;
-            mean += off / n;
-            squares += off * (value - mean);
-        }
-
-        double standardDeviation() {
-            return Math.sqrt(squares / (n - 1));
-        }
     }
 }

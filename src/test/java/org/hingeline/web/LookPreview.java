@@ -41,6 +41,7 @@ public final class LookPreview {
         look("/points/larval-3/refused", s -> page("point", s.layout("water"), s.point(true)));
         look("/points/larval-3/dose", s -> page("dose", s.layout("water"), s.dose(DoseView.Outcome.PLAN)));
         look("/dose-refused", s -> page("dose", s.layout("water"), s.dose(DoseView.Outcome.REFUSED)));
+        look("/calculator", s -> page("calculator", s.layout("calculator"), CalculatorSamples.worked()));
         look("/alerts", s -> page("alerts", s.layout("alerts"), s.alerts()));
         look("/messages", s -> page("messages", s.layout("messages"), s.messages()));
         look("/setup", s -> page("setup", s.layout("setup"), s.setup(true)));

@@ -265,6 +265,7 @@ final class LookSamples {
                         new PointView.InputLine("alkalinity", "2 180 µmol/kg", "bottle sample", ago(60 * 31), "")),
                 List.of("Half of the uncertainty comes from pH: a check against a fresh buffer would halve it."),
                 "Lowest Ω in the last 48 h: 1.58 at 03:02.",
+                "2026-05-14T02:02:00Z",
                 List.of(
                         new LimitRow(
                                 "first shell",
@@ -308,6 +309,7 @@ final class LookSamples {
                                 "",
                                 Moment.never(),
                                 CLOSE,
+                                true,
                                 told),
                         new AlertsView.Entry(
                                 "38",
@@ -319,6 +321,7 @@ final class LookSamples {
                                 "Ana Reis at 01:05: valve closed",
                                 Moment.never(),
                                 CLOSE,
+                                true,
                                 told)),
                 List.of(new AlertsView.Entry(
                         "35",
@@ -330,6 +333,7 @@ final class LookSamples {
                         "",
                         ago(1460),
                         "Look at the gateway in the pump house.",
+                        false,
                         List.of())));
     }
 
@@ -406,7 +410,8 @@ final class LookSamples {
                                 "Alkalinity is 80 h old, older than the 72 h allowed.",
                                 "Titrate a bottle sample of this tank and enter it.")));
         };
-        return new DoseView("larval-3", "Larval 3", "Ω 1.62 ±0.11, pH 7.71, 21.9 °C, 2 min ago", form, result);
+        return new DoseView(
+                "larval-3", "Larval 3", "Ω 1.62 ±0.11, pH 7.71, 21.9 °C, 2 min ago", ago(2).iso(), form, result);
     }
 
     MessagesView messages() {

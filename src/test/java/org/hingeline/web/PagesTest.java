@@ -28,7 +28,8 @@ import org.junit.jupiter.params.provider.MethodSource;
 
 class PagesTest {
     private static final Pages PAGES = new Pages();
-    private static final LookSamples SAMPLES = new LookSamples(Instant.parse("2026-05-14T02:12:00Z"));
+    private static final Instant NOW = Instant.parse("2026-05-14T02:12:00Z");
+    private static final LookSamples SAMPLES = new LookSamples(NOW);
     private static final List<SiteChoice> ONE_SITE = List.of(new SiteChoice("vale", "Ria Cove", true));
 
     static Stream<Map.Entry<String, String>> every_page() {
@@ -46,6 +47,11 @@ class PagesTest {
         pages.put("alerts", page("alerts", two, SAMPLES.alerts()));
         pages.put("messages", page("messages", manager, SAMPLES.messages()));
         pages.put("setup", page("setup", manager, SAMPLES.setup(true)));
+        pages.put("calculator", page("calculator", two, CalculatorSamples.empty()));
+        pages.put("calculator refused", page("calculator", manager, CalculatorSamples.refused()));
+        pages.put("calculator worked", page("calculator", manager, CalculatorSamples.worked()));
+        pages.put("calculator of a point", page("calculator", two, CalculatorSamples.ofPoint("larval-3", NOW)));
+        pages.put("electrode", page("electrode", two, CalculatorSamples.electrode()));
         for (Outcome outcome : Outcome.values()) {
             pages.put("dose " + outcome, page("dose", manager, SAMPLES.dose(outcome)));
         }
@@ -143,12 +149,14 @@ class PagesTest {
                 List.of(),
                 List.of(hostile),
                 hostile,
+                hostile,
                 SAMPLES.point(true).limits(),
                 Form.empty(),
                 null);
         List<String> pages = List.of(
                 page("status", layout, new StatusView(null, List.of(point))),
                 page("point", layout, inner),
+                page("calculator", layout, CalculatorSamples.ofPoint(hostile, NOW)),
                 page(
                         "setup",
                         layout,
@@ -222,6 +230,7 @@ class PagesTest {
                 List.of(),
                 List.of(),
                 List.of(),
+                "",
                 "",
                 List.of(),
                 Form.empty(),

@@ -17,6 +17,7 @@ public record AlertsView(List<Entry> open, List<Entry> ended) {
      * @param acknowledged who took it on, when, and their note: "Ana Reis at 03:05: valve closed"; empty while nobody has
      * @param cleared when it ended; {@link Moment#never()} while open
      * @param action what to do; empty once the water is back
+     * @param ofWater whether it is about a water state, so that one can be shown
      * @param told who was told what
      */
     public record Entry(
@@ -29,6 +30,7 @@ public record AlertsView(List<Entry> open, List<Entry> ended) {
             String acknowledged,
             Moment cleared,
             String action,
+            boolean ofWater,
             List<Told> told) {
         public Entry {
             told = List.copyOf(told);

@@ -11,6 +11,7 @@ import org.jspecify.annotations.Nullable;
  * @param pointCode the tank
  * @param pointName its name
  * @param waterNow its water in a sentence: "Ω 1.62 ±0.11, pH 7.71, 21.9 °C, 2 min ago"
+ * @param waterAt the moment of that water, ISO 8601; empty when nothing was ever measured
  * @param form fields targetOmega, volume, volumeUnit (UCUM), hydration (anhydrous, monohydrate, decahydrate), assayPercent, stockGramsPerLitre,
  *     phTotalMax, omegaAragoniteMax, phPerHourMax
  * @param result what was worked out; null before the form is sent
@@ -20,13 +21,15 @@ public record DoseView(
         String pointCode,
         String pointName,
         String waterNow,
+        String waterAt,
         Form form,
         @Nullable Result result,
         @Nullable RecordView record) {
 
     /** With nothing to record. */
-    public DoseView(String pointCode, String pointName, String waterNow, Form form, @Nullable Result result) {
-        this(pointCode, pointName, waterNow, form, result, null);
+    public DoseView(
+            String pointCode, String pointName, String waterNow, String waterAt, Form form, @Nullable Result result) {
+        this(pointCode, pointName, waterNow, waterAt, form, result, null);
     }
 
     /** How the planning came out. */

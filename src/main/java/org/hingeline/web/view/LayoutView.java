@@ -15,7 +15,8 @@ import java.util.List;
  * @param csrf the token every form sends back as {@code csrf}
  * @param zone the site's time zone, as {@code Europe/Lisbon}
  * @param now when the page was made
- * @param current which entry of the navigation is the page: {@code water}, {@code alerts}, {@code messages}, {@code setup} or empty
+ * @param current which entry of the navigation is the page: {@code water}, {@code alerts}, {@code messages}, {@code calculator},
+ *     {@code setup} or empty
  * @param notice a sentence about what was just done ("Limit saved."); empty for none
  */
 public record LayoutView(
@@ -90,6 +91,16 @@ public record LayoutView(
             path.append('/').append(encoded(part));
         }
         return link(path.toString());
+    }
+
+    /** How the newest water state of a point was computed. */
+    public String calculator(String pointCode) {
+        return link("/calculator?point=" + encoded(pointCode) + "#state");
+    }
+
+    /** How the state of a point at a moment (ISO 8601) was computed. */
+    public String calculator(String pointCode, String at) {
+        return link("/calculator?point=" + encoded(pointCode) + "&at=" + encoded(at) + "#state");
     }
 
     private static String encoded(String part) {

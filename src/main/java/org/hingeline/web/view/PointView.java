@@ -11,6 +11,7 @@ import org.jspecify.annotations.Nullable;
  * @param inputs what it was worked out from
  * @param cautions sentences about the state as a whole
  * @param lowest for those without the chart: "Lowest Ω in the last 48 h: 1.58 at 03:02."; empty when there is no state
+ * @param lowestAt the moment of that state, ISO 8601; empty when there is none
  * @param limits limits of this point
  * @param added the form for another limit
  * @param undo the change just made, if it can be put back
@@ -23,6 +24,7 @@ public record PointView(
         List<InputLine> inputs,
         List<String> cautions,
         String lowest,
+        String lowestAt,
         List<LimitRow> limits,
         Form added,
         @Nullable Undo undo,
@@ -58,9 +60,10 @@ public record PointView(
             List<InputLine> inputs,
             List<String> cautions,
             String lowest,
+            String lowestAt,
             List<LimitRow> limits,
             Form added,
             @Nullable Undo undo) {
-        this(point, state, inputs, cautions, lowest, limits, added, undo, List.of(), "");
+        this(point, state, inputs, cautions, lowest, lowestAt, limits, added, undo, List.of(), "");
     }
 }
