@@ -2,6 +2,8 @@ package org.hingeline.web;
 
 import io.javalin.config.RoutesConfig;
 import io.javalin.http.Context;
+import java.time.Duration;
+import java.time.Instant;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -20,6 +22,7 @@ import org.hingeline.monitor.DoseWish;
 import org.hingeline.monitor.FieldFaults;
 import org.hingeline.monitor.FieldFaultsException;
 import org.hingeline.monitor.StatusBoard;
+import org.hingeline.web.view.Choice;
 import org.hingeline.web.view.Form;
 import org.hingeline.web.view.RecordView;
 import org.jspecify.annotations.Nullable;
@@ -28,8 +31,12 @@ import org.jspecify.annotations.Nullable;
 final class DoseRecordPages {
     private static final DoseAmounts AMOUNTS = new DoseAmounts(VolumeUnit.LITRE);
 
+    private static final Duration LAST_BAG = Duration.ofDays(60);
+
+    private static final double WEEK_MIN = 7 * 24 * 60;
+
     /** What a person types; a fault of anything else is told of the form as a whole. */
-    private static final List<String> TYPED = List.of("massG", "lot", "note");
+    private static final List<String> TYPED = List.of("massG", "lot", "note", "bag", "assayPercent");
 
     private final StatusBoard board;
     private final DoseRecords records;
@@ -44,6 +51,7 @@ final class DoseRecordPages {
     }
 
     void addTo(RoutesConfig routes) {
+        routes.get("/points/{code}/doses", this::ask, Gate.OPERATOR);
         routes.post("/points/{code}/doses", this::record, Gate.OPERATOR);
         routes.post("/points/{code}/doses/{id}/undo", this::undo, Gate.OPERATOR);
         routes.post("/points/{code}/doses/{id}/confirmation", this::confirm, Gate.OPERATOR);
@@ -83,7 +91,41 @@ final class DoseRecordPages {
                 "",
                 Words.sentence(DoseRows.what(code, hydration, assay == null ? "" : Words.plain(assay))),
                 hint,
+                List.of(),
                 Form.of(values));
+    }
+
+    /** A dose that no plan stood for; what was in the bag last time stands in the form. */
+    private void ask(Context ctx) {
+        Point point = PointRoutes.found(board, ctx).point();
+        Map<String, String> values = new LinkedHashMap<>();
+        values.put("key", UUID.randomUUID().toString());
+        values.put("assayPercent", "99");
+        values.put("minutesAgo", "0");
+        Instant now = pages.now();
+        history.of(point, now.minus(LAST_BAG), now).stream()
+                .map(DoseHistory.Entry::dose)
+                .filter(Dose::counts)
+                .findFirst()
+                .ifPresent(last -> {
+                    values.put("bag", last.given().agent() + "/" + last.given().hydration());
+                    values.put("assayPercent", Words.plain(last.given().assayPercent()));
+                    values.put("lot", last.given().lot());
+                });
+        show(ctx, 200, new RecordView(point.code(), point.name(), "", "", "", bags(), Form.of(values)));
+    }
+
+    private static List<Choice> bags() {
+        return Agent.all().stream()
+                .flatMap(agent -> agent.forms().stream()
+                        .map(form -> new Choice(
+                                agent.code() + "/" + form.code(),
+                                Words.sentence(DoseRows.what(agent.code(), form.code(), "")))))
+                .toList();
+    }
+
+    private void show(Context ctx, int status, RecordView view) {
+        pages.show(ctx, status, "record", "water", view, "");
     }
 
     private void record(Context ctx) {
@@ -160,33 +202,50 @@ final class DoseRecordPages {
 
     private void again(Context ctx, Point point, String corrects, FieldFaultsException e) {
         List<FieldFaults.Fault> told = e.faults().stream()
-                .map(fault -> TYPED.contains(fault.field()) ? fault : new FieldFaults.Fault("", fault.detail()))
+                .map(fault -> TYPED.contains(last(fault.field()))
+                        ? new FieldFaults.Fault(last(fault.field()), fault.detail())
+                        : new FieldFaults.Fault("", fault.detail()))
                 .toList();
         Form form = Forms.refused(ctx, new FieldFaultsException(told));
-        pages.show(
+        boolean decided = form.value("bag").isEmpty() && !form.value("agent").isEmpty();
+        show(
                 ctx,
                 422,
-                "record",
-                "water",
                 new RecordView(
                         point.code(),
                         point.name(),
                         corrects,
-                        Words.sentence(DoseRows.what(
-                                form.value("agent"), form.value("hydration"), form.value("assayPercent"))),
+                        decided
+                                ? Words.sentence(DoseRows.what(
+                                        form.value("agent"), form.value("hydration"), form.value("assayPercent")))
+                                : "",
                         "",
-                        form),
-                "");
+                        decided ? List.of() : bags(),
+                        form));
     }
 
-    private static DoseEntry entry(Context ctx, String point) {
+    private static String last(String field) {
+        return field.substring(field.lastIndexOf('/') + 1);
+    }
+
+    private DoseEntry entry(Context ctx, String point) {
         FieldFaults faults = new FieldFaults();
+        String[] bag = Forms.text(ctx, "bag").split("/", 2);
+        Double minutesAgo = Forms.number(ctx, "minutesAgo", faults);
+        if (minutesAgo != null && !(minutesAgo >= 0 && minutesAgo <= WEEK_MIN)) {
+            faults.add("minutesAgo", "choose when it was put in, within the last week");
+            faults.throwIfAny();
+        }
         DoseEntry entry = new DoseEntry(
                 given(ctx, "key"),
                 point,
-                null,
+                minutesAgo == null || minutesAgo == 0
+                        ? null
+                        : pages.now().minusSeconds(Math.round(60 * minutesAgo)).toString(),
                 new DoseWish.Agent(
-                        given(ctx, "agent"), given(ctx, "hydration"), Forms.number(ctx, "assayPercent", faults)),
+                        bag.length == 2 ? bag[0] : given(ctx, "agent"),
+                        bag.length == 2 ? bag[1] : given(ctx, "hydration"),
+                        Forms.number(ctx, "assayPercent", faults)),
                 Forms.number(ctx, "massG", faults),
                 given(ctx, "lot"),
                 Forms.number(ctx, "volumeL", faults),

@@ -136,6 +136,28 @@ class DoseRecordTest {
         assertThat(guest.text("#doses")).contains("Recorded by Lin Sato, confirmed by Rui Paz");
     }
 
+    @Test
+    void a_dose_without_a_plan_goes_on_record_too_and_the_bag_is_remembered() {
+        guest.comeIn("lin").open("/points/storage").press("Record a dose").waitFor("h1", "Record a dose for");
+        guest.element("[value='sodium-carbonate/decahydrate']")
+                .findElement(By.xpath(".."))
+                .click();
+        guest.type("massG", "40").type("lot", "WS-114").press("Record it").waitFor("40.0 g recorded.");
+        assertThat(guest.text("#doses"))
+                .contains("Decahydrate sodium carbonate, 99 %, lot WS-114. Recorded by Lin Sato.")
+                .contains("Nothing was foretold");
+
+        guest.press("Record a dose").waitFor("h1", "Record a dose for");
+
+        assertThat(guest.value("lot")).isEqualTo("WS-114");
+        assertThat(guest.element("[value='sodium-carbonate/decahydrate']").isSelected())
+                .isTrue();
+        guest.type("massG", "0").press("Record it").waitFor("0 must be above 0");
+        assertThat(guest.element("[value='sodium-carbonate/decahydrate']").isSelected())
+                .isTrue();
+        assertThat(guest.console()).noneMatch(line -> line.contains("SEVERE") && !line.contains("422"));
+    }
+
     private static void planFrom(String point) {
         guest.open("/points/" + point).press("Plan a dose").waitFor("h1", "A dose for");
         guest.element("[value=anhydrous]").findElement(By.xpath("..")).click();
