@@ -124,14 +124,16 @@ public final class DoseRecords {
                 null);
         long id = books.doses().add(dose);
         Dose added = found(books, site, id);
-        String words = words(added);
+        String words = DoseWords.of(added);
         journal(
                 books,
                 added,
                 point,
                 caller,
                 corrected == null ? "dose-recorded" : "dose-corrected",
-                corrected == null ? words : "before: dose " + corrects + ", " + words(corrected) + "; after: " + words,
+                corrected == null
+                        ? words
+                        : "before: dose " + corrects + ", " + DoseWords.of(corrected) + "; after: " + words,
                 now);
         return new Recorded(added, true);
     }
@@ -182,7 +184,7 @@ public final class DoseRecords {
             }
             books.doses().undo(id, new Dose.Signed(caller.name(), now));
             Point point = books.place().pointById(dose.pointId()).orElseThrow();
-            journal(books, dose, point, caller, "dose-undone", "before: " + words(dose), now);
+            journal(books, dose, point, caller, "dose-undone", "before: " + DoseWords.of(dose), now);
             return found(books, site, id);
         });
         signals.siteChanged(site.id());
@@ -234,7 +236,7 @@ public final class DoseRecords {
                             putInNow ? now : dose.at(),
                             putInNow ? foretoldAnew(books, point, dose, now) : dose.foretold());
             Dose after = found(books, site, id);
-            journal(books, dose, point, caller, "dose-confirmed", words(after), now);
+            journal(books, dose, point, caller, "dose-confirmed", DoseWords.of(after), now);
             return after;
         });
         signals.siteChanged(site.id());
@@ -289,14 +291,5 @@ public final class DoseRecords {
         books.journal()
                 .add(new JournalBook.Entry(
                         now, dose.siteId(), caller.name(), what, point.code() + "/dose " + dose.id(), detail));
-    }
-
-    /** A dose in one line, for the journal. */
-    static String words(Dose dose) {
-        Dose.Given given = dose.given();
-        return given.massG() + " g " + given.agent() + " " + given.hydration() + ", assay " + given.assayPercent()
-                + " %, lot " + given.lot() + ", put in " + dose.at()
-                + (dose.standing() == Standing.PENDING ? ", waits for a second person" : "")
-                + (given.note().isEmpty() ? "" : ", note: " + given.note());
     }
 }
