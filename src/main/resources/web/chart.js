@@ -30,6 +30,7 @@
 
   let range = RANGES[1];
   let states = [];
+  let doses = [];
   let plots = [];
   let at = -1;
   let loaded = 0;
@@ -69,7 +70,9 @@
       const answer = await fetch(`${place.dataset.water}?${query}`, { headers: { Accept: "application/json" }, credentials: "same-origin" });
       if (!answer.ok) throw new Error(`answer ${answer.status}`);
       const found = (await answer.json()).states.filter(s => s.at).sort((a, b) => Date.parse(a.at) - Date.parse(b.at));
+      const given = await loadDoses(query);
       if (wanted !== range) return;
+      doses = given;
       states = withGaps(found);
       loaded = Date.now();
       at = -1;
@@ -78,6 +81,21 @@
     } catch (problem) {
       console.warn("no history", problem);
       words.textContent = "The course could not be loaded. Choose a span to try again.";
+    }
+  }
+
+  /* the course is worth showing without them */
+  async function loadDoses(query) {
+    if (!place.dataset.doses) return [];
+    const span = new URLSearchParams(query);
+    span.delete("step");
+    try {
+      const answer = await fetch(`${place.dataset.doses}?${span}`, { headers: { Accept: "application/json" }, credentials: "same-origin" });
+      if (!answer.ok) throw new Error(`answer ${answer.status}`);
+      return (await answer.json()).doses.filter(d => d.state === "recorded" && d.massG > 0).reverse();
+    } catch (problem) {
+      console.warn("no doses", problem);
+      return [];
     }
   }
 
@@ -96,8 +114,9 @@
 
   function summarise(found) {
     const known = found.filter(s => s.omegaAragonite != null);
+    const put = doses.length === 0 ? "" : ` Doses, marked on the chart: ${doses.map(d => `${d.massG} g on ${clock.format(new Date(d.at))}`).join("; ")}.`;
     if (known.length === 0) {
-      summary.textContent = `No Ω is known for the last ${range.label}.`;
+      summary.textContent = `No Ω is known for the last ${range.label}.${put}`;
       if (summaryHow) summaryHow.hidden = true;
       return;
     }
@@ -110,7 +129,7 @@
     }
     summary.textContent = `In the last ${range.label}: lowest Ω ${fixed(lowest.omegaAragonite, 2)} on ${clock.format(new Date(lowest.at))}, `
       + `highest Ω ${fixed(highest.omegaAragonite, 2)} on ${clock.format(new Date(highest.at))}`
-      + (gaps === 0 ? ", no gaps." : gaps === 1 ? ", one gap without measurements." : `, ${gaps} gaps without measurements.`);
+      + (gaps === 0 ? ", no gaps." : gaps === 1 ? ", one gap without measurements." : `, ${gaps} gaps without measurements.`) + put;
   }
 
   /* the state of that moment, with where each of its inputs came from */
@@ -189,6 +208,35 @@
     };
   }
 
+  /* a dotted line through every panel, and the grams beside it in the first */
+  function drawDoses(first) {
+    return u => {
+      const { ctx, bbox } = u;
+      const px = devicePixelRatio;
+      ctx.save();
+      ctx.beginPath();
+      ctx.rect(bbox.left, bbox.top, bbox.width, bbox.height);
+      ctx.clip();
+      ctx.strokeStyle = ctx.fillStyle = colour("ink");
+      ctx.lineWidth = 2 * px;
+      ctx.setLineDash([2 * px, 4 * px]);
+      ctx.font = `bold ${13 * px}px system-ui, sans-serif`;
+      ctx.textBaseline = "top";
+      for (const dose of doses) {
+        const x = u.valToPos(Date.parse(dose.at) / 1000, "x", true);
+        ctx.beginPath();
+        ctx.moveTo(x, bbox.top);
+        ctx.lineTo(x, bbox.top + bbox.height);
+        ctx.stroke();
+        if (!first) continue;
+        const right = x > bbox.left + bbox.width * 0.8;
+        ctx.textAlign = right ? "right" : "left";
+        ctx.fillText(`${dose.massG} g`, x + (right ? -5 : 5) * px, bbox.top + 3 * px);
+      }
+      ctx.restore();
+    };
+  }
+
   function scaleOf(panel) {
     const edges = limits().filter(l => l.key === panel.key).flatMap(l => [l.below, l.above]).filter(v => v != null && !Number.isNaN(v));
     return (u, low, high) => {
@@ -238,7 +286,7 @@
         series,
         bands,
         hooks: {
-          drawAxes: [drawLimits(panel)],
+          drawAxes: [drawLimits(panel), drawDoses(index === 0)],
           setCursor: [u => { if (u.cursor.idx != null && u.cursor.idx !== at) { at = u.cursor.idx; say(at); } }],
         },
       }, data, charts));

@@ -25,6 +25,8 @@ import org.hingeline.monitor.AlertDesk;
 import org.hingeline.monitor.AlertWatch;
 import org.hingeline.monitor.Check;
 import org.hingeline.monitor.DoseDesk;
+import org.hingeline.monitor.DoseHistory;
+import org.hingeline.monitor.DoseRecords;
 import org.hingeline.monitor.DoseWaters;
 import org.hingeline.monitor.Housekeeping;
 import org.hingeline.monitor.JournalBook;
@@ -145,6 +147,8 @@ final class Service implements AutoCloseable {
                 limits,
                 alerts,
                 doses(settings, database, board, water),
+                doseRecords(settings, database, clock, water, signals),
+                new DoseHistory(database, clock, water),
                 place,
                 new StateWishes(database, water),
                 checks);
@@ -189,6 +193,17 @@ final class Service implements AutoCloseable {
                         dosing.phPerHourMax(),
                         dosing.aerateToUatm(),
                         dosing.stockGramsPerLitre()));
+    }
+
+    private static DoseRecords doseRecords(
+            Settings settings, Database database, Clock clock, WaterRules water, Signals signals) {
+        Settings.Dosing dosing = settings.dosing();
+        return new DoseRecords(
+                database,
+                clock,
+                new DoseRecords.Rules(dosing.maxGramsPerTankAndDay(), dosing.secondPersonAboveG(), dosing.mixing()),
+                water,
+                signals);
     }
 
     private static Courier courier(

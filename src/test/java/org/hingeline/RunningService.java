@@ -115,6 +115,11 @@ public final class RunningService implements AutoCloseable {
         return ((Accounts.SignIn.Welcome) service.accounts().signIn(name, PASSWORD)).token();
     }
 
+    /** What the pages of a signed-in person carry, so that their changes are taken. */
+    public String csrf(String session) {
+        return service.accounts().bySession(session).orElseThrow().csrf();
+    }
+
     Service service() {
         return service;
     }

@@ -134,13 +134,19 @@ public record Settings(
      *
      * @param phTotalMax total scale
      * @param aerateToUatm partial pressure of CO2 in the air that the water is aerated with
+     * @param maxGramsPerTankAndDay most that one tank gets within 24 hours, all agents together; 1,000,000 sets no bound
+     * @param secondPersonAboveG a dose above this waits for a second person; 1,000,000 asks for none
+     * @param mixing time after which a tank counts as mixed
      */
     public record Dosing(
             double phTotalMax,
             double omegaAragoniteMax,
             double phPerHourMax,
             double aerateToUatm,
-            double stockGramsPerLitre) {}
+            double stockGramsPerLitre,
+            double maxGramsPerTankAndDay,
+            double secondPersonAboveG,
+            Duration mixing) {}
 
     public record Accounts(Duration session, int lockAfterFailures, Duration lock, int minPasswordLength) {}
 

@@ -172,8 +172,19 @@ public final class SettingsReader {
         double phPerHourMax = in.number("phPerHourMax", 0.15, 0.01, 1);
         double aerateToUatm = in.number("aerateToUatm", 420, 100, 2000);
         double stockGramsPerLitre = in.number("stockGramsPerLitre", 50, 1, 200);
+        double maxGramsPerTankAndDay = in.number("maxGramsPerTankAndDay", 2000, 0, 1_000_000);
+        double secondPersonAboveG = in.number("secondPersonAboveG", 500, 0, 1_000_000);
+        Duration mixing = Duration.ofMinutes(in.whole("mixingMin", 30, 1, 1440));
         in.refuseOthers();
-        return new Settings.Dosing(phTotalMax, omegaAragoniteMax, phPerHourMax, aerateToUatm, stockGramsPerLitre);
+        return new Settings.Dosing(
+                phTotalMax,
+                omegaAragoniteMax,
+                phPerHourMax,
+                aerateToUatm,
+                stockGramsPerLitre,
+                maxGramsPerTankAndDay,
+                secondPersonAboveG,
+                mixing);
     }
 
     private static Settings.Accounts accounts(Section in) {

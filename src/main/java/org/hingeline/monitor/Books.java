@@ -16,6 +16,8 @@ public interface Books {
 
     AlertBook alerts();
 
+    DoseBook doses();
+
     OutboxBook outbox();
 
     JournalBook journal();

@@ -7,7 +7,7 @@ import java.util.Optional;
 public enum Role {
     /** Sees. */
     VIEWER("viewer"),
-    /** Acknowledges, plans doses, edits limits. */
+    /** Acknowledges, plans and records doses, edits limits. */
     OPERATOR("operator"),
     /** Sets up points, sensors, people, subscribers and keys. */
     MANAGER("manager");

@@ -2,6 +2,7 @@ package org.hingeline.store;
 
 import org.hingeline.monitor.AlertBook;
 import org.hingeline.monitor.Books;
+import org.hingeline.monitor.DoseBook;
 import org.hingeline.monitor.JournalBook;
 import org.hingeline.monitor.KeyBook;
 import org.hingeline.monitor.LimitBook;
@@ -48,6 +49,11 @@ record JdbiBooks(Handle handle) implements Books {
     @Override
     public AlertBook alerts() {
         return new AlertTables(handle);
+    }
+
+    @Override
+    public DoseBook doses() {
+        return new DoseTables(handle);
     }
 
     @Override

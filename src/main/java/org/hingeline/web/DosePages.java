@@ -17,6 +17,7 @@ import org.hingeline.dosing.Remedy;
 import org.hingeline.measure.Quantity;
 import org.hingeline.measure.VolumeUnit;
 import org.hingeline.monitor.DoseDesk;
+import org.hingeline.monitor.DoseRecords;
 import org.hingeline.monitor.DoseWish;
 import org.hingeline.monitor.FieldFaults;
 import org.hingeline.monitor.FieldFaultsException;
@@ -31,6 +32,7 @@ import org.hingeline.web.view.DoseView.Step;
 import org.hingeline.web.view.DoseView.WaterLine;
 import org.hingeline.web.view.Form;
 import org.hingeline.web.view.Moment;
+import org.hingeline.web.view.RecordView;
 import org.jspecify.annotations.Nullable;
 
 /** Working out a dose for a tank. Stores nothing: a person confirms, a person doses. */
@@ -42,11 +44,13 @@ final class DosePages {
 
     private final StatusBoard board;
     private final DoseDesk doses;
+    private final DoseRecords records;
     private final PageMaker pages;
 
-    DosePages(StatusBoard board, DoseDesk doses, PageMaker pages) {
+    DosePages(StatusBoard board, DoseDesk doses, DoseRecords records, PageMaker pages) {
         this.board = board;
         this.doses = doses;
+        this.records = records;
         this.pages = pages;
     }
 
@@ -57,7 +61,7 @@ final class DosePages {
 
     private void ask(Context ctx) {
         PointStatus point = PointRoutes.found(board, ctx);
-        show(ctx, 200, point, blank(point), null);
+        show(ctx, 200, point, blank(point), null, null);
     }
 
     private void plan(Context ctx) {
@@ -68,9 +72,15 @@ final class DosePages {
             Map<String, String> values = new LinkedHashMap<>();
             ctx.formParamMap().forEach((field, sent) -> values.put(field, sent.isEmpty() ? "" : sent.get(0)));
             values.remove(Gatekeeper.CSRF_FIELD);
-            show(ctx, 200, point, Form.of(values), result(plan, wish, new DoseAmounts(volumeUnit(ctx))));
+            show(
+                    ctx,
+                    200,
+                    point,
+                    Form.of(values),
+                    result(plan, wish, new DoseAmounts(volumeUnit(ctx))),
+                    DoseRecordPages.ofPlan(point.point(), wish, plan, records.rules()));
         } catch (FieldFaultsException e) {
-            show(ctx, 422, point, Forms.refused(ctx, withFormNames(e)), null);
+            show(ctx, 422, point, Forms.refused(ctx, withFormNames(e)), null, null);
         }
     }
 
@@ -96,7 +106,13 @@ final class DosePages {
                 .orElseThrow(() -> new FieldFaultsException("volumeUnit", "choose L, m\u00b3 or US gal"));
     }
 
-    private void show(Context ctx, int status, PointStatus point, Form form, @Nullable Result result) {
+    private void show(
+            Context ctx,
+            int status,
+            PointStatus point,
+            Form form,
+            @Nullable Result result,
+            @Nullable RecordView record) {
         ZoneId zone = PageMaker.zone(ctx);
         pages.show(
                 ctx,
@@ -109,7 +125,8 @@ final class DosePages {
                         waterNow(point, zone),
                         waterAt(point),
                         form,
-                        result),
+                        result,
+                        record),
                 "");
     }
 

@@ -80,6 +80,9 @@ final class JsonFaults {
         if (type == Double.class) {
             return "a number";
         }
+        if (type == Boolean.class) {
+            return "true or false";
+        }
         return type.isRecord() ? "a JSON object" : "of another kind";
     }
 

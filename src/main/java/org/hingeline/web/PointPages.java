@@ -36,11 +36,13 @@ final class PointPages {
 
     private final StatusBoard board;
     private final LimitDesk limits;
+    private final DoseRows doses;
     private final PageMaker pages;
 
-    PointPages(StatusBoard board, LimitDesk limits, PageMaker pages) {
+    PointPages(StatusBoard board, LimitDesk limits, DoseRows doses, PageMaker pages) {
         this.board = board;
         this.limits = limits;
+        this.doses = doses;
         this.pages = pages;
     }
 
@@ -72,7 +74,9 @@ final class PointPages {
                         .map(limit -> row(limit, limit.name().equals(refusedLimit) ? refused : Form.of(values(limit))))
                         .toList(),
                 refusedLimit.isEmpty() ? refused : Form.empty(),
-                flash.undo());
+                flash.undo(),
+                doses.of(ctx, point),
+                doses.volume(point.point()));
         pages.show(ctx, status, "point", "water", view, flash.notice());
     }
 

@@ -6,6 +6,8 @@ import org.hingeline.monitor.Accounts;
 import org.hingeline.monitor.AlertDesk;
 import org.hingeline.monitor.Check;
 import org.hingeline.monitor.DoseDesk;
+import org.hingeline.monitor.DoseHistory;
+import org.hingeline.monitor.DoseRecords;
 import org.hingeline.monitor.LimitDesk;
 import org.hingeline.monitor.PlaceDesk;
 import org.hingeline.monitor.ReadingIntake;
@@ -21,6 +23,8 @@ public record Services(
         LimitDesk limits,
         AlertDesk alerts,
         DoseDesk doses,
+        DoseRecords doseRecords,
+        DoseHistory doseHistory,
         PlaceDesk place,
         StateWishes states,
         List<Check> checks) {

@@ -59,13 +59,17 @@ public final class WebServer implements AutoCloseable {
             new LimitRoutes(services.board(), services.limits()).addTo(routes);
             new AlertRoutes(services.board(), services.alerts()).addTo(routes);
             new DoseRoutes(services.doses()).addTo(routes);
+            new DoseRecordRoutes(services.board(), services.doseRecords(), services.doseHistory(), services.clock())
+                    .addTo(routes);
             new SeawaterRoutes(new WaterCalculator(), meters).addTo(routes);
             new OperationRoutes(services.checks(), registry).addTo(routes);
             new SignInPages(services.accounts(), pages, secrets, rules.cookiesOverTlsOnly()).addTo(routes);
             new StatusPages(services.board(), pages).addTo(routes);
-            new PointPages(services.board(), services.limits(), pages).addTo(routes);
+            new PointPages(services.board(), services.limits(), new DoseRows(services.doseHistory()), pages)
+                    .addTo(routes);
             new AlertPages(services.board(), services.alerts(), pages).addTo(routes);
-            new DosePages(services.board(), services.doses(), pages).addTo(routes);
+            new DosePages(services.board(), services.doses(), services.doseRecords(), pages).addTo(routes);
+            new DoseRecordPages(services.board(), services.doseRecords(), services.doseHistory(), pages).addTo(routes);
             new CalculatorPages(services.board(), services.states(), new WaterCalculator(), pages).addTo(routes);
             new ElectrodePages(pages).addTo(routes);
             new MessagePages(services.board(), pages).addTo(routes);

@@ -8,8 +8,10 @@ import java.time.Instant;
 import java.util.List;
 import java.util.function.Supplier;
 import org.hingeline.RunningService;
+import org.hingeline.monitor.Role;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
@@ -24,6 +26,7 @@ class EveryPageTest {
             "/points/larval-3",
             "/points/larval-4",
             "/points/larval-3/dose",
+            "/points/larval-3/doses",
             "/calculator",
             "/calculator?point=larval-3",
             "/calculator?temp=8&salt=12&pair=dic-pco2&dic=1500&pco2=90&pco2Unit=Pa&limit=1.5&warmTo=20&airTo=420"
@@ -68,6 +71,13 @@ class EveryPageTest {
         }
         assertThat(service.postReadings("{\"readings\":[" + rows + "]}").statusCode())
                 .isEqualTo(200);
+        String dose = """
+                {"key":"every-page-1","point":"larval-3","massG":54,"lot":"SA-2291","at":"%s",
+                 "agent":{"code":"sodium-carbonate","hydration":"anhydrous","assayPercent":99}}
+                """.formatted(now.minusSeconds(3600));
+        assertThat(service.send("POST", "/api/v1/doses", service.token(Role.OPERATOR), dose)
+                        .statusCode())
+                .isEqualTo(201);
     }
 
     @AfterAll
@@ -84,7 +94,7 @@ class EveryPageTest {
             Guest guest = new Guest(browser, service).comeIn("ana");
             for (String page : PAGES) {
                 guest.open(page);
-                if (page.startsWith("/points/") && !page.endsWith("/dose")) {
+                if (page.startsWith("/points/") && !page.contains("/dose")) {
                     guest.until(
                             "the course",
                             () -> guest.ask(
@@ -102,6 +112,21 @@ class EveryPageTest {
                         .isEmpty();
                 assertThat(guest.console()).as("console of " + page).isEmpty();
             }
+        }
+    }
+
+    @Test
+    void a_dose_is_marked_on_the_course_of_its_tank_and_said_in_words() {
+        try (Browser browser = Browser.phone()) {
+            Guest guest = new Guest(browser, service).comeIn("ana").open("/points/larval-3");
+
+            guest.waitFor("#history-words", "Doses, marked on the chart: 54 g on ");
+
+            guest.element(".charts").click();
+            assertThat(guest.console()).isEmpty();
+            guest.open("/points/larval-4");
+            guest.until("the course", () -> guest.has(".charts h3"));
+            assertThat(guest.text("#history-words")).doesNotContain("Doses");
         }
     }
 }

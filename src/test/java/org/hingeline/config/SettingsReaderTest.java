@@ -160,6 +160,8 @@ class SettingsReaderTest {
                 "water: {constants: best}|water.constants: \"best\" is not accepted; give lueker2000 or millero2006 or waters2014",
                 "dosing: {phTotalMax: 9.5}|dosing.phTotalMax: 9.5 is not accepted; give a number from 7.5 to 9",
                 "dosing: {phTotalMax: .nan}|dosing.phTotalMax: \"NaN\" is not accepted; give a number from 7.5 to 9",
+                "dosing: {maxGramsPerTankAndDay: -1}|dosing.maxGramsPerTankAndDay: -1 is not accepted; give a number from 0 to 1000000",
+                "dosing: {secondPersonAboveG: off}|dosing.secondPersonAboveG: \"off\" is not accepted; give a number from 0 to 1000000",
                 "dosing: {phPerHourMax: 0}|dosing.phPerHourMax: 0 is not accepted; give a number from 0.01 to 1",
                 "accounts: {minPasswordLength: 4}|accounts.minPasswordLength: 4 is not accepted; give a whole number from 8 to 100",
                 "accounts: {lockAfterFailures: 1}|accounts.lockAfterFailures: 1 is not accepted; give a whole number from 2 to 100",

@@ -11,6 +11,7 @@ import java.util.Optional;
 import java.util.function.Function;
 import org.hingeline.monitor.AlertBook;
 import org.hingeline.monitor.Books;
+import org.hingeline.monitor.DoseBook;
 import org.hingeline.monitor.JournalBook;
 import org.hingeline.monitor.KeyBook;
 import org.hingeline.monitor.LimitBook;
@@ -211,6 +212,11 @@ final class FakeStorage implements Storage, Books, OutboxBook, JournalBook {
 
     @Override
     public WaterBook water() {
+        throw new UnsupportedOperationException();
+    }
+
+    @Override
+    public DoseBook doses() {
         throw new UnsupportedOperationException();
     }
 

@@ -59,6 +59,8 @@ final class Hatchery {
     Accounts accounts;
     StatusBoard board;
     DoseDesk doses;
+    DoseRecords doseRecords;
+    DoseHistory doseHistory;
     ReadingIntake intake;
     Housekeeping housekeeping;
     Site site;
@@ -96,6 +98,9 @@ final class Hatchery {
         place = new PlaceDesk(over, clock, limits, silent);
         board = new StatusBoard(over, clock);
         doses = new DoseDesk(board, new DoseWaters(over, water), new DoseDesk.Defaults(8.4, 4.5, 0.15, 420, 50));
+        doseRecords =
+                new DoseRecords(over, clock, new DoseRecords.Rules(2000, 500, Duration.ofMinutes(30)), water, silent);
+        doseHistory = new DoseHistory(over, clock, water);
         SecureRandom random = new SecureRandom();
         accounts = new Accounts(
                 over,

@@ -11,6 +11,7 @@ abstract class StoreContractTest
                 WaterContract,
                 LimitContract,
                 AlertContract,
+                DoseContract,
                 OutboxContract,
                 JournalContract,
                 TransactionContract,

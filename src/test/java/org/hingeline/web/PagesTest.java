@@ -10,6 +10,7 @@ import java.util.Map;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
+import org.hingeline.web.view.DoseRow;
 import org.hingeline.web.view.DoseView.Outcome;
 import org.hingeline.web.view.ErrorView;
 import org.hingeline.web.view.Form;
@@ -18,6 +19,7 @@ import org.hingeline.web.view.LayoutView.Role;
 import org.hingeline.web.view.PathPoint;
 import org.hingeline.web.view.Place;
 import org.hingeline.web.view.PointView;
+import org.hingeline.web.view.RecordView;
 import org.hingeline.web.view.SetupView;
 import org.hingeline.web.view.SignInView;
 import org.hingeline.web.view.SiteChoice;
@@ -156,6 +158,18 @@ class PagesTest {
         List<String> pages = List.of(
                 page("status", layout, new StatusView(null, List.of(point))),
                 page("point", layout, inner),
+                page("point", layout, dosed(inner, hostile)),
+                page(
+                        "record",
+                        layout,
+                        new RecordView(
+                                hostile,
+                                hostile,
+                                hostile,
+                                hostile,
+                                hostile,
+                                List.of(),
+                                new Form(Map.of("lot", hostile, "key", hostile), Map.of("lot", hostile)))),
                 page("calculator", layout, CalculatorSamples.ofPoint(hostile, NOW)),
                 page(
                         "setup",
@@ -222,6 +236,33 @@ class PagesTest {
                                 .getResource(file.replaceFirst("^/webjars", "/META-INF/resources/webjars")
                                         .replaceFirst("\\?.*", "")))
                         .isNotNull());
+    }
+
+    private static PointView dosed(PointView point, String words) {
+        return new PointView(
+                point.point(),
+                point.state(),
+                point.inputs(),
+                point.cautions(),
+                point.lowest(),
+                point.lowestAt(),
+                point.limits(),
+                point.added(),
+                null,
+                List.of(new DoseRow(
+                        words,
+                        SAMPLES.ago(5),
+                        words,
+                        words,
+                        words,
+                        words,
+                        true,
+                        words,
+                        words,
+                        words,
+                        true,
+                        Form.of(Map.of("lot", words)))),
+                words);
     }
 
     private static PointView unknownPoint() {

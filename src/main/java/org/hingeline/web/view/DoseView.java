@@ -15,6 +15,7 @@ import org.jspecify.annotations.Nullable;
  * @param form fields targetOmega, volume, volumeUnit (UCUM), hydration (anhydrous, monohydrate, decahydrate), assayPercent, stockGramsPerLitre,
  *     phTotalMax, omegaAragoniteMax, phPerHourMax
  * @param result what was worked out; null before the form is sent
+ * @param record the form that records what was put in; null without a plan
  */
 public record DoseView(
         String pointCode,
@@ -22,7 +23,14 @@ public record DoseView(
         String waterNow,
         String waterAt,
         Form form,
-        @Nullable Result result) {
+        @Nullable Result result,
+        @Nullable RecordView record) {
+
+    /** With nothing to record. */
+    public DoseView(
+            String pointCode, String pointName, String waterNow, String waterAt, Form form, @Nullable Result result) {
+        this(pointCode, pointName, waterNow, waterAt, form, result, null);
+    }
 
     /** How the planning came out. */
     public enum Outcome {

@@ -15,6 +15,8 @@ import org.jspecify.annotations.Nullable;
  * @param limits limits of this point
  * @param added the form for another limit
  * @param undo the change just made, if it can be put back
+ * @param doses what was put in of late, newest first
+ * @param volume what its doses say of its volume: "Three doses came out short: the tank seems to hold ..."; may be empty
  */
 public record PointView(
         PathPoint point,
@@ -25,7 +27,9 @@ public record PointView(
         String lowestAt,
         List<LimitRow> limits,
         Form added,
-        @Nullable Undo undo) {
+        @Nullable Undo undo,
+        List<DoseRow> doses,
+        String volume) {
 
     /** A quantity of the state: name, value, standard uncertainty (may be empty) and unit (may be empty). */
     public record StateLine(String name, String value, String plusMinus, String unit) {}
@@ -46,5 +50,20 @@ public record PointView(
         inputs = List.copyOf(inputs);
         cautions = List.copyOf(cautions);
         limits = List.copyOf(limits);
+        doses = List.copyOf(doses);
+    }
+
+    /** A point where nothing was dosed. */
+    public PointView(
+            PathPoint point,
+            List<StateLine> state,
+            List<InputLine> inputs,
+            List<String> cautions,
+            String lowest,
+            String lowestAt,
+            List<LimitRow> limits,
+            Form added,
+            @Nullable Undo undo) {
+        this(point, state, inputs, cautions, lowest, lowestAt, limits, added, undo, List.of(), "");
     }
 }
