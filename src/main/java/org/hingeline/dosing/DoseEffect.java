@@ -64,10 +64,12 @@ public record DoseEffect(CarbonateState before, CarbonateState after, StateUncer
 
     private static Optional<CarbonateState> dosed(CarbonateState before, Given given) {
         double alkalinity = given.alkalinity(before.densityKgM3());
-        double carbon = alkalinity * given.agent().dicPerMol() / given.agent().alkalinityPerMol();
+        double mol = alkalinity / given.agent().alkalinityPerMol();
+        double carbon = mol * given.agent().dicPerMol();
+        double calcium = mol * given.agent().calciumPerMol();
         return solved(CarbonateSystem.solve(
                 before.constants(),
-                before.conditions(),
+                calcium == 0 ? before.conditions() : before.conditions().withCalcium(before.calcium() + calcium),
                 new AlkalinityAndDic(before.totalAlkalinity() + alkalinity, before.dic() + carbon)));
     }
 
