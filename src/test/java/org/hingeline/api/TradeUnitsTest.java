@@ -152,6 +152,14 @@ class TradeUnitsTest {
         assertThat(dose(session, "much", "L", 422)).contains("d-volume-error", "is not a number");
     }
 
+    @Test
+    void a_volume_that_may_be_four_thousand_or_four_litres_is_asked_about() {
+        String session = service.signIn("mo", List.of(site), Role.OPERATOR);
+
+        assertThat(dose(session, "4,000", "L", 422)).contains("d-volume-error", "can be read in two ways; write 4000 or 4");
+        assertThat(dose(session, "4 000,0", "L", 200)).doesNotContain("d-volume-error");
+    }
+
     private String dose(String session, String volume, String unit, int status) {
         HttpRequest.Builder page = HttpRequest.newBuilder(service.address().resolve("/points/tank/dose"))
                 .header("Cookie", "hingeline_session=" + session);
