@@ -3,10 +3,13 @@ package org.hingeline.web;
 import io.javalin.config.RoutesConfig;
 import io.javalin.http.Context;
 import java.io.ByteArrayOutputStream;
+import java.io.IOException;
+import java.io.UncheckedIOException;
 import java.time.Duration;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.concurrent.Semaphore;
 import java.util.regex.Pattern;
 import org.hingeline.monitor.CalculatedWater;
 import org.hingeline.monitor.WaterCalculator;
@@ -20,11 +23,17 @@ import tools.jackson.core.JsonGenerator;
 final class SeawaterRoutes {
     private static final Pattern NUMBER = Pattern.compile("[+-]?\\d{1,30}(\\.\\d{1,30})?([eE][+-]?\\d{1,3})?");
 
+    private static final int MOST_BODIES = 8;
+    private static final long MOST_THAT_PASSES = 32L * 1024 * 1024;
+
     private final WaterCalculator calculator;
     private final Meters meters;
 
     /** A long list with everything asked for needs some tens of MB while it is worked on. */
     private final Turns lists = new Turns(2, 6, Duration.ofSeconds(10));
+
+    /** Lists held in memory while they arrive and wait. */
+    private final Semaphore bodies = new Semaphore(MOST_BODIES);
 
     SeawaterRoutes(WaterCalculator calculator, Meters meters) {
         this.calculator = calculator;
@@ -48,7 +57,19 @@ final class SeawaterRoutes {
     }
 
     private void states(Context ctx) {
-        byte[] body = Json.bytes(ctx); // before a place is taken: a slow line holds up nobody else
+        if (!bodies.tryAcquire()) {
+            letTheBodyPass(ctx);
+            throw busy();
+        }
+        try {
+            states(ctx, Json.bytes(ctx));
+        } finally {
+            bodies.release();
+        }
+    }
+
+    /** A place is taken only when the whole body is there: a slow line holds up nobody else. */
+    private void states(Context ctx, byte[] body) {
         boolean answered = lists.run(() -> {
             long began = System.nanoTime();
             WaterJson.Waters asked = WaterJson.list(body);
@@ -58,7 +79,20 @@ final class SeawaterRoutes {
             meters.states(asked.each().size(), parseNs, answer.computeNs(), answer.writeNs());
         });
         if (!answered) {
-            throw new ProblemException(503, "Busy", "other lists are being worked on; send it again in a few seconds");
+            throw busy();
+        }
+    }
+
+    private static ProblemException busy() {
+        return new ProblemException(503, "Busy", "other lists are being worked on; send it again in a few seconds");
+    }
+
+    /** Many clients hear an answer only after they have sent all. */
+    private static void letTheBodyPass(Context ctx) {
+        try {
+            ctx.bodyInputStream().skip(MOST_THAT_PASSES);
+        } catch (IOException e) {
+            throw new UncheckedIOException(e);
         }
     }
 

@@ -156,7 +156,8 @@ class TradeUnitsTest {
     void a_volume_that_may_be_four_thousand_or_four_litres_is_asked_about() {
         String session = service.signIn("mo", List.of(site), Role.OPERATOR);
 
-        assertThat(dose(session, "4,000", "L", 422)).contains("d-volume-error", "can be read in two ways; write 4000 or 4");
+        assertThat(dose(session, "4,000", "L", 422))
+                .contains("d-volume-error", "can be read in two ways; write 4000 or 4");
         assertThat(dose(session, "4 000,0", "L", 200)).doesNotContain("d-volume-error");
     }
 

@@ -3,7 +3,7 @@ package org.hingeline.seawater;
 import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
 
-/** The worked water of {@code dosed-waters.csv} with alkalinity and carbon added to it, closed to the air. */
+/** The worked water of {@code dosing.csv} with alkalinity and carbon added to it, closed to the air. */
 final class DosedChemistry {
     private static final CarbonateState START = CarbonateSystem.solve(
                     Conditions.of(22, 30), new AlkalinityAndPco2(2078e-6, 900e-6))
@@ -13,6 +13,9 @@ final class DosedChemistry {
 
     /** After an agent that brings that much alkalinity, µmol/kg. */
     static CarbonateState with(String agent, double addedAlkalinity) {
+        if (agent.equals("aeration")) {
+            return Treatment.equilibrated(START, 420e-6).orElseThrow();
+        }
         double added = addedAlkalinity * 1e-6;
         return CarbonateSystem.solve(
                         START.conditions(),
@@ -21,26 +24,11 @@ final class DosedChemistry {
                 .orElseThrow();
     }
 
-    /** Alkalinity to add for a saturation of aragonite, µmol/kg, by bisection. */
-    static double alkalinityFor(String agent, double omegaAragonite) {
-        double low = 0;
-        double high = 10_000;
-        for (int i = 0; i < 60; i++) {
-            double middle = (low + high) / 2;
-            if (with(agent, middle).omegaAragonite() < omegaAragonite) {
-                low = middle;
-            } else {
-                high = middle;
-            }
-        }
-        return high;
-    }
-
     private static double dicPerAlkalinity(String agent) {
         return switch (agent) {
-            case "sodium carbonate" -> 0.5;
-            case "sodium bicarbonate" -> 1;
-            case "sodium hydroxide" -> 0;
+            case "sodium-carbonate" -> 0.5;
+            case "sodium-bicarbonate" -> 1;
+            case "sodium-hydroxide" -> 0;
             default -> throw new IllegalArgumentException("no such agent: " + agent);
         };
     }

@@ -26,8 +26,7 @@ final class PublishedValues {
         read(all, "scale-confusion", PublishedValues::scaleConfusion);
         read(all, "orr-2018", PublishedValues::orr2018);
         read(all, "uncertainty", PublishedValues::uncertainty);
-        read(all, "dosing-sodium-carbonate", PublishedValues::sodiumCarbonate);
-        read(all, "dosed-waters", PublishedValues::dosedWater);
+        read(all, "dosing", PublishedValues::dosedWater);
         read(all, "dosing-agents", PublishedValues::dosingAgent);
         read(all, "salinity-check-values", PublishedValues::salinity);
         read(all, "unit-relations", PublishedValues::unitRelation);
@@ -164,24 +163,12 @@ final class PublishedValues {
                 100 * part / state.omegaAragonite());
     }
 
-    private static Value sodiumCarbonate(Map<String, String> row) {
-        double added = number(row, "addedAlkalinity");
-        return value(
-                row,
-                row.get("quantity") + ", sodium carbonate, TA +" + row.get("addedAlkalinity"),
-                Quantities.of(DosedChemistry.with("sodium carbonate", added), row.get("quantity")));
-    }
-
     private static Value dosedWater(Map<String, String> row) {
         String agent = row.get("agent");
-        boolean given = row.get("toOmega").isEmpty();
-        double added =
-                given ? number(row, "addedAlkalinity") : DosedChemistry.alkalinityFor(agent, number(row, "toOmega"));
-        String to = given ? "TA +" + row.get("addedAlkalinity") : "to omegaAragonite " + row.get("toOmega");
-        double ours = row.get("quantity").equals("addedAlkalinity")
-                ? added
-                : Quantities.of(DosedChemistry.with(agent, added), row.get("quantity"));
-        return value(row, row.get("quantity") + ", " + agent + ", " + to, ours);
+        return value(
+                row,
+                row.get("quantity") + ", " + agent + ", TA +" + row.get("addedAlkalinity"),
+                Quantities.of(DosedChemistry.with(agent, number(row, "addedAlkalinity")), row.get("quantity")));
     }
 
     private static Value dosingAgent(Map<String, String> row) {
