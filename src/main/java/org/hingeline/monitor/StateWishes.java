@@ -72,7 +72,7 @@ public final class StateWishes {
                     null,
                     null,
                     u.temperatureC(),
-                    u.salinityInAll(),
+                    u.salinityInAll(), // a wish has no word for a salinity that moves with the thermometer
                     null,
                     input(state, Quantity.CALCIUM).isPresent() ? (Double) (u.calcium() * 1e3) : null);
         }
