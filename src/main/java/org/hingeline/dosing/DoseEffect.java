@@ -6,7 +6,6 @@ import org.hingeline.seawater.CarbonateState;
 import org.hingeline.seawater.CarbonateSystem;
 import org.hingeline.seawater.ConstantUncertainty;
 import org.hingeline.seawater.InputUncertainty;
-import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
 import org.hingeline.seawater.KnownPair.PhAndAlkalinity;
 import org.hingeline.seawater.StateUncertainty;
 import org.hingeline.seawater.Uncertainty;
@@ -24,15 +23,19 @@ public record DoseEffect(CarbonateState before, CarbonateState after, StateUncer
     /**
      * A mass given.
      *
-     * @param assayPercent g of that form in 100 g of what was weighed
+     * @param product what was weighed
      * @param massG as weighed, g
      * @param volumeL water that it went into, L
      */
-    public record Given(Agent agent, Agent.Form form, double assayPercent, double massG, double volumeL) {
+    public record Given(Product product, double massG, double volumeL) {
         /** Alkalinity it adds to a water of that density in kg/m³, mol/kg-seawater. */
         public double alkalinity(double densityKgM3) {
-            double mol = massG * assayPercent / 100 / form.gramsPerMol();
-            return mol * agent.alkalinityPerMol() / (volumeL / 1000 * densityKgM3);
+            return added(densityKgM3).alkalinity();
+        }
+
+        private AddedMatter added(double densityKgM3) {
+            double mol = massG * product.molPerGram() / (volumeL / 1000 * densityKgM3);
+            return AddedMatter.of(product.agent(), mol);
         }
     }
 
@@ -56,21 +59,11 @@ public record DoseEffect(CarbonateState before, CarbonateState after, StateUncer
                         measured.constants(),
                         measured.conditions(),
                         new PhAndAlkalinity(known.ph(), known.totalAlkalinity() + addedSince)));
-        return before.flatMap(water -> dosed(water, given).map(after -> {
-            Uncertainty ofBefore = Uncertainty.ofMeasured(water, inputs, ConstantUncertainty.ORR_2018);
-            return new DoseEffect(water, after, ofBefore.ofChangeTo(ofBefore.carriedTo(after)));
-        }));
-    }
-
-    private static Optional<CarbonateState> dosed(CarbonateState before, Given given) {
-        double alkalinity = given.alkalinity(before.densityKgM3());
-        double mol = alkalinity / given.agent().alkalinityPerMol();
-        double carbon = mol * given.agent().dicPerMol();
-        double calcium = mol * given.agent().calciumPerMol();
-        return solved(CarbonateSystem.solve(
-                before.constants(),
-                calcium == 0 ? before.conditions() : before.conditions().withCalcium(before.calcium() + calcium),
-                new AlkalinityAndDic(before.totalAlkalinity() + alkalinity, before.dic() + carbon)));
+        return before.flatMap(water -> solved(given.added(water.densityKgM3()).to(water))
+                .map(after -> {
+                    Uncertainty ofBefore = Uncertainty.ofMeasured(water, inputs, ConstantUncertainty.ORR_2018);
+                    return new DoseEffect(water, after, ofBefore.ofChangeTo(ofBefore.carriedTo(after)));
+                }));
     }
 
     private static Optional<CarbonateState> solved(CarbonateResult result) {

@@ -2,11 +2,6 @@ package org.hingeline.dosing;
 
 import java.util.List;
 import org.hingeline.seawater.CarbonateState;
-import org.hingeline.seawater.CarbonateSystem;
-import org.hingeline.seawater.Conditions;
-import org.hingeline.seawater.KnownPair;
-import org.hingeline.seawater.KnownPair.AlkalinityAndDic;
-import org.hingeline.seawater.KnownPair.AlkalinityAndPco2;
 
 /**
  * A body of water and what one product, or two in a fixed proportion, make of it, closed to the air: alkalinity, inorganic
@@ -92,35 +87,18 @@ final class DosedWater {
     }
 
     private CarbonateState closed(double[] mols) {
-        double dic = before.dic();
-        for (int i = 0; i < mols.length; i++) {
-            dic += mols[i] * products.get(i).agent().dicPerMol();
-        }
-        return solve(mols, new AlkalinityAndDic(alkalinity(mols), dic));
+        return added(mols).to(before).orElseThrow();
     }
 
     private CarbonateState aerated(double[] mols) {
-        return solve(mols, new AlkalinityAndPco2(alkalinity(mols), aerationPco2Atm));
+        return added(mols).toAerated(before, aerationPco2Atm).orElseThrow();
     }
 
-    private double alkalinity(double[] mols) {
-        double alkalinity = before.totalAlkalinity();
+    private AddedMatter added(double[] mols) {
+        AddedMatter all = AddedMatter.NOTHING;
         for (int i = 0; i < mols.length; i++) {
-            alkalinity += mols[i] * products.get(i).agent().alkalinityPerMol();
+            all = all.and(AddedMatter.of(products.get(i).agent(), mols[i]));
         }
-        return alkalinity;
-    }
-
-    private CarbonateState solve(double[] mols, KnownPair known) {
-        double calcium = 0;
-        for (int i = 0; i < mols.length; i++) {
-            calcium += mols[i] * products.get(i).agent().calciumPerMol();
-        }
-        Conditions conditions = before.conditions();
-        return CarbonateSystem.solve(
-                        before.constants(),
-                        calcium == 0 ? conditions : conditions.withCalcium(before.calcium() + calcium),
-                        known)
-                .orElseThrow();
+        return all;
     }
 }

@@ -8,6 +8,7 @@ import java.util.Objects;
 import java.util.Optional;
 import org.hingeline.dosing.Agent;
 import org.hingeline.dosing.DoseEffect;
+import org.hingeline.dosing.Product;
 import org.hingeline.hatchery.Dose;
 import org.hingeline.hatchery.Point;
 import org.hingeline.hatchery.PointKind;
@@ -62,7 +63,7 @@ final class DoseEntryCheck {
         Double volumeL = volume(entry.volumeL(), point);
         DoseEffect.Given effect = agent == null || form == null || volumeL == null
                 ? null
-                : new DoseEffect.Given(agent, form, assay, massG, volumeL);
+                : new DoseEffect.Given(new Product(agent, form, assay), massG, volumeL);
         if (effect != null && effect.alkalinity(SEAWATER_KG_M3) > IMPLAUSIBLE) {
             faults.add(
                     "massG",

@@ -5,8 +5,6 @@ import java.time.Instant;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.Function;
-import java.util.stream.Collectors;
 import org.hingeline.dosing.DoseEffect;
 import org.hingeline.hatchery.Dose;
 import org.hingeline.hatchery.Point;
@@ -39,8 +37,7 @@ final class DoseForetelling {
             return null;
         }
         WaterState state = before.get();
-        Map<String, Sensor> sensors = books.place().sensorsOf(point.id()).stream()
-                .collect(Collectors.toMap(Sensor::code, Function.identity()));
+        Map<String, Sensor> sensors = WaterAssessor.Inputs.sensors(books, point.id());
         if (!state.inputs().stream().allMatch(input -> sensors.containsKey(input.sensor()))) {
             return null;
         }

@@ -8,6 +8,7 @@ import java.util.Objects;
 import java.util.Optional;
 import org.hingeline.dosing.Agent;
 import org.hingeline.dosing.DoseEffect;
+import org.hingeline.dosing.Product;
 import org.hingeline.hatchery.Dose;
 import org.hingeline.hatchery.Dose.Standing;
 import org.hingeline.hatchery.Point;
@@ -251,12 +252,8 @@ public final class DoseRecords {
         if (volumeL == null || form.isEmpty()) {
             return null;
         }
-        DoseEffect.Given given = new DoseEffect.Given(
-                agent.get(),
-                form.get(),
-                dose.given().assayPercent(),
-                dose.given().massG(),
-                volumeL);
+        Product product = new Product(agent.get(), form.get(), dose.given().assayPercent());
+        DoseEffect.Given given = new DoseEffect.Given(product, dose.given().massG(), volumeL);
         return foretelling.of(books, point, at, given, dose.id());
     }
 

@@ -7,8 +7,6 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.Function;
-import java.util.stream.Collectors;
 import org.hingeline.dosing.InputNote;
 import org.hingeline.dosing.InputNote.Problem;
 import org.hingeline.hatchery.Sensor;
@@ -74,10 +72,8 @@ public final class DoseWaters {
         if (!state.missing().isEmpty()) {
             return new Water(null, InputUncertainty.DEFAULTS, notes);
         }
-        Map<String, Sensor> sensors = storage
-                .read(books -> books.place().sensorsOf(status.point().id()))
-                .stream()
-                .collect(Collectors.toMap(Sensor::code, Function.identity()));
+        Map<String, Sensor> sensors = storage.read(
+                books -> WaterAssessor.Inputs.sensors(books, status.point().id()));
         WaterAssessor.Inputs inputs = WaterAssessor.Inputs.of(state, sensors);
         return new Water(inputs.solve(rules), inputs.uncertainty(), notes);
     }

@@ -3,8 +3,6 @@ package org.hingeline.monitor;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.Function;
-import java.util.stream.Collectors;
 import org.hingeline.hatchery.Sensor;
 import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.WaterState.InputUsed;
@@ -29,8 +27,7 @@ public final class StateWishes {
 
     /** As far as the state has inputs and their sensors are registered still; what is not known is absent. */
     public WaterWish of(WaterState state) {
-        Map<String, Sensor> sensors = storage.read(books -> books.place().sensorsOf(state.pointId())).stream()
-                .collect(Collectors.toMap(Sensor::code, Function.identity()));
+        Map<String, Sensor> sensors = storage.read(books -> WaterAssessor.Inputs.sensors(books, state.pointId()));
         return WaterWish.builder()
                 .temperatureC(value(state, Quantity.TEMPERATURE))
                 .salinity(value(state, Quantity.SALINITY))

@@ -7,6 +7,8 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.Function;
+import java.util.stream.Collectors;
 import org.hingeline.hatchery.Sensor;
 import org.hingeline.measure.Quantity;
 import org.hingeline.monitor.WaterState.InputUsed;
@@ -100,6 +102,12 @@ final class WaterAssessor {
             double totalAlkalinityUmolKg,
             @Nullable Double calciumMmolKg,
             InputUncertainty uncertainty) {
+
+        /** The sensors of a point, by the code that a state names them by. */
+        static Map<String, Sensor> sensors(Books books, long pointId) {
+            return books.place().sensorsOf(pointId).stream()
+                    .collect(Collectors.toMap(Sensor::code, Function.identity()));
+        }
 
         /** @throws IllegalStateException when the state lacks an input */
         static Inputs of(WaterState state, Map<String, Sensor> sensors) {

@@ -5,9 +5,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import java.nio.file.Path;
 import java.time.Clock;
 import java.time.Instant;
-import org.hingeline.RunningService;
 import org.hingeline.monitor.Role;
-import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -16,17 +14,10 @@ import org.openqa.selenium.Keys;
 import org.openqa.selenium.support.ui.Select;
 
 /** A person with a phone asks how a number came about, tries another, and brings numbers of their own. */
-class CalculatorOnAPhoneTest {
-    @TempDir
-    static Path data;
-
-    private static RunningService service;
-    private static Browser phone;
-    private static Guest guest;
-
+class CalculatorOnAPhoneTest extends OnAPhone {
     @BeforeAll
-    static void open() {
-        service = RunningService.start(data, Clock.systemUTC());
+    static void open(@TempDir Path data) {
+        open(data, Clock.systemUTC());
         service.addPerson(service.site(), "vic", "Vic Moss", Role.VIEWER);
         Instant now = Instant.now();
         StringBuilder rows = new StringBuilder();
@@ -47,18 +38,6 @@ class CalculatorOnAPhoneTest {
         }
         assertThat(service.postReadings("{\"readings\":[" + rows + "]}").statusCode())
                 .isEqualTo(200);
-        phone = Browser.phone();
-        guest = new Guest(phone, service);
-    }
-
-    @AfterAll
-    static void close() {
-        if (phone != null) {
-            phone.close();
-        }
-        if (service != null) {
-            service.close();
-        }
     }
 
     @Test

@@ -6,44 +6,23 @@ import java.nio.file.Path;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.Locale;
-import org.hingeline.RunningService;
 import org.hingeline.SteppedClock;
 import org.hingeline.monitor.Role;
-import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.openqa.selenium.By;
 
 /** With a phone beside the tank: from an open alert to a recorded dose, taken back, confirmed by another, corrected. */
-class DoseRecordTest {
+class DoseRecordTest extends OnAPhone {
     private static final SteppedClock CLOCK = new SteppedClock();
 
-    @TempDir
-    static Path data;
-
-    private static RunningService service;
-    private static Browser phone;
-    private static Guest guest;
-
     @BeforeAll
-    static void open() {
-        service = RunningService.start(data, CLOCK);
+    static void open(@TempDir Path data) {
+        open(data, CLOCK);
         service.addPerson(service.site(), "vic", "Vic Moss", Role.VIEWER);
         service.addPerson(service.site(), "lin", "Lin Sato", Role.OPERATOR);
         service.addPerson(service.site(), "rui", "Rui Paz", Role.OPERATOR);
-        phone = Browser.phone();
-        guest = new Guest(phone, service);
-    }
-
-    @AfterAll
-    static void close() {
-        if (phone != null) {
-            phone.close();
-        }
-        if (service != null) {
-            service.close();
-        }
     }
 
     @Test

@@ -10,7 +10,6 @@ import org.hingeline.RunningService;
 import org.hingeline.SteppedClock;
 import org.hingeline.hatchery.Site;
 import org.hingeline.monitor.Role;
-import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -18,7 +17,7 @@ import org.openqa.selenium.Cookie;
 import org.openqa.selenium.Keys;
 
 /** What a person does with a phone at night: sign in, see what is wrong, take it on, change a limit, work out a dose. */
-class NightShiftTest {
+class NightShiftTest extends OnAPhone {
     /** Ω about 1.2 and 2.9 in the water of {@link #post}. */
     private static final double POOR_PH = 7.6;
 
@@ -26,30 +25,11 @@ class NightShiftTest {
 
     private static final SteppedClock CLOCK = new SteppedClock();
 
-    @TempDir
-    static Path data;
-
-    private static RunningService service;
-    private static Browser phone;
-    private static Guest guest;
-
     @BeforeAll
-    static void open() {
-        service = RunningService.start(data, CLOCK);
+    static void open(@TempDir Path data) {
+        open(data, CLOCK);
         service.addPerson(service.site(), "vic", "Vic Moss", Role.VIEWER);
         service.addPerson(service.site(), "lin", "Lin Sato", Role.OPERATOR);
-        phone = Browser.phone();
-        guest = new Guest(phone, service);
-    }
-
-    @AfterAll
-    static void close() {
-        if (phone != null) {
-            phone.close();
-        }
-        if (service != null) {
-            service.close();
-        }
     }
 
     @Test

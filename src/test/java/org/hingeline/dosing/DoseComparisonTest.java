@@ -33,10 +33,7 @@ class DoseComparisonTest {
     private static final double MASS_G = 300e-6 / 2 * 105.99 * 4 * BEFORE.densityKgM3();
 
     private static final DoseEffect EFFECT = DoseEffect.of(
-                    BEFORE,
-                    Waters.UNCERTAINTY,
-                    0,
-                    new DoseEffect.Given(SODA, SODA.forms().get(0), 100, MASS_G, 4000))
+                    BEFORE, Waters.UNCERTAINTY, 0, new DoseEffect.Given(Product.pure(SODA), MASS_G, 4000))
             .orElseThrow();
 
     @Test
@@ -58,10 +55,7 @@ class DoseComparisonTest {
     @Test
     void alkalinity_that_older_doses_added_counts_in_the_water_before() {
         DoseEffect second = DoseEffect.of(
-                        BEFORE,
-                        Waters.UNCERTAINTY,
-                        300e-6,
-                        new DoseEffect.Given(SODA, SODA.forms().get(0), 100, MASS_G, 4000))
+                        BEFORE, Waters.UNCERTAINTY, 300e-6, new DoseEffect.Given(Product.pure(SODA), MASS_G, 4000))
                 .orElseThrow();
 
         assertThat(second.before().totalAlkalinity()).isCloseTo(2378e-6, within(1e-12));
